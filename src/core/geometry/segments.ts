@@ -1,0 +1,130 @@
+/**
+ * Exact curve geometry as columns: lines, cubic Béziers and elliptical arcs.
+ *
+ * Every segment has its start and end stored as given, so that joints are equal bit for bit:
+ * trigonometry never decides whether two curves meet.
+ *
+ * Layout of `data` from `offset[i]`, in the unit of the caller (mm once a drawing is read):
+ *
+ * - every kind: `x0 y0 x1 y1` (start, end)
+ * - CUBIC adds `ax ay bx by` (the two control points)
+ * - ARC adds `cx cy ux uy vx vy theta0 sweep`:
+ *   P(θ) = c + u·cos θ + v·sin θ with θ = theta0 + t·sweep, t in [0, 1], angles in radians.
+ *   u and v are conjugate half-diameters, so an affine map of the arc is the map of c, u and v.
+ */
+export interface Segments {
+  readonly count: number;
+  readonly kind: Uint8Array;
+  readonly offset: Uint32Array;
+  readonly data: Float64Array;
+}
+
+export const LINE = 0;
+export const CUBIC = 1;
+export const ARC = 2;
+
+/** Numbers that each kind takes in `data`, indexed by kind. */
+export const SEGMENT_SIZE: readonly number[] = [4, 8, 12];
+
+/**
+ * A range of segments per item: item i owns segments `first[i]` up to, not including, `first[i + 1]`.
+ * Consecutive segments of an item join exactly.
+ */
+export interface Chains {
+  readonly segments: Segments;
+  readonly count: number;
+  readonly first: Uint32Array;
+}
+
+/** Collects segments one by one; columns grow by doubling, so n segments cost O(n). */
+export class SegmentBuilder {
+  count = 0;
+  private used = 0;
+  private kind = new Uint8Array(64);
+  private offset = new Uint32Array(64);
+  private data = new Float64Array(512);
+
+  line(x0: number, y0: number, x1: number, y1: number): void {
+    const o = this.begin(LINE, x0, y0, x1, y1);
+    this.used = o + 4;
+  }
+
+  cubic(
+    x0: number,
+    y0: number,
+    ax: number,
+    ay: number,
+    bx: number,
+    by: number,
+    x1: number,
+    y1: number,
+  ): void {
+    const o = this.begin(CUBIC, x0, y0, x1, y1);
+    const d = this.data;
+    d[o + 4] = ax;
+    d[o + 5] = ay;
+    d[o + 6] = bx;
+    d[o + 7] = by;
+    this.used = o + 8;
+  }
+
+  arc(
+    x0: number,
+    y0: number,
+    x1: number,
+    y1: number,
+    cx: number,
+    cy: number,
+    ux: number,
+    uy: number,
+    vx: number,
+    vy: number,
+    theta0: number,
+    sweep: number,
+  ): void {
+    const o = this.begin(ARC, x0, y0, x1, y1);
+    const d = this.data;
+    d[o + 4] = cx;
+    d[o + 5] = cy;
+    d[o + 6] = ux;
+    d[o + 7] = uy;
+    d[o + 8] = vx;
+    d[o + 9] = vy;
+    d[o + 10] = theta0;
+    d[o + 11] = sweep;
+    this.used = o + 12;
+  }
+
+  /** The columns so far, copied to their exact size; the builder may go on. */
+  finish(): Segments {
+    return {
+      count: this.count,
+      kind: this.kind.slice(0, this.count),
+      offset: this.offset.slice(0, this.count),
+      data: this.data.slice(0, this.used),
+    };
+  }
+
+  private begin(kind: number, x0: number, y0: number, x1: number, y1: number): number {
+    const i = this.count++;
+    const o = this.used;
+    if (i === this.kind.length) {
+      this.kind = grown(this.kind, new Uint8Array(2 * i));
+      this.offset = grown(this.offset, new Uint32Array(2 * i));
+    }
+    if (o + 12 > this.data.length) this.data = grown(this.data, new Float64Array(2 * this.data.length));
+    this.kind[i] = kind;
+    this.offset[i] = o;
+    const d = this.data;
+    d[o] = x0;
+    d[o + 1] = y0;
+    d[o + 2] = x1;
+    d[o + 3] = y1;
+    return o;
+  }
+}
+
+function grown<T extends Uint8Array | Uint32Array | Float64Array>(from: T, to: T): T {
+  to.set(from);
+  return to;
+}
