@@ -20,12 +20,12 @@ export function planPens(drawing: Drawing, rule: PenRule): PenPlan {
   const penOfKey = new Map<number, number>();
   const penOfStroke = new Uint32Array(strokes.count);
   for (let s = 0; s < strokes.count; s++) {
-    const key = rule === 'colour' ? strokes.colour[s]! : rule === 'layer' ? strokes.layer[s]! : 0;
+    const key = rule === 'colour' ? strokes.colour[s] : rule === 'layer' ? strokes.layer[s] : 0;
     let pen = penOfKey.get(key);
     if (pen === undefined) {
       pen = pens.length;
       penOfKey.set(key, pen);
-      const colour = colours[strokes.colour[s]!] ?? '#000000';
+      const colour = colours[strokes.colour[s]] ?? '#000000';
       const layer = key === NO_LAYER ? undefined : layers[key];
       const name =
         rule === 'colour'
