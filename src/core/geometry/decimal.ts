@@ -12,14 +12,14 @@ const POWER = Float64Array.from({ length: MOST_DECIMALS + 1 }, (_, i) => Number(
  * exact integer (not finite, or beyond 2^53 steps).
  */
 export function toSteps(value: number, decimals: number): number {
-  const steps = Math.round(value * POWER[decimals]!) + 0;
+  const steps = Math.round(value * POWER[decimals]) + 0;
   if (!Number.isSafeInteger(steps)) throw new RangeError(`cannot write ${value} with ${decimals} decimals`);
   return steps;
 }
 
 /** Steps of 10^-decimals as text, exactly. */
 export function formatSteps(steps: number, decimals: number): string {
-  const power = POWER[decimals]!;
+  const power = POWER[decimals];
   const size = Math.abs(steps);
   const whole = Math.floor(size / power);
   const rest = size - whole * power;
