@@ -1,0 +1,42 @@
+import { Command, CommanderError } from 'commander';
+import { version } from '../node/version.js';
+import { Ending, EXIT } from './exitCodes.js';
+import { tourCommand } from './tourCommand.js';
+
+/** Runs the command line; the process ends with the code returned. Never throws on a user's mistake. */
+export async function main(args: readonly string[]): Promise<number> {
+  // A reader that has seen enough (`| head`) is no error of ours.
+  process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+    if (error.code !== 'EPIPE') throw error;
+    process.exit(EXIT.done);
+  });
+  let code: number = EXIT.done;
+  const program = new Command('fewlift')
+    .description(
+      'Orders the strokes of an SVG line drawing for a pen plotter, cutter, engraver or small mill: every line once, few lifts, little travel, with a lower bound and an audit.',
+    )
+    .version(version(), '-V, --version', 'print the version')
+    .helpCommand('help [command]', 'show help and examples for a command')
+    .addHelpText('after', '\nStart here:\n  fewlift tour drawing.svg -o ordered.svg\n  fewlift help tour');
+  program.addCommand(
+    tourCommand((result) => {
+      code = result;
+    }),
+  );
+  for (const command of [program, ...program.commands]) {
+    command.exitOverride().configureOutput({ outputError: (text, write) => write(`fewlift: ${text}`) });
+  }
+  try {
+    await program.parseAsync(args, { from: 'user' });
+    return code;
+  } catch (error) {
+    if (error instanceof Ending) {
+      process.stderr.write(`fewlift: ${error.message}\n`);
+      return error.code;
+    }
+    if (error instanceof CommanderError) {
+      return error.exitCode === 0 || args.length === 0 ? EXIT.done : EXIT.wrongUsage;
+    }
+    throw error;
+  }
+}

@@ -1,0 +1,39 @@
+import { InvalidArgumentError } from 'commander';
+import { parseLengthMm } from '../core/index.js';
+
+/** A length of at least 0, with or without a unit; bare numbers are mm. */
+export function lengthMm(text: string): number {
+  const value = parseLengthMm(text);
+  if (value === null) throw new InvalidArgumentError('Give a length such as 0.1mm, 2in, 4pt or 0.05 (mm).');
+  if (!(value >= 0)) throw new InvalidArgumentError('A length here cannot be below 0.');
+  return value;
+}
+
+export function positiveLengthMm(text: string): number {
+  const value = lengthMm(text);
+  if (value === 0) throw new InvalidArgumentError('It must be above 0.');
+  return value;
+}
+
+/** Two lengths, `X,Y`. */
+export function placeMm(text: string): [number, number] {
+  const parts = text.split(',').map((part) => parseLengthMm(part.trim()));
+  const [x, y] = parts;
+  if (parts.length !== 2 || x === null || y === null || x === undefined || y === undefined) {
+    throw new InvalidArgumentError('Give two lengths from the top left of the page, such as 0,297.');
+  }
+  return [x, y];
+}
+
+export function wholeNumber(text: string): number {
+  if (!/^\d{1,9}$/.test(text)) throw new InvalidArgumentError('Give a whole number of at least 0.');
+  return Number(text);
+}
+
+export function numberAtLeastZero(text: string): number {
+  const value = Number(text);
+  if (text.trim() === '' || !(value >= 0) || value === Number.POSITIVE_INFINITY) {
+    throw new InvalidArgumentError('Give a number of at least 0.');
+  }
+  return value;
+}

@@ -1,0 +1,172 @@
+import { basename, extname, join } from 'node:path';
+import {
+  type Drawing,
+  findingLines,
+  type MachineProfile,
+  PEN_ON_Z,
+  type Report,
+  readDrawing,
+  reportOf,
+  reportTable,
+  type Settings,
+  sentence,
+  tour,
+  type Written,
+  writeAudited,
+} from '../core/index.js';
+import { decodeText, NotText } from '../node/decodeText.js';
+import { readBytes, writeWhole } from '../node/files.js';
+import { version } from '../node/version.js';
+import { Ending, EXIT } from './exitCodes.js';
+import { ProgressLine } from './progressLine.js';
+
+/** One drawing to order, and what to do with the result. */
+export interface TourJob {
+  readonly input: string;
+  /** Where to write; `-` is standard output. */
+  readonly outputs: readonly string[];
+  readonly settings: Settings;
+  readonly seconds: number | null;
+  readonly showTravel: boolean;
+  readonly json: boolean;
+  readonly quiet: boolean;
+}
+
+export type OutputKind = 'svg' | 'gcode' | 'json';
+
+const KIND_OF: Readonly<Record<string, OutputKind>> = {
+  '.svg': 'svg',
+  '.gcode': 'gcode',
+  '.ngc': 'gcode',
+  '.nc': 'gcode',
+  '.tap': 'gcode',
+  '.json': 'json',
+};
+
+/** The kind of an output by its extension; standard output takes SVG. Null where it is not known. */
+export function outputKind(path: string): OutputKind | null {
+  return path === '-' ? 'svg' : (KIND_OF[extname(path).toLowerCase()] ?? null);
+}
+
+/** Reads, orders, writes, audits and reports one drawing; throws an Ending where that cannot be done. */
+export function runTourJob(job: TourJob): void {
+  const drawing = readInput(job.input);
+  const progress = new ProgressLine(!job.quiet && process.stderr.isTTY === true);
+  const until = job.seconds === null ? Number.POSITIVE_INFINITY : performance.now() + 1000 * job.seconds;
+  const { settings } = job;
+  const profile: MachineProfile = { ...PEN_ON_Z, snapMm: settings.snapMm, accuracyMm: settings.accuracyMm };
+  const ordered = tour(drawing, settings, profile, {
+    onProgress: (step) => progress.show(step),
+    shouldStop: () => performance.now() > until,
+  });
+  progress.clear();
+
+  const written = new Map<OutputKind, Written>();
+  const kinds = job.outputs.map((path) => outputKind(path) ?? 'svg');
+  for (const kind of new Set<OutputKind>(['svg', ...kinds])) {
+    if (kind !== 'json' && (kind !== 'svg' || kinds.includes('svg') || !kinds.includes('gcode'))) {
+      written.set(kind, writeAudited(ordered, kind, job.showTravel));
+    }
+  }
+  const audits = [...written.values()].map(({ audit }) => audit);
+  const report = reportOf(ordered, audits, version());
+  if (!report.audit.ok) throw refusal(report);
+
+  const json = `${JSON.stringify(report, null, 2)}\n`;
+  const textOf = (kind: OutputKind) => (kind === 'json' ? json : (written.get(kind)?.text ?? ''));
+  const files = job.outputs.map((path, i) => ({ path, text: textOf(kinds[i]) }));
+  save(files.filter(({ path }) => path !== '-'));
+  for (const { path, text } of files) if (path === '-') process.stdout.write(text);
+  if (job.json) process.stdout.write(json);
+  else if (!job.quiet)
+    tell(
+      report,
+      files.map(({ path }) => path),
+      kinds.includes('gcode'),
+    );
+}
+
+function readInput(path: string): Drawing {
+  const shown = path === '-' ? 'standard input' : path;
+  let text: string;
+  try {
+    text = decodeText(readBytes(path));
+  } catch (error) {
+    if (error instanceof NotText) {
+      throw new Ending(
+        EXIT.notRead,
+        `${shown} is not text in ${error.message}: a drawing is expected, as SVG`,
+      );
+    }
+    throw new Ending(EXIT.notRead, `${shown} could not be read: ${reason(error)}`);
+  }
+  const name = path === '-' ? 'drawing' : basename(path);
+  const drawing = readDrawing(text, { name });
+  const stop = drawing.findings.find((finding) => finding.severity === 'error');
+  if (stop) {
+    const { line, column } = stop.place ?? { line: null, column: null };
+    const where = line === null ? '' : ` (line ${line}, column ${column})`;
+    throw new Ending(EXIT.notRead, `${shown} could not be read: ${sentence(stop)}${where}`);
+  }
+  if (drawing.strokes.count === 0) {
+    const why = drawing.findings.find((finding) => finding.severity === 'warning');
+    const nothing = sentence({ code: 'nothing-stroked', severity: 'error', place: null, values: {} });
+    throw new Ending(EXIT.notRead, `${shown}: ${nothing}${why ? `\n  ${sentence(why)}` : ''}`);
+  }
+  return drawing;
+}
+
+function refusal(report: Report): Ending {
+  const first = report.findings.find((finding) => finding.severity === 'error');
+  const { missingMm, extraMm } = report.audit;
+  return new Ending(
+    EXIT.refused,
+    `${report.drawing.name}: the audit of the written text failed (${missingMm.toFixed(3)} mm missing, ${extraMm.toFixed(3)} mm added); nothing was written${first ? `\n  ${first.message}` : ''}`,
+  );
+}
+
+function save(files: { path: string; text: string }[]): void {
+  try {
+    writeWhole(files);
+  } catch (error) {
+    throw new Ending(
+      EXIT.notWritten,
+      `could not write ${files.map((f) => f.path).join(', ')}: ${reason(error)}`,
+    );
+  }
+}
+
+/** Table and findings: beside a drawing on standard output they go to standard error. */
+function tell(report: Report, outputs: string[], gcode: boolean): void {
+  const lines = [reportTable(report), ...findingLines(report.findings)];
+  for (const path of outputs) if (path !== '-') lines.push(`wrote ${path}`);
+  if (gcode) {
+    lines.push(
+      'caution: check bounds, unit, zero and direction of Y, and make the first run with the pen clear of the sheet.',
+      "  The machine's manual, local codes and licensed practice come first; the file's head says more.",
+    );
+  }
+  const stream = outputs.includes('-') ? process.stderr : process.stdout;
+  stream.write(`${lines.join('\n')}\n`);
+}
+
+/** The file system's own reason, without a stack. */
+function reason(error: unknown): string {
+  const code = (error as { code?: unknown }).code;
+  const known: Readonly<Record<string, string>> = {
+    ENOENT: 'there is no such file or directory',
+    EISDIR: 'it is a directory',
+    EACCES: 'permission denied',
+    EPERM: 'permission denied',
+    ENOTDIR: 'part of the path is not a directory',
+    ENOSPC: 'no space is left',
+    EROFS: 'the file system is read-only',
+  };
+  if (typeof code === 'string') return known[code] ?? code;
+  return error instanceof Error ? error.message : String(error);
+}
+
+/** The output of one of several drawings in a directory. */
+export function inDirectory(directory: string, input: string): string {
+  return join(directory, `${basename(input, extname(input))}.svg`);
+}

@@ -1,0 +1,142 @@
+import type { Finding } from '../finding.js';
+
+type Values = Finding['values'];
+type Wording = (v: Values) => string;
+
+/**
+ * The sentence for every finding. Codes and values are made where something is found; words only here.
+ * A finding that was met more than once carries `count`.
+ */
+const WORDING: Readonly<Record<string, Wording>> = {
+  // Reading: the text could not be read at all.
+  'empty-input': () => 'the input is empty',
+  'not-xml': (v) => `this is not SVG: it begins with ${quoted(v.found)}`,
+  'not-svg': (v) => `this is XML, but not SVG: its root is <${v.root}>`,
+  'xml-bad-character': (v) => `a character that XML does not allow (code ${v.codePoint})`,
+  'xml-bad-tag': () => 'a tag that is not well formed',
+  'xml-bad-attribute': (v) => `the attribute ${quoted(v.attribute)} is not well formed`,
+  'xml-duplicate-attribute': (v) => `the attribute ${quoted(v.attribute)} stands twice in one tag`,
+  'xml-tag-mismatch': (v) => `</${v.found}> stands where </${v.expected}> was due`,
+  'xml-unopened-tag': (v) => `</${v.found}> closes what was never opened`,
+  'xml-cut-off': (v) =>
+    `the file is cut off: it ends inside ${v.inside}, with ${some(v.open, 'element')} still open`,
+  'xml-two-roots': (v) => `a second root element, <${v.found}>`,
+  'xml-text-outside-root': (v) => `text outside the root element: ${quoted(v.found)}`,
+  'xml-too-deep': (v) => `elements nested more than ${v.limit} deep`,
+  'xml-unreadable': () => 'the markup could not be read',
+  'entity-limit': (v) =>
+    `the entity ${quoted(v.entity)} expands to more than ${v.limitCharacters} characters: refused`,
+  'entity-loop': (v) => `the entity ${quoted(v.entity)} contains itself: refused`,
+  'nothing-stroked': () => 'nothing in the drawing has a stroke: there is nothing to draw',
+
+  // Reading: read, but not quite as it stands.
+  'unknown-entity': (v) => `the entity ${quoted(v.entity)} is not declared${times(v)}`,
+  'entity-with-markup': (v) => `the entity ${quoted(v.entity)} holds markup and was left out${times(v)}`,
+  'svg-namespace-missing': () =>
+    'the root does not name the SVG name space: read all the same; a browser shows nothing',
+  'undeclared-prefix': (v) => `the prefix ${quoted(v.prefix)} is not declared${times(v)}`,
+  'style-rule-not-read': (v) => `a style rule was not understood${times(v)}, first: ${quoted(v.rule)}`,
+  'style-sheet-not-read': () => 'a style sheet was not read: colours and strokes set there are missing',
+  'path-error': (v) =>
+    `path data is wrong at character ${v.offset}, ${quoted(v.found)}: drawn up to there${times(v)}`,
+  'points-error': (v) =>
+    `a list of points is wrong at character ${v.offset}, ${quoted(v.found)}: drawn up to there${times(v)}`,
+  'points-odd': (v) => `a list of points has a lone last number, left out${times(v)}`,
+  'transform-error': (v) => `a transform was not understood${times(v)}, first: ${quoted(v.transform)}`,
+  'transform-origin-ignored': (v) => `transform-origin is not read${times(v)}`,
+  'length-error': (v) => `${v.attribute}=${quoted(v.found)} is not a length${times(v)}`,
+  'viewbox-error': (v) => `viewBox=${quoted(v.viewBox)} is not four numbers and was left aside`,
+  'viewbox-empty': (v) => `viewBox=${quoted(v.viewBox)} has no area: nothing in it is drawn`,
+  'aspect-ratio-error': (v) => `preserveAspectRatio=${quoted(v.preserveAspectRatio)} was not understood`,
+  'colour-not-read': (v) => `a colour was not understood${times(v)}, first: ${quoted(v.found)}`,
+  'size-guessed': (v) =>
+    `the drawing does not say how large it is: taken as ${number(v.widthMm)} x ${number(v.heightMm)} mm; check the size before drawing`,
+  'user-unit-assumed': (v) => `sizes without a unit were read at ${v.pxPerInch} per inch`,
+  'coordinate-overflow': (v) => `${some(v.count, 'stroke')} left out: coordinates beyond any number`,
+  'use-missing': (v) => `<use> refers to ${quoted(v.href)}, which is not there${times(v)}`,
+  'use-external': (v) => `<use> refers to another file, ${quoted(v.href)}: not fetched${times(v)}`,
+  'use-loop': (v) => `<use> refers to itself through ${quoted(v.href)}: refused${times(v)}`,
+  'use-too-deep': (v) => `<use> nested more than ${v.limit} deep: refused${times(v)}`,
+  'use-limit': (v) => `more than ${v.limit} copies by <use>: the rest is not drawn`,
+  'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
+  'shape-error': (v) => `a shape is left out: ${v.attribute}=${quoted(v.found)}${times(v)}`,
+
+  // Reading: not drawn, or drawn otherwise than on a screen.
+  'filled-not-stroked': (v) =>
+    `${some(v.count, 'shape')} filled but not stroked, not drawn: ${number(v.outlineMm)} mm of outline; give them a stroke to have them drawn`,
+  'text-not-drawn': (v) =>
+    `${some(v.count, 'text')} not drawn, first: ${quoted(v.text)}; turn text into paths, or use single-line lettering`,
+  'image-not-drawn': (v) => `${some(v.count, 'image')} not drawn`,
+  'foreign-object-not-drawn': (v) => `${some(v.count, 'foreignObject')} not drawn`,
+  'markers-not-drawn': (v) => `markers (arrow heads and the like) on ${some(v.count, 'line')} not drawn`,
+  'clip-not-applied': (v) => `${some(v.count, 'clip path')} not applied: lines run on past the clip`,
+  'mask-not-applied': (v) => `${some(v.count, 'mask')} not applied: what it hides is drawn whole`,
+  'filter-not-applied': (v) => `${some(v.count, 'filter')} not applied`,
+  'dashes-drawn-solid': (v) => `${some(v.count, 'dashed line')} drawn solid`,
+  'paint-server-drawn-as-line': (v) =>
+    `${some(v.count, 'line')} stroked with ${v.paint}: drawn as plain lines`,
+  'fill-ignored': (v) =>
+    `${some(v.count, 'shape')} both filled and stroked: on paper the fill hides nothing below it`,
+  'white-strokes': (v) => `${some(v.count, 'white stroke')}: kept, as one more pen`,
+  'butt-dots-not-drawn': (v) =>
+    `${some(v.count, 'line')} of no length and without round or square caps: nothing to draw`,
+  hidden: (v) => `${some(v.count, 'element')} hidden by display:none, not drawn`,
+  'condition-not-met': (v) => `${some(v.count, 'element')} left out because a condition is not met`,
+  invisible: (v) => `${some(v.count, 'element')} invisible (no width, no opacity, or hidden), not drawn`,
+  'flattened-to-nothing': (v) => `${some(v.count, 'element')} scaled to nothing, not drawn`,
+  'nothing-to-draw': (v) => `${some(v.count, 'element')} without anything to draw`,
+  'unknown-element': (v) => `<${v.name}> is not known and was left out${times(v)}`,
+
+  // Network and program.
+  'repeats-drawn-once': (v) => `${number(v.lengthMm)} mm were in the drawing more than once: drawn once`,
+  'dots-on-lines': (v) => `${some(v.count, 'dot')} on a line of the same pen: drawn with the line`,
+  'off-page': (v) =>
+    `the drawing passes the edge of the page by ${number(v.overhangMm)} mm: check it against the machine's reach`,
+  'order-kept': () => 'no better order was found: the drawing keeps its own',
+
+  // Audit.
+  'line-missing': (v) => `${number(v.lengthMm)} mm near ${place(v)} (pen ${penOf(v)}) are not drawn`,
+  'line-added': (v) =>
+    `${number(v.lengthMm)} mm near ${place(v)} (pen ${penOf(v)}) are drawn but not in the drawing`,
+  'line-doubled': (v) => `${number(v.lengthMm)} mm near ${place(v)} (pen ${penOf(v)}) are drawn too often`,
+  'dot-missing': (v) => `the dot at ${place(v)} (pen ${penOf(v)}) is not drawn`,
+  'dot-added': (v) => `the dot at ${place(v)} (pen ${penOf(v)}) is not in the drawing`,
+};
+
+/** The sentence for a finding, without its place; a code without wording is a mistake of ours, and is shown. */
+export function sentence(finding: Finding): string {
+  const wording = WORDING[finding.code];
+  if (wording) return wording(finding.values);
+  return `${finding.code} ${JSON.stringify(finding.values)}`;
+}
+
+export function hasSentence(code: string): boolean {
+  return Object.hasOwn(WORDING, code);
+}
+
+function quoted(value: string | number | undefined): string {
+  const text = String(value ?? '');
+  return `"${text.length > 60 ? `${text.slice(0, 57)}...` : text}"`;
+}
+
+function number(value: string | number | undefined): string {
+  const n = Number(value);
+  return String(Math.round(n * 1000) / 1000);
+}
+
+function some(count: string | number | undefined, one: string): string {
+  const n = Number(count ?? 1);
+  return `${n} ${one}${n === 1 ? '' : 's'}`;
+}
+
+function times(v: Values): string {
+  return Number(v.count ?? 1) > 1 ? ` (${v.count} times)` : '';
+}
+
+function place(v: Values): string {
+  return `x ${number(v.x)}, y ${number(v.y)}`;
+}
+
+function penOf(v: Values): number {
+  return Number(v.pen ?? 0) + 1;
+}

@@ -1,0 +1,87 @@
+import type { AuditResult } from './audit/audit.js';
+import type { Finding } from './finding.js';
+import { segmentLength } from './geometry/length.js';
+import { programBounds } from './measure/bounds.js';
+import { fewestRuns } from './network/fewestRuns.js';
+import type { Ordered } from './pipeline.js';
+import { makeReport, type Report } from './report/report.js';
+
+/** The report on a drawing put in order and on the audits of what was written. */
+export function reportOf(ordered: Ordered, audits: readonly AuditResult[], version: string): Report {
+  const { drawing, settings, profile, networks, tours, before, after } = ordered;
+  const { strokes } = drawing;
+  const sum = (values: readonly number[]) => values.reduce((total, value) => total + value, 0);
+  let drawnMm = 0;
+  for (let i = 0; i < strokes.segments.count; i++) drawnMm += segmentLength(strokes.segments, i);
+  return makeReport({
+    version,
+    settings: {
+      ...settings,
+      homeMm: [before.program.homeX, before.program.homeY],
+      machine: profile.name,
+    },
+    drawing: {
+      name: drawing.name,
+      widthMm: drawing.widthMm,
+      heightMm: drawing.heightMm,
+      elements: drawing.elementCount,
+      strokes: strokes.count,
+      drawnMm,
+    },
+    network: {
+      vertices: sum(networks.map((n) => n.vertexCount)),
+      edges: sum(networks.map((n) => n.edgeCount)),
+      components: sum(networks.map((n) => n.componentCount)),
+      oddVertices: sum(networks.map((n) => n.oddVertices.length)),
+      repeatedMm: sum(networks.map((n) => n.repeatedMm)),
+      bridgedMm: after.measure.bridgedMm,
+      snapMaxMm: Math.max(...networks.map((n) => n.snapMaxMm)),
+    },
+    before: before.measure,
+    after: after.measure,
+    bound: boundOf(ordered),
+    stopped: tours.every((tour) => tour.stopped === 'proven')
+      ? 'proven'
+      : tours.some((tour) => tour.stopped === 'clock')
+        ? 'clock'
+        : 'effort',
+    audits,
+    findings: [...drawing.findings, ...findingsOf(ordered)],
+  });
+}
+
+/** The pens' bounds added up: each pen is a tour of its own. */
+function boundOf({ settings, networks, tours, after }: Ordered): Report['bound'] {
+  const objective = settings.minimise;
+  if (settings.bound === 'none') return { objective, value: 0, method: 'none', exact: false };
+  if (objective === 'lifts') {
+    const value = networks.reduce((runs, network) => runs + fewestRuns(network), 0);
+    return { objective, value, method: 'degrees', exact: after.measure.runs === value };
+  }
+  const value = tours.reduce((sum, tour) => sum + tour.bound.value, 0);
+  const methods = [...new Set(tours.map((tour) => tour.bound.method))];
+  return { objective, value, method: methods.join('+'), exact: tours.every((tour) => tour.bound.exact) };
+}
+
+/** What the network and the program have to say besides the figures. */
+function findingsOf({ drawing, networks, before, after }: Ordered): Finding[] {
+  const findings: Finding[] = [];
+  const note = (code: string, values: Finding['values'], severity: Finding['severity'] = 'note') =>
+    findings.push({ code, severity, place: null, values });
+  const repeatedMm = networks.reduce((total, n) => total + n.repeatedMm, 0);
+  if (repeatedMm > 0) note('repeats-drawn-once', { lengthMm: repeatedMm });
+  const dots = networks.reduce((total, n) => total + n.dotsOnLines, 0);
+  if (dots > 0) note('dots-on-lines', { count: dots });
+  const { drawn } = programBounds(after.program);
+  if (drawn) {
+    const overhangMm = Math.max(
+      -drawn.minX,
+      -drawn.minY,
+      drawn.maxX - drawing.widthMm,
+      drawn.maxY - drawing.heightMm,
+    );
+    if (overhangMm > 1e-6) note('off-page', { overhangMm }, 'warning');
+  }
+  if (after === before) note('order-kept', {});
+  return findings;
+}

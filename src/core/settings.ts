@@ -1,0 +1,55 @@
+import type { PenRule } from './drawing/pens.js';
+import type { Objective } from './metric/metric.js';
+import type { JunctionRule } from './network/network.js';
+import type { MatchingRule } from './tour/pairing.js';
+
+/** Everything that decides the result. Lengths in mm, the place of home in page mm from the top left. */
+export interface Settings {
+  readonly snapMm: number;
+  /** Largest chord error where curves are written or searched as lines. */
+  readonly accuracyMm: number;
+  readonly junctions: JunctionRule;
+  readonly repeats: 'once' | 'keep';
+  readonly matching: MatchingRule;
+  readonly minimise: Objective;
+  /** Null: the page's bottom left corner. */
+  readonly homeMm: readonly [number, number] | null;
+  readonly end: 'home' | 'anywhere';
+  readonly pens: PenRule;
+  /** Kicks for each end of an edge in the improvement of the tour. */
+  readonly effort: number;
+  readonly bound: 'none' | 'quick';
+  readonly seed: number;
+}
+
+/** Lines at most this far apart all along are one line drawn again: finer than any hatching. */
+export const REPEAT_TOLERANCE_MM = 0.01;
+
+export const DEFAULT_SETTINGS: Settings = {
+  snapMm: 0.05,
+  accuracyMm: 0.02,
+  junctions: 'touching',
+  repeats: 'once',
+  matching: 'exact',
+  minimise: 'travel',
+  homeMm: null,
+  end: 'home',
+  pens: 'colour',
+  effort: 10,
+  bound: 'quick',
+  seed: 1,
+};
+
+/** What a long run tells of itself; all of it may be left out. */
+export interface Hooks {
+  /** What is being done, how far it is (0 to 1), and the travel of the current pen so far where known. */
+  readonly onProgress?: (step: Step) => void;
+  /** Asked now and then during improvement; true keeps the best so far. */
+  readonly shouldStop?: () => boolean;
+}
+
+export interface Step {
+  readonly doing: 'network' | 'improve';
+  readonly share: number;
+  readonly costMm: number | null;
+}
