@@ -14,8 +14,7 @@ import { gatherSites } from './snap.js';
  */
 export function splitWhereEndsTouch(marks: Marks, drawing: Drawing, pieces: Pieces, snapMm: number): void {
   if (!pieces.index) return;
-  const { siteX, siteY, siteOfMark } = gatherSites(marks);
-  const endsHere = strokesEndingAt(marks, siteOfMark, siteX.length);
+  const { siteX, siteY } = gatherSites(marks);
   const reach = snapMm + pieces.chordErrorMm;
   const splits: { stroke: number; segment: number; t: number }[] = [];
   for (let site = 0; site < siteX.length; site++) {
@@ -25,9 +24,7 @@ export function splitWhereEndsTouch(marks: Marks, drawing: Drawing, pieces: Piec
     for (let i = 0; i < found.length; ) {
       const j = endOfContiguous(found, i, pieces);
       const stroke = pieces.stroke[found[i]];
-      const meetsAtEnd =
-        reachesStrokeEnd(found[i], found[j - 1], pieces, drawing) &&
-        (endsHere[site].includes(stroke) || nearStrokeEnd(drawing, stroke, x, y, snapMm));
+      const meetsAtEnd = reachesNearEnd(found[i], found[j - 1], pieces, drawing, x, y, snapMm);
       if (!meetsAtEnd) {
         const place = nearestOnPieces(found, i, j, pieces, drawing, x, y, snapMm);
         if (place) splits.push({ stroke, ...place });
@@ -36,13 +33,6 @@ export function splitWhereEndsTouch(marks: Marks, drawing: Drawing, pieces: Piec
     }
   }
   for (const { stroke, segment, t } of splits) addSplit(marks, drawing, stroke, segment, t);
-}
-
-/** Strokes that end on each site. */
-function strokesEndingAt(marks: Marks, siteOfMark: Int32Array, sites: number): number[][] {
-  const lists: number[][] = Array.from({ length: sites }, () => []);
-  for (let m = 0; m < marks.count; m++) lists[siteOfMark[m]].push(marks.stroke[m]);
-  return lists;
 }
 
 /** First index after `i` whose piece does not follow the one before it on the same stroke. */
@@ -58,25 +48,30 @@ function endOfContiguous(found: number[], i: number, pieces: Pieces): number {
   return j;
 }
 
-/** Whether a group of pieces holds the stroke's first or last piece: then it is the end's own surroundings. */
-function reachesStrokeEnd(from: number, to: number, pieces: Pieces, drawing: Drawing): boolean {
-  const stroke = pieces.stroke[from];
-  const { first } = drawing.strokes;
-  const startsHere = pieces.segment[from] === first[stroke] && pieces.t0[from] === 0;
-  const endsHere = pieces.segment[to] === first[stroke + 1] - 1 && pieces.t1[to] === 1;
-  return startsHere || endsHere;
-}
-
-function nearStrokeEnd(drawing: Drawing, stroke: number, x: number, y: number, snapMm: number): boolean {
+/**
+ * Whether a group of pieces holds an end of its stroke that lies within the snap distance: then that end
+ * is what is met (or, on the own stroke, it is the end's own surroundings).
+ */
+function reachesNearEnd(
+  from: number,
+  to: number,
+  pieces: Pieces,
+  drawing: Drawing,
+  x: number,
+  y: number,
+  snapMm: number,
+): boolean {
   const { first, segments } = drawing.strokes;
-  const a = segments.offset[first[stroke]];
-  const b = segments.offset[first[stroke + 1] - 1] + 2;
-  for (const o of [a, b]) {
+  const start = first[pieces.stroke[from]];
+  const last = first[pieces.stroke[from] + 1] - 1;
+  const near = (o: number) => {
     const dx = segments.data[o] - x;
     const dy = segments.data[o + 1] - y;
-    if (dx * dx + dy * dy <= snapMm * snapMm) return true;
-  }
-  return false;
+    return dx * dx + dy * dy <= snapMm * snapMm;
+  };
+  const holdsStart = pieces.segment[from] === start && pieces.t0[from] === 0;
+  const holdsEnd = pieces.segment[to] === last && pieces.t1[to] === 1;
+  return (holdsStart && near(segments.offset[start])) || (holdsEnd && near(segments.offset[last] + 2));
 }
 
 function nearestOnPieces(
