@@ -1,0 +1,81 @@
+import { type Declaration, PROPERTIES, readDeclarations } from './declarations.js';
+import type { FindingLog } from './findingLog.js';
+import { StyleSheet } from './styleSheet.js';
+import { type SvgElement, type SvgTree, textOf } from './svgTree.js';
+
+/** Distinct style attributes remembered; drawings repeat a few of them thousands of times. */
+const REMEMBERED = 4096;
+
+/**
+ * What is said of one element in its attributes, in style sheets and in its style attribute, the
+ * strongest of them for each name (SVG 2, "Styling": presentation attributes are the weakest).
+ */
+export class Cascade {
+  private readonly sheet = new StyleSheet();
+  private readonly specified = new Map<string, string>();
+  private readonly remembered = new Map<string, readonly Declaration[]>();
+
+  constructor(
+    private readonly tree: SvgTree,
+    log: FindingLog,
+  ) {
+    for (const element of tree.sheets) {
+      const place = () => tree.placeOf(element);
+      const type = tree.attributeOf(element, 'type') ?? '';
+      if (type !== '' && type.trim().toLowerCase() !== 'text/css') {
+        log.add('style-sheet-not-read', place, { type });
+        continue;
+      }
+      this.sheet.add(textOf(element, Number.MAX_SAFE_INTEGER), (rule) =>
+        log.add('style-rule-not-read', place, { rule: rule.replace(/\s+/g, ' ').slice(0, 60) }),
+      );
+    }
+  }
+
+  /** The map is the same one each time, valid until the next call. */
+  specifiedOn(element: SvgElement): ReadonlyMap<string, string> {
+    const { specified, tree } = this;
+    const { attributes } = tree;
+    specified.clear();
+    for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
+      const name = attributes.nameAt(i);
+      if (!name.includes(':')) specified.set(name, attributes.valueAt(i));
+    }
+    const style = specified.get('style');
+    if (style === undefined && this.sheet.isEmpty) return specified;
+    const inline = style === undefined ? [] : this.declarationsOf(style);
+    const ruled = this.sheet.isEmpty ? [] : this.ruled(element);
+    // The order of the cascade: rules, style attribute, important rules, important style attribute.
+    for (const important of [false, true]) {
+      for (const declarations of [ruled, inline]) {
+        for (const d of declarations) if (d.important === important) specified.set(d.name, d.value);
+      }
+    }
+    return specified;
+  }
+
+  private ruled(element: SvgElement): readonly Declaration[] {
+    const classes = this.specified.get('class')?.trim();
+    return this.sheet.declarationsFor({
+      name: element.name,
+      id: this.specified.get('id') ?? null,
+      classes: classes ? classes.split(/\s+/) : [],
+    });
+  }
+
+  private declarationsOf(style: string): readonly Declaration[] {
+    let declarations = this.remembered.get(style);
+    if (!declarations) {
+      declarations = readDeclarations(style);
+      if (this.remembered.size >= REMEMBERED) this.remembered.clear();
+      this.remembered.set(style, declarations);
+    }
+    return declarations;
+  }
+}
+
+/** True where an element has any property of the style; most inherit all of it. */
+export function hasStyle(specified: ReadonlyMap<string, string>): boolean {
+  for (const name of specified.keys()) if (PROPERTIES.has(name)) return true;
+  return false;
+}

@@ -1,0 +1,195 @@
+import { readColour } from './colour.js';
+import { type LengthContext, readLength, toUserUnits } from './length.js';
+import { BLACK, NONE, type Paint, readPaint } from './paint.js';
+
+/** The inherited properties that reading needs, computed for one element. */
+export interface Style {
+  readonly stroke: Paint;
+  readonly fill: Paint;
+  /** The value of `color`, which `currentColor` stands for. */
+  readonly colour: string;
+  readonly colourVisible: boolean;
+  /** User units. */
+  readonly strokeWidth: number;
+  readonly strokeOpacity: number;
+  readonly fillOpacity: number;
+  readonly visible: boolean;
+  /** Caps are round or square, so that a sub-path of zero length is a dot. */
+  readonly dots: boolean;
+  readonly dashed: boolean;
+  /** One bit each for markers at the start, middle and end. */
+  readonly markers: number;
+  readonly fontSize: number;
+}
+
+/** SVG 2 and CSS, the properties' initial values. */
+export const INITIAL_STYLE: Style = {
+  stroke: NONE,
+  fill: BLACK,
+  colour: '#000000',
+  colourVisible: true,
+  strokeWidth: 1,
+  strokeOpacity: 1,
+  fillOpacity: 1,
+  visible: true,
+  dots: false,
+  dashed: false,
+  markers: 0,
+  fontSize: 16,
+};
+
+export interface StyleContext extends LengthContext {
+  isPaintServer(id: string): boolean;
+  isMarker(id: string): boolean;
+  /** A value that could not be read, or a colour that black stands for. */
+  reportColour(found: string): void;
+  reportLength(attribute: string, found: string): void;
+}
+
+type Writable = { -readonly [K in keyof Style]: Style[K] };
+type Setter = (style: Writable, value: string, parent: Style, context: StyleContext) => void;
+
+/**
+ * The style of an element from its parent's. A value that is not understood counts as not given, so
+ * the parent's holds (CSS Cascading and Inheritance Level 4, "Value Processing").
+ */
+export function computeStyle(
+  specified: ReadonlyMap<string, string>,
+  parent: Style,
+  context: StyleContext,
+): Style {
+  let style: Writable | null = null;
+  for (const [name, setter] of SETTERS) {
+    const value = specified.get(name);
+    if (value === undefined) continue;
+    style ??= { ...parent };
+    const keyword = value.trim().toLowerCase();
+    if (keyword === 'inherit' || keyword === 'unset' || keyword === 'revert') continue;
+    const initial = INITIAL_VALUES[name];
+    setter(style, keyword === 'initial' && initial !== undefined ? initial : value.trim(), parent, context);
+  }
+  return style ?? parent;
+}
+
+const INITIAL_VALUES: Readonly<Record<string, string>> = {
+  'font-size': '16px',
+  color: '#000000',
+  stroke: 'none',
+  fill: '#000000',
+  'stroke-width': '1',
+  'stroke-opacity': '1',
+  'fill-opacity': '1',
+  'stroke-linecap': 'butt',
+  'stroke-dasharray': 'none',
+  visibility: 'visible',
+  marker: 'none',
+  'marker-start': 'none',
+  'marker-mid': 'none',
+  'marker-end': 'none',
+};
+
+function paintSetter(name: 'stroke' | 'fill'): Setter {
+  return (style, value, _parent, context) => {
+    const read = readPaint(value, context.isPaintServer);
+    if (read) style[name] = read.paint;
+    if (!read?.exact) context.reportColour(value);
+  };
+}
+
+function opacitySetter(name: 'strokeOpacity' | 'fillOpacity'): Setter {
+  return (style, value) => {
+    style[name] = readOpacity(value) ?? style[name];
+  };
+}
+
+function markerSetter(bits: number): Setter {
+  return (style, value, _parent, context) => {
+    const id = /^url\(\s*["']?#([^"')]*?)["']?\s*\)$/i.exec(value)?.[1];
+    style.markers = id !== undefined && context.isMarker(id) ? style.markers | bits : style.markers & ~bits;
+  };
+}
+
+/** In this order: lengths in em need the font size of the same element. */
+const SETTERS: readonly (readonly [string, Setter])[] = [
+  [
+    'font-size',
+    (style, value, parent, context) => {
+      const length = readLength(value);
+      // A percentage of the font size, unlike others, is one of the parent's.
+      if (length?.unit === '%') style.fontSize = (parent.fontSize * length.value) / 100;
+      else if (length && length.value >= 0)
+        style.fontSize = toUserUnits(length, 'other', context, parent.fontSize);
+    },
+  ],
+  [
+    'color',
+    (style, value, _parent, context) => {
+      if (value.toLowerCase() === 'currentcolor') return;
+      const colour = readColour(value);
+      if (!colour) {
+        context.reportColour(value);
+        return;
+      }
+      style.colour = colour.hex;
+      style.colourVisible = colour.alpha > 0;
+    },
+  ],
+  ['stroke', paintSetter('stroke')],
+  ['fill', paintSetter('fill')],
+  [
+    'stroke-width',
+    (style, value, _parent, context) => {
+      const length = readLength(value);
+      if (length && length.value >= 0)
+        style.strokeWidth = toUserUnits(length, 'other', context, style.fontSize);
+      else context.reportLength('stroke-width', value);
+    },
+  ],
+  ['stroke-opacity', opacitySetter('strokeOpacity')],
+  ['fill-opacity', opacitySetter('fillOpacity')],
+  [
+    'stroke-linecap',
+    (style, value) => {
+      const cap = value.toLowerCase();
+      if (cap === 'round' || cap === 'square') style.dots = true;
+      else if (cap === 'butt') style.dots = false;
+    },
+  ],
+  [
+    'stroke-dasharray',
+    (style, value) => {
+      style.dashed = readDashed(value) ?? style.dashed;
+    },
+  ],
+  [
+    'visibility',
+    (style, value) => {
+      const visibility = value.toLowerCase();
+      if (visibility === 'visible') style.visible = true;
+      else if (visibility === 'hidden' || visibility === 'collapse') style.visible = false;
+    },
+  ],
+  ['marker', markerSetter(7)],
+  ['marker-start', markerSetter(1)],
+  ['marker-mid', markerSetter(2)],
+  ['marker-end', markerSetter(4)],
+];
+
+/** An opacity as a number or percentage, clamped to 0 to 1; null where it is neither. */
+export function readOpacity(value: string): number | null {
+  const length = readLength(value);
+  if (!length || (length.unit !== '' && length.unit !== '%')) return null;
+  return Math.min(1, Math.max(0, length.unit === '%' ? length.value / 100 : length.value));
+}
+
+/** Whether a dash array makes dashes: a sum of 0 is a solid line (SVG 2, "stroke-dasharray"). */
+function readDashed(value: string): boolean | null {
+  if (value.toLowerCase() === 'none') return false;
+  let sum = 0;
+  for (const word of value.split(/[\s,]+/)) {
+    const length = readLength(word);
+    if (!length || length.value < 0) return null;
+    sum += length.value;
+  }
+  return sum > 0;
+}

@@ -1,0 +1,31 @@
+import type { SvgElement } from './svgTree.js';
+
+type Specified = ReadonlyMap<string, string>;
+
+/**
+ * Whether an element's conditional processing attributes hold (SVG 2, "Conditional processing"): no
+ * extension is known here, and the language is taken to be English. `requiredFeatures` always holds.
+ */
+export function holds(specified: Specified): boolean {
+  if (specified.has('requiredExtensions')) return false;
+  const languages = specified.get('systemLanguage');
+  return languages === undefined || /(?:^|,)\s*en(?:-[\w-]*)?\s*(?:,|$)/i.test(languages);
+}
+
+/**
+ * The child that a `switch` draws: the first whose conditions hold. A foreignObject is passed over
+ * whatever its conditions, since its content is never drawn and what follows stands in for it.
+ */
+export function firstThatHolds(
+  element: SvgElement,
+  isCandidate: (child: SvgElement) => boolean,
+  specifiedOn: (child: SvgElement) => Specified,
+): { readonly chosen: SvgElement | null; readonly passedOver: readonly SvgElement[] } {
+  const passedOver: SvgElement[] = [];
+  for (const child of element.children) {
+    if (typeof child === 'string' || !child.isSvg || !isCandidate(child)) continue;
+    if (child.name === 'foreignObject') passedOver.push(child);
+    else if (holds(specifiedOn(child))) return { chosen: child, passedOver };
+  }
+  return { chosen: null, passedOver };
+}

@@ -1,0 +1,76 @@
+import type { Severity } from '../finding.js';
+
+/**
+ * Every code that reading can report, with its severity. All but the errors carry `count`, how often
+ * it was met; the place and the other values are those of the first time, unless said to be sums.
+ */
+export const READING_FINDINGS = {
+  // The text could not be read at all: the drawing is empty.
+  'empty-input': 'error',
+  'not-xml': 'error', // found: the first characters
+  'not-svg': 'error', // root: name of the root element
+  'xml-bad-character': 'error', // codePoint
+  'xml-bad-tag': 'error',
+  'xml-bad-attribute': 'error', // attribute
+  'xml-duplicate-attribute': 'error', // attribute
+  'xml-tag-mismatch': 'error', // expected, found
+  'xml-unopened-tag': 'error', // found
+  'xml-cut-off': 'error', // inside: what the text ends in the middle of; open: elements not closed; startLine, startColumn
+  'xml-two-roots': 'error', // found: name of the second
+  'xml-text-outside-root': 'error', // found
+  'xml-too-deep': 'error', // limit
+  'xml-unreadable': 'error',
+  'entity-limit': 'error', // entity; limitCharacters
+  'entity-loop': 'error', // entity
+
+  // The text is read, but not quite as it stands.
+  'unknown-entity': 'warning', // entity
+  'entity-with-markup': 'warning', // entity
+  'svg-namespace-missing': 'warning',
+  'undeclared-prefix': 'warning', // prefix
+  'style-rule-not-read': 'warning', // rule
+  'style-sheet-not-read': 'warning', // type
+  'path-error': 'warning', // offset: characters from the start of the data; found
+  'points-error': 'warning', // offset, found
+  'points-odd': 'warning',
+  'transform-error': 'warning', // transform
+  'transform-origin-ignored': 'warning', // origin
+  'length-error': 'warning', // attribute, found
+  'viewbox-error': 'warning', // viewBox
+  'viewbox-empty': 'warning', // viewBox
+  'aspect-ratio-error': 'warning', // preserveAspectRatio
+  'colour-not-read': 'warning', // found
+  'size-guessed': 'warning', // widthMm, heightMm, basis: viewBox | extent | default
+  'user-unit-assumed': 'warning', // pxPerInch
+  'coordinate-overflow': 'warning', // count: strokes left out
+  'use-missing': 'warning', // href
+  'use-external': 'warning', // href
+  'use-loop': 'warning', // href
+  'use-too-deep': 'warning', // limit
+  'use-limit': 'warning', // limit
+  'switch-without-match': 'warning',
+
+  // Read, and not drawn, or drawn otherwise than on a screen.
+  'filled-not-stroked': 'warning', // outlineMm: sum
+  'text-not-drawn': 'warning', // text
+  'image-not-drawn': 'warning', // href
+  'foreign-object-not-drawn': 'warning',
+  'markers-not-drawn': 'warning',
+  'clip-not-applied': 'warning', // clip
+  'mask-not-applied': 'warning', // mask
+  'filter-not-applied': 'note', // filter
+  'dashes-drawn-solid': 'warning',
+  'paint-server-drawn-as-line': 'note', // paint
+  'fill-ignored': 'note',
+  'white-strokes': 'note',
+  'butt-dots-not-drawn': 'note',
+  hidden: 'note',
+  'condition-not-met': 'note',
+  invisible: 'note',
+  'flattened-to-nothing': 'note', // a transform without an inverse
+  'shape-error': 'warning', // attribute, found
+  'nothing-to-draw': 'note',
+  'unknown-element': 'note', // name
+} as const satisfies Record<string, Severity>;
+
+export type ReadingCode = keyof typeof READING_FINDINGS;

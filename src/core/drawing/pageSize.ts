@@ -1,0 +1,85 @@
+import { toMm } from '../geometry/unit.js';
+import { readLength } from './length.js';
+import type { ViewBox } from './viewBox.js';
+
+/** CSS gives this size to a replaced element that says nothing of its own, px. */
+const DEFAULT_WIDTH = 300;
+const DEFAULT_HEIGHT = 150;
+
+export interface PageSize {
+  readonly widthMm: number;
+  readonly heightMm: number;
+  readonly widthGiven: boolean;
+  readonly heightGiven: boolean;
+  /** What the size was guessed from where the drawing does not say; null where it does. */
+  readonly guess: 'viewBox' | 'extent' | null;
+  /** Width or height is given in a physical unit. */
+  readonly physical: boolean;
+}
+
+/**
+ * The page's size from the root's width, height and viewBox. A side that is missing follows the
+ * viewBox's proportions; percentages are of the viewBox; without a viewBox the size has to be taken from
+ * what is drawn (`extent`), and the size here only serves percentages meanwhile.
+ */
+export function pageSize(
+  width: string | null,
+  height: string | null,
+  viewBox: ViewBox | null,
+  pxPerInch: number,
+): PageSize {
+  const w = side(width, viewBox?.width, pxPerInch);
+  const h = side(height, viewBox?.height, pxPerInch);
+  const known = {
+    widthGiven: w.given !== null,
+    heightGiven: h.given !== null,
+    physical: w.physical || h.physical,
+  };
+  if (w.given !== null && h.given !== null) {
+    return { widthMm: w.given, heightMm: h.given, guess: null, ...known };
+  }
+  const box = viewBox !== null && viewBox.width > 0 && viewBox.height > 0 ? viewBox : null;
+  if (box && w.given !== null) {
+    return { widthMm: w.given, heightMm: (w.given * box.height) / box.width, guess: null, ...known };
+  }
+  if (box && h.given !== null) {
+    return { widthMm: (h.given * box.width) / box.height, heightMm: h.given, guess: null, ...known };
+  }
+  const px = (value: number): number => toMm(value, 'px', pxPerInch);
+  if (box) {
+    const widthMm = w.share ?? px(box.width);
+    return { widthMm, heightMm: h.share ?? px(box.height), guess: 'viewBox', ...known };
+  }
+  return {
+    widthMm: w.given ?? px(DEFAULT_WIDTH),
+    heightMm: h.given ?? px(DEFAULT_HEIGHT),
+    guess: 'extent',
+    ...known,
+  };
+}
+
+interface Side {
+  /** mm, where a usable absolute length is given. */
+  readonly given: number | null;
+  /** mm, where a usable percentage of the viewBox is given. */
+  readonly share: number | null;
+  readonly physical: boolean;
+}
+
+function side(text: string | null, viewBoxSide: number | undefined, pxPerInch: number): Side {
+  const nothing = { given: null, share: null, physical: false };
+  const length = text === null ? null : readLength(text);
+  if (!length || length.value <= 0) return nothing;
+  const { value, unit } = length;
+  if (unit === '%') {
+    if (viewBoxSide === undefined) return nothing;
+    return { ...nothing, share: (toMm(viewBoxSide, 'px', pxPerInch) * value) / 100 };
+  }
+  let mm: number;
+  if (unit === 'em' || unit === 'rem') mm = toMm(value * 16, 'px', pxPerInch);
+  else if (unit === 'ex' || unit === 'ch') mm = toMm(value * 8, 'px', pxPerInch);
+  else mm = toMm(value, unit === '' ? 'px' : unit, pxPerInch);
+  // Also refuses what is too large or too small to be a page at all.
+  if (!(mm > 1e-9 && mm < 1e9)) return nothing;
+  return { given: mm, share: null, physical: ['mm', 'cm', 'in', 'pt', 'pc', 'Q'].includes(unit) };
+}

@@ -1,0 +1,47 @@
+import { readColour } from './colour.js';
+
+/** What a line is drawn or an area filled with, before `currentColor` is looked up. */
+export type Paint =
+  | { readonly kind: 'none' }
+  | { readonly kind: 'current' }
+  | { readonly kind: 'colour'; readonly hex: string; readonly visible: boolean }
+  | { readonly kind: 'server'; readonly id: string };
+
+export const NONE: Paint = { kind: 'none' };
+export const BLACK: Paint = { kind: 'colour', hex: '#000000', visible: true };
+
+const URL = /^url\(\s*(?:"([^"]*)"|'([^']*)'|([^)]*?))\s*\)\s*/i;
+/** Colour functions that are valid CSS and not evaluated here. */
+const UNEVALUATED = /^(?:lab|lch|oklab|oklch|color|color-mix|device-cmyk|light-dark)\(/i;
+
+/**
+ * A value of `stroke` or `fill` (SVG 2, "Specifying paint"): a paint server that is missing gives way
+ * to the fallback after it, and to none without one.
+ *
+ * @returns null where the value is invalid, and so to be ignored; `exact` is false where a colour was
+ * valid but beyond this reader, and black stands for it.
+ */
+export function readPaint(
+  text: string,
+  isServer: (id: string) => boolean,
+): { readonly paint: Paint; readonly exact: boolean } | null {
+  const t = text.trim();
+  const lower = t.toLowerCase();
+  if (lower === 'none') return { paint: NONE, exact: true };
+  if (lower === 'currentcolor') return { paint: { kind: 'current' }, exact: true };
+  // They refer to the element that uses a marker, and markers are not drawn.
+  if (lower === 'context-fill' || lower === 'context-stroke') return { paint: NONE, exact: true };
+  const url = URL.exec(t);
+  if (url) {
+    const reference = url[1] ?? url[2] ?? url[3] ?? '';
+    const fallback = t.slice(url[0].length);
+    const id = reference.startsWith('#') ? reference.slice(1) : null;
+    if (id !== null && isServer(id)) return { paint: { kind: 'server', id }, exact: true };
+    return fallback === '' ? { paint: NONE, exact: true } : readPaint(fallback, isServer);
+  }
+  const colour = readColour(t.replace(/\s+(?:icc-color|device-\w+)\([^)]*\)\s*$/i, ''));
+  if (colour) {
+    return { paint: { kind: 'colour', hex: colour.hex, visible: colour.alpha > 0 }, exact: true };
+  }
+  return UNEVALUATED.test(t) ? { paint: BLACK, exact: false } : null;
+}

@@ -1,0 +1,96 @@
+import { segmentBox } from '../geometry/box.js';
+import type { Drawing, Strokes } from './drawing.js';
+import { FindingLog, Unreadable } from './findingLog.js';
+import { LineIndex } from './lineIndex.js';
+import type { PageSize } from './pageSize.js';
+import { childText } from './references.js';
+import { rootContext } from './rootContext.js';
+import { Session } from './session.js';
+import { StrokeSink } from './strokeSink.js';
+import { readTree } from './svgTree.js';
+import { walk } from './walk.js';
+
+export interface ReadOptions {
+  /** What the drawing is called in reports; a file name, most often. */
+  readonly name?: string;
+  /** How many user units of the drawing make an inch; 96 by CSS, 90 or 72 in some older editors. */
+  readonly pxPerInch?: number;
+}
+
+/**
+ * Reads an SVG document into strokes in mm (see `Drawing` for what may be relied on). Follows SVG 2
+ * where a pen can; whatever is left out or drawn otherwise is a finding.
+ *
+ * Never throws on any text: one that cannot be read gives a drawing without strokes and a finding of
+ * severity `error`. Throws RangeError where `pxPerInch` is not a positive finite number.
+ * Cost: O(text + segments); `use` copies are capped.
+ */
+export function readDrawing(text: string, options: ReadOptions = {}): Drawing {
+  const name = options.name ?? '';
+  const { pxPerInch } = options;
+  if (pxPerInch !== undefined && !(pxPerInch > 0 && Number.isFinite(pxPerInch))) {
+    throw new RangeError(`pxPerInch must be a positive number, not ${pxPerInch}`);
+  }
+  const log = new FindingLog();
+  try {
+    return read(text, name, pxPerInch, log);
+  } catch (error) {
+    if (error instanceof Unreadable) return emptyDrawing(name, log, error);
+    throw error;
+  }
+}
+
+function read(text: string, name: string, pxPerInch: number | undefined, log: FindingLog): Drawing {
+  const tree = readTree(text, new LineIndex(text), log);
+  const session = new Session(tree, log);
+  const { page, inside } = rootContext(session, pxPerInch);
+  if (inside) walk(session, tree.root, inside);
+  const strokes = session.sink.finish();
+  const { widthMm, heightMm } = page.guess === 'extent' ? extentOf(strokes, page) : page;
+  if (page.guess) session.report('size-guessed', tree.root, { widthMm, heightMm, basis: page.guess });
+  return {
+    name,
+    title: childText(tree.root, 'title'),
+    description: childText(tree.root, 'desc'),
+    widthMm,
+    heightMm,
+    elementCount: session.elementCount,
+    strokes,
+    colours: session.colours,
+    layers: session.layers,
+    places: session.places,
+    findings: log.list(),
+  };
+}
+
+/** A page that reaches from the origin to the far ends of what is drawn, where the drawing names none. */
+function extentOf(strokes: Strokes, page: PageSize): { widthMm: number; heightMm: number } {
+  const box = new Float64Array(4);
+  let widthMm = 0;
+  let heightMm = 0;
+  for (let i = 0; i < strokes.segments.count; i++) {
+    segmentBox(strokes.segments, i, box);
+    widthMm = Math.max(widthMm, box[2]!);
+    heightMm = Math.max(heightMm, box[3]!);
+  }
+  return {
+    widthMm: page.widthGiven || widthMm <= 0 ? page.widthMm : widthMm,
+    heightMm: page.heightGiven || heightMm <= 0 ? page.heightMm : heightMm,
+  };
+}
+
+function emptyDrawing(name: string, log: FindingLog, error: Unreadable): Drawing {
+  return {
+    name,
+    title: null,
+    description: null,
+    widthMm: 0,
+    heightMm: 0,
+    elementCount: 0,
+    strokes: new StrokeSink().finish(),
+    colours: [],
+    layers: [],
+    places: [],
+    findings: [error.finding(), ...log.list()],
+  };
+}

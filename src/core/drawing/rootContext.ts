@@ -1,0 +1,66 @@
+import { type Affine, IDENTITY, multiply, scaling, translation } from '../geometry/affine.js';
+import { INITIAL_STYLE, readOpacity } from './computedStyle.js';
+import { NO_LAYER } from './drawing.js';
+import { type PageSize, pageSize } from './pageSize.js';
+import { type Context, type Session, shown } from './session.js';
+import { styleOf } from './styleReading.js';
+import { readTransformList } from './transformList.js';
+import { aspectOf, contextInside, viewBoxOf } from './viewport.js';
+
+export const CSS_PX_PER_INCH = 96;
+
+/** The page, and what the root's children inherit; `inside` is null where the root draws nothing. */
+export interface Root {
+  readonly page: PageSize;
+  readonly inside: Context | null;
+}
+
+/** The root's size, units and style. `pxPerInch` is undefined where nobody has said. */
+export function rootContext(session: Session, pxPerInch: number | undefined): Root {
+  const { root } = session.tree;
+  const units = pxPerInch ?? CSS_PX_PER_INCH;
+  const unitMm = 25.4 / units;
+  const specified = session.cascade.specifiedOn(root);
+  const viewBox = viewBoxOf(session, root);
+  const page = pageSize(specified.get('width') ?? null, specified.get('height') ?? null, viewBox, units);
+  if (page.physical && !viewBox && pxPerInch === undefined) {
+    session.report('user-unit-assumed', root, { pxPerInch: units });
+  }
+  const outside: Context = {
+    map: IDENTITY,
+    style: INITIAL_STYLE,
+    layer: NO_LAYER,
+    atTop: true,
+    copies: null,
+    viewportWidth: page.widthMm / unitMm,
+    viewportHeight: page.heightMm / unitMm,
+    pxPerInch: units,
+  };
+  const styled = { ...outside, style: styleOf(session, root, specified, outside) };
+  if (specified.get('display')?.trim() === 'none' || readOpacity(specified.get('opacity') ?? '') === 0) {
+    session.report('hidden', root);
+    return { page, inside: null };
+  }
+  const map = rootTransform(session, specified.get('transform'), page, unitMm);
+  const aspect = aspectOf(session, root);
+  if (!viewBox) return { page, inside: { ...styled, map: multiply(map, scaling(unitMm, unitMm)) } };
+  if (viewBox.width === 0 || viewBox.height === 0) return { page, inside: null };
+  // The viewport is in mm here, so that a viewBox in mm comes out with a scale of exactly 1.
+  const rectangle = { x: 0, y: 0, width: page.widthMm, height: page.heightMm };
+  return { page, inside: contextInside(styled, map, rectangle, viewBox, aspect) };
+}
+
+/**
+ * A transform on the outermost svg acts on its box as on any CSS box, about the middle of it (CSS
+ * Transforms Module Level 1, "transform-origin"); in mm.
+ */
+function rootTransform(session: Session, text: string | undefined, page: PageSize, unitMm: number): Affine {
+  if (text === undefined) return IDENTITY;
+  const m = readTransformList(text);
+  if (!m) session.report('transform-error', session.tree.root, { transform: shown(text) });
+  if (!m || m === IDENTITY) return IDENTITY;
+  const inMm: Affine = [m[0], m[1], m[2], m[3], m[4] * unitMm, m[5] * unitMm];
+  const x = page.widthMm / 2;
+  const y = page.heightMm / 2;
+  return multiply(multiply(translation(x, y), inMm), translation(-x, -y));
+}

@@ -1,0 +1,82 @@
+import type { Place } from '../finding.js';
+import type { Affine } from '../geometry/affine.js';
+import { Cascade } from './cascade.js';
+import type { Style } from './computedStyle.js';
+import type { Layer } from './drawing.js';
+import type { ReadingCode } from './findingKinds.js';
+import type { FindingLog } from './findingLog.js';
+import type { LengthContext } from './length.js';
+import { PathReader } from './pathReader.js';
+import { StrokeSink } from './strokeSink.js';
+import type { SvgElement, SvgTree } from './svgTree.js';
+
+/** What an element inherits from where it stands. */
+export interface Context extends LengthContext {
+  /** User units to page mm. */
+  readonly map: Affine;
+  readonly style: Style;
+  readonly layer: number;
+  /** The parent is the root, so a group here is a layer. */
+  readonly atTop: boolean;
+  /** The `use` targets this is a copy inside of, innermost first. */
+  readonly copies: CopyOf | null;
+}
+
+export interface CopyOf {
+  readonly target: SvgElement;
+  readonly depth: number;
+  readonly outer: CopyOf | null;
+}
+
+/** One reading of one drawing: what it has gathered so far. */
+export class Session {
+  readonly cascade: Cascade;
+  readonly sink = new StrokeSink();
+  readonly paths = new PathReader();
+  readonly colours: string[] = [];
+  readonly layers: Layer[] = [];
+  readonly places: Place[] = [];
+  elementCount = 0;
+  private readonly colourNumbers = new Map<string, number>();
+  private readonly placeNumbers = new Map<number, number>();
+
+  constructor(
+    readonly tree: SvgTree,
+    readonly log: FindingLog,
+  ) {
+    this.cascade = new Cascade(tree, log);
+  }
+
+  report(
+    code: ReadingCode,
+    element: SvgElement,
+    first: Readonly<Record<string, string | number>> = {},
+    count = 1,
+  ): void {
+    this.log.add(code, () => this.tree.placeOf(element), first, count);
+  }
+
+  colourNumber(colour: string): number {
+    let number = this.colourNumbers.get(colour);
+    if (number === undefined) {
+      number = this.colours.push(colour) - 1;
+      this.colourNumbers.set(colour, number);
+    }
+    return number;
+  }
+
+  /** Copies of an element share its place. */
+  placeNumber(element: SvgElement): number {
+    let number = this.placeNumbers.get(element.number);
+    if (number === undefined) {
+      number = this.places.push(this.tree.placeOf(element)) - 1;
+      this.placeNumbers.set(element.number, number);
+    }
+    return number;
+  }
+}
+
+/** A value as people can read it in a message. */
+export function shown(text: string): string {
+  return text.replace(/\s+/g, ' ').trim().slice(0, 60);
+}

@@ -1,0 +1,27 @@
+import { computeStyle, type Style } from './computedStyle.js';
+import { type Context, type Session, shown } from './session.js';
+import type { SvgElement } from './svgTree.js';
+
+const PAINT_SERVERS: ReadonlySet<string> = new Set([
+  ...['linearGradient', 'radialGradient', 'pattern', 'meshgradient', 'hatch', 'solidcolor', 'solidColor'],
+]);
+
+/** The style of an element from what is specified on it and its parent's. */
+export function styleOf(
+  session: Session,
+  element: SvgElement,
+  specified: ReadonlyMap<string, string>,
+  context: Context,
+): Style {
+  const { byId } = session.tree;
+  return computeStyle(specified, context.style, {
+    viewportWidth: context.viewportWidth,
+    viewportHeight: context.viewportHeight,
+    pxPerInch: context.pxPerInch,
+    isPaintServer: (id) => PAINT_SERVERS.has(byId.get(id)?.name ?? ''),
+    isMarker: (id) => byId.get(id)?.name === 'marker',
+    reportColour: (found) => session.report('colour-not-read', element, { found: shown(found) }),
+    reportLength: (attribute, found) =>
+      session.report('length-error', element, { attribute, found: shown(found) }),
+  });
+}

@@ -1,0 +1,34 @@
+/** Shapes of the two parsing packages, which ship no types of their own. */
+
+declare module 'svg-parser' {
+  export interface ParsedText {
+    readonly type: 'text';
+    readonly value: string;
+  }
+  export interface ParsedElement {
+    readonly type: 'element';
+    readonly tagName: string;
+    readonly properties: { readonly n: string };
+    readonly children: readonly (ParsedElement | ParsedText)[];
+  }
+  export function parse(source: string): { readonly children: readonly [ParsedElement] };
+}
+
+declare module 'svg-path-parser' {
+  export interface ParsedCommand {
+    readonly code: string;
+    readonly x?: number;
+    readonly y?: number;
+    readonly x1?: number;
+    readonly y1?: number;
+    readonly x2?: number;
+    readonly y2?: number;
+    readonly rx?: number;
+    readonly ry?: number;
+    readonly xAxisRotation?: number;
+    readonly largeArc?: boolean;
+    readonly sweep?: boolean;
+  }
+  function parsePath(data: string): ParsedCommand[];
+  export default parsePath;
+}

@@ -1,0 +1,239 @@
+import { type Affine, IDENTITY, multiply, translation } from '../geometry/affine.js';
+import { readOpacity, type Style } from './computedStyle.js';
+import { firstThatHolds, holds } from './conditions.js';
+import { CopyLimits } from './copyLimits.js';
+import { drawElement, lengthOf, SHAPES } from './drawElement.js';
+import { hrefOf, isCopyOf, isInside, labelOf } from './references.js';
+import { type Context, type Session, shown } from './session.js';
+import { styleOf } from './styleReading.js';
+import { type SvgElement, textOf } from './svgTree.js';
+import { readTransformList } from './transformList.js';
+import { enterViewport, type UseSize } from './viewport.js';
+
+/** Never drawn where they stand; some of them are used by others, from there. */
+const NOT_RENDERED: ReadonlySet<string> = new Set([
+  ...[
+    'defs',
+    'symbol',
+    'clipPath',
+    'mask',
+    'pattern',
+    'marker',
+    'linearGradient',
+    'radialGradient',
+    'filter',
+  ],
+  ...['title', 'desc', 'metadata', 'style', 'script', 'animate', 'animateTransform', 'animateMotion'],
+  ...['animateColor', 'set', 'mpath', 'view', 'cursor', 'font', 'font-face', 'color-profile', 'stop'],
+  ...['meshgradient', 'hatch', 'solidcolor', 'solidColor', 'tspan', 'textPath', 'tref', 'link', 'discard'],
+]);
+
+/** Elements whose children are being drawn. */
+interface Frame {
+  readonly children: readonly (SvgElement | string)[];
+  readonly context: Context;
+  /** What a `use` says of the size of the `svg` or `symbol` it copies, the only child here. */
+  readonly useSize: UseSize | null;
+  next: number;
+}
+
+type Specified = ReadonlyMap<string, string>;
+
+/**
+ * Draws everything below the root in document order, `use` copies in their place. The walk keeps its
+ * own stack, so neither depth nor copies in copies can overflow the engine's.
+ */
+export function walk(session: Session, root: SvgElement, context: Context): void {
+  new Walk(session).run(root, context);
+}
+
+class Walk {
+  private readonly frames: Frame[] = [];
+  private readonly limits = new CopyLimits();
+  private readonly shapeCounts = new Map<SvgElement, number>();
+
+  constructor(private readonly session: Session) {}
+
+  run(root: SvgElement, context: Context): void {
+    this.enter(root.children, context);
+    while (this.frames.length > 0) {
+      const frame = this.frames[this.frames.length - 1]!;
+      const child = frame.children[frame.next++];
+      if (child === undefined) this.frames.pop();
+      else if (typeof child !== 'string') this.visit(child, frame);
+    }
+  }
+
+  private enter(children: Frame['children'], context: Context, useSize: UseSize | null = null): void {
+    if (children.length > 0) this.frames.push({ children, context, useSize, next: 0 });
+  }
+
+  private visit(element: SvgElement, frame: Frame): void {
+    const { session } = this;
+    const { context } = frame;
+    const { name } = element;
+    const copied = frame.useSize !== null;
+    if (!element.isSvg || (NOT_RENDERED.has(name) && !(name === 'symbol' && copied))) return;
+    if (context.copies && !this.limits.allowsElement()) {
+      session.report('use-limit', element, { limit: this.limits.limit });
+      return;
+    }
+    const isLayer = context.atTop && name === 'g';
+    const layer = isLayer ? this.addLayer(element) : context.layer;
+    const specified = session.cascade.specifiedOn(element);
+    if (!holds(specified)) {
+      this.reportShapes('condition-not-met', element);
+      return;
+    }
+    if (specified.get('display')?.trim() === 'none' && name !== 'symbol') {
+      this.reportShapes('hidden', element);
+      return;
+    }
+    const style = styleOf(session, element, specified, context);
+    const map = this.mapOf(element, specified, context);
+    this.reportEffects(element, specified);
+    if (SHAPES.has(name)) {
+      const before = session.sink.segmentCount;
+      drawElement(session, element, specified, style, map, context);
+      if (context.copies) this.limits.addSegments(session.sink.segmentCount - before);
+      return;
+    }
+    if (readOpacity(specified.get('opacity') ?? '') === 0) {
+      this.reportShapes('invisible', element);
+      return;
+    }
+    const inner: Context = { ...context, map, style, layer, atTop: false };
+    switch (name) {
+      case 'g':
+      case 'a':
+        this.enter(element.children, inner);
+        break;
+      case 'svg':
+      case 'symbol': {
+        const entered = enterViewport(session, element, specified, inner, frame.useSize);
+        if (entered) this.enter(element.children, entered);
+        break;
+      }
+      case 'switch':
+        this.enterSwitch(element, inner);
+        break;
+      case 'use':
+        this.enterUse(element, specified, inner);
+        break;
+      default:
+        this.reportNotDrawn(element, style);
+    }
+  }
+
+  private mapOf(element: SvgElement, specified: Specified, context: Context): Affine {
+    const text = specified.get('transform');
+    if (text === undefined) return context.map;
+    const map = readTransformList(text);
+    if (!map) this.session.report('transform-error', element, { transform: shown(text) });
+    const origin = specified.get('transform-origin');
+    if (origin !== undefined && map !== IDENTITY) {
+      this.session.report('transform-origin-ignored', element, { origin: shown(origin) });
+    }
+    return map ? multiply(context.map, map) : context.map;
+  }
+
+  private enterSwitch(element: SvgElement, context: Context): void {
+    const { chosen, passedOver } = firstThatHolds(
+      element,
+      (child) => !NOT_RENDERED.has(child.name),
+      (child) => this.session.cascade.specifiedOn(child),
+    );
+    for (const foreign of passedOver) this.session.report('foreign-object-not-drawn', foreign);
+    if (chosen) this.enter([chosen], context);
+    else if (element.children.length > 0) this.session.report('switch-without-match', element);
+  }
+
+  private enterUse(element: SvgElement, specified: Specified, context: Context): void {
+    const { session } = this;
+    const href = hrefOf(session, element);
+    if (href === null || href === '' || href === '#') {
+      session.report('use-missing', element, { href: '' });
+      return;
+    }
+    const first = { href: shown(href) };
+    const target = href.startsWith('#') ? session.tree.byId.get(href.slice(1)) : undefined;
+    if (!href.startsWith('#')) session.report('use-external', element, first);
+    else if (!target) session.report('use-missing', element, first);
+    else if (isInside(element, target) || isCopyOf(context, target))
+      session.report('use-loop', element, first);
+    else if (!this.limits.allowsDepth(context.copies?.depth ?? 0)) {
+      session.report('use-too-deep', element, { limit: this.limits.limit });
+    } else if (!this.limits.allowsCopy()) {
+      session.report('use-limit', element, { limit: this.limits.limit });
+    } else {
+      const length = (name: string, axis: 'x' | 'y'): number =>
+        lengthOf(session, element, specified, name, axis, context.style, context) ?? 0;
+      const map = multiply(context.map, translation(length('x', 'x'), length('y', 'y')));
+      const copies = { target, depth: (context.copies?.depth ?? 0) + 1, outer: context.copies };
+      const size = { width: specified.get('width') ?? null, height: specified.get('height') ?? null };
+      this.enter([target], { ...context, map, copies }, size);
+    }
+  }
+
+  private addLayer(element: SvgElement): number {
+    const { session } = this;
+    const id = session.tree.attributeOf(element, 'id');
+    return session.layers.push({ id, label: labelOf(session, element) }) - 1;
+  }
+
+  private reportShapes(code: 'hidden' | 'invisible' | 'condition-not-met', element: SvgElement): void {
+    const count = this.shapesIn(element);
+    if (count > 0) this.session.report(code, element, {}, count);
+    this.session.elementCount += count;
+  }
+
+  private reportEffects(element: SvgElement, specified: Specified): void {
+    for (const property of ['clip-path', 'mask', 'filter'] as const) {
+      const value = specified.get(property)?.trim();
+      if (value === undefined || value === '' || ['none', 'inherit', 'initial', 'unset'].includes(value))
+        continue;
+      const code = property === 'clip-path' ? 'clip-not-applied' : (`${property}-not-applied` as const);
+      this.session.report(code, element, { [property === 'clip-path' ? 'clip' : property]: shown(value) });
+    }
+  }
+
+  private reportNotDrawn(element: SvgElement, style: Style): void {
+    const { session } = this;
+    switch (element.name) {
+      case 'text':
+        if (style.visible) session.report('text-not-drawn', element, { text: textOf(element, 60) });
+        break;
+      case 'image': {
+        const href = hrefOf(session, element) ?? '';
+        if (style.visible) {
+          session.report('image-not-drawn', element, {
+            href: href.startsWith('data:') ? 'data:' : shown(href),
+          });
+        }
+        break;
+      }
+      case 'foreignObject':
+        session.report('foreign-object-not-drawn', element);
+        break;
+      default:
+        session.report('unknown-element', element, { name: shown(element.name) });
+    }
+  }
+
+  /** Shapes in an element that is left out, copies not made; remembered, since copies may ask again. */
+  private shapesIn(element: SvgElement): number {
+    let count = this.shapeCounts.get(element);
+    if (count !== undefined) return count;
+    count = 0;
+    const pending: SvgElement[] = [element];
+    while (pending.length > 0) {
+      const next = pending.pop()!;
+      if (SHAPES.has(next.name) || next.name === 'use') count++;
+      for (const child of next.children) {
+        if (typeof child !== 'string' && child.isSvg && !NOT_RENDERED.has(child.name)) pending.push(child);
+      }
+    }
+    this.shapeCounts.set(element, count);
+    return count;
+  }
+}
