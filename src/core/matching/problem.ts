@@ -39,4 +39,6 @@ export interface Certificate {
 
 export interface CertifiedMatching extends Matching {
   readonly certificate: Certificate;
+  /** False only where the caller ended the work early: the certificate is then valid, but below the total. */
+  readonly optimal: boolean;
 }

@@ -19,13 +19,11 @@ export class DisjointSet {
   find(i: number): number {
     const parent = this.parent;
     let at = i;
-    for (;;) {
-      const up = parent[at] as number;
-      if (up === at) return at;
-      const next = parent[up] as number;
-      parent[at] = next;
-      at = next;
+    while (parent[at] !== at) {
+      parent[at] = parent[parent[at]];
+      at = parent[at];
     }
+    return at;
   }
 
   /** Joins the sets of i and j; false where they are one already. */
@@ -33,15 +31,15 @@ export class DisjointSet {
     let a = this.find(i);
     let b = this.find(j);
     if (a === b) return false;
-    if ((this.weight[a] as number) < (this.weight[b] as number)) [a, b] = [b, a];
+    if (this.weight[a] < this.weight[b]) [a, b] = [b, a];
     this.parent[b] = a;
-    this.weight[a] = (this.weight[a] as number) + (this.weight[b] as number);
+    this.weight[a] += this.weight[b];
     this.count--;
     return true;
   }
 
   /** How many elements i's set holds. */
   size(i: number): number {
-    return this.weight[this.find(i)] as number;
+    return this.weight[this.find(i)];
   }
 }

@@ -1,0 +1,104 @@
+import { expand, promiseExpansion } from './expand.js';
+import { BEST, type Forest, relabel, TIME } from './forest.js';
+import { RUNS_OUT, scanGrown } from './scan.js';
+import { shrink } from './shrink.js';
+
+/**
+ * Grows one alternating tree from an exposed set until it reaches another exposed set and the matching is
+ * augmented (true), or until more than `limit` sets are in it (false). Changes of duals and new blossoms are
+ * kept either way. One tree at a time: every event then falls on a whole number, since costs are even and
+ * all vertices of the tree have duals of one parity.
+ */
+export function search(f: Forest, root: number, limit: number): boolean {
+  const { clock, events } = f;
+  f.round++;
+  f.labelled = 1;
+  f.touched.length = 0;
+  events.clear();
+  clock[TIME] = 0;
+  clock[BEST] = Number.POSITIVE_INFINITY;
+  join(f, root, 1);
+  scanGrown(f, f.firstVertex[f.node[root]], f.lastVertex[f.node[root]], root);
+  for (;;) {
+    const now = events.minKey();
+    if (now >= clock[BEST]) {
+      if (clock[BEST] === Number.POSITIVE_INFINITY)
+        throw new Error('the candidates hold no perfect matching');
+      clock[TIME] = clock[BEST];
+      augment(f);
+      leave(f);
+      return true;
+    }
+    clock[TIME] = now;
+    if (f.labelled > limit) {
+      leave(f);
+      return false;
+    }
+    events.pop();
+    happen(f, events.a, events.b);
+  }
+}
+
+/** An event is due; one that later changes have overtaken shows by the slack that is left, and is dropped. */
+function happen(f: Forest, v: number, arc: number): void {
+  const { set, sign, node, pi, off, clock } = f;
+  const s = set[v];
+  const time = clock[TIME];
+  if (arc === RUNS_OUT) {
+    const blossom = node[s];
+    if (sign[s] < 0 && blossom >= f.n && f.z[blossom] === 2 * time) expand(f, s);
+    return;
+  }
+  const w = f.graph.head[arc];
+  const r = set[w];
+  if (s === r || sign[s] + sign[r] <= 0) return;
+  const slack = f.graph.cost[arc] - pi[v] - off[s] - pi[w] - off[r] - (sign[s] + sign[r]) * time;
+  if (slack !== 0) return;
+  if (sign[s] === sign[r]) shrink(f, v, w);
+  else if (sign[s] > 0) grow(f, v, w);
+  else grow(f, w, v);
+}
+
+/** The tree takes in the set of w along the tight edge u–w, and that set's mate. */
+function grow(f: Forest, u: number, w: number): void {
+  const s = f.set[w];
+  join(f, s, -1);
+  f.parentEnd[s] = u;
+  f.childEnd[s] = w;
+  promiseExpansion(f, s);
+  const mate = f.set[f.mateOut[s]];
+  join(f, mate, 1);
+  scanGrown(f, f.firstVertex[f.node[mate]], f.lastVertex[f.node[mate]], mate);
+  f.labelled += 2;
+}
+
+function join(f: Forest, s: number, sign: number): void {
+  relabel(f, s, sign);
+  f.touched.push(s);
+}
+
+/** Takes every set out of the tree; duals stay as they are now. */
+function leave(f: Forest): void {
+  for (const s of f.touched) if (f.sign[s] !== 0) relabel(f, s, 0);
+}
+
+/** Swaps matched and unmatched edges on the way from the exposed set just reached back to the root. */
+function augment(f: Forest): void {
+  const { set, mateIn, mateOut, parentEnd, childEnd } = f;
+  let u = f.bestInner;
+  let w = f.bestOuter;
+  mateIn[set[w]] = w;
+  mateOut[set[w]] = u;
+  for (;;) {
+    const s = set[u];
+    const before = mateOut[s];
+    mateIn[s] = u;
+    mateOut[s] = w;
+    if (before < 0) return;
+    const m = set[before];
+    w = childEnd[m];
+    u = parentEnd[m];
+    mateIn[m] = w;
+    mateOut[m] = u;
+  }
+}
