@@ -9,12 +9,12 @@ const PLAIN = /^[ "#$&'*+,\-./0-9:<=>@A-Z[\]^_`a-z{|}]$/;
 /** At most `most` characters; a longer text is cut at a character and ends with three dots. */
 export function toComment(text: string, most = 80): string {
   let out = '';
+  let cut = '';
   for (let i = 0; i < text.length; i++) {
     const c = text.charAt(i);
-    const written = PLAIN.test(c) ? c : `\\u${text.charCodeAt(i).toString(16).padStart(4, '0')}`;
-    const room = i === text.length - 1 ? most : most - 3;
-    if (out.length + written.length > room) return `${out}...`;
-    out += written;
+    out += PLAIN.test(c) ? c : `\\u${text.charCodeAt(i).toString(16).padStart(4, '0')}`;
+    if (out.length > most) return `${cut}...`;
+    if (out.length <= most - 3) cut = out;
   }
   return out;
 }

@@ -43,13 +43,13 @@ export function readHeaderNote(comment: string): Partial<HeaderNotes> {
   return {};
 }
 
-/** The comment that opens a pen's part; `position` counts from 1. */
+/** The comment that opens a pen's part; `position` counts from 1. A very long name is cut. */
 export function formatPenNote(
   position: number,
   count: number,
   pen: { readonly name: string; readonly colour: string },
 ): string {
-  return `pen ${position} of ${count}: ${toComment(pen.colour, 60)}, name ${toComment(pen.name, 120)}`;
+  return `pen ${position} of ${count}: ${toComment(pen.colour, 50)}, name ${toComment(pen.name, 160)}`;
 }
 
 /** The pen that a comment of that form names, or null. */

@@ -14,5 +14,5 @@ export const CAUTIONS: readonly string[] = [
   'CAUTION: before the first run compare the bounds with sheet and clamps, check unit, zero and direction of Y, then run it with the pen clear of the sheet and a hand at the stop.',
   // Common practice, no source; eye protection: 29 CFR 1910.133.
   'CAUTION: moving parts pinch, nibs and knives are sharp, the carriage may pass the edge of the sheet. Keep clear, protect eyes. Follow the data sheets of inks and solvents and air the room.',
-  "CAUTION: lengths and time come from a model; this machine's limits are not known to whatever wrote this file.",
+  'CAUTION: lengths and time come from a model. The limits of this machine were not known when the file was written.',
 ];

@@ -1,0 +1,44 @@
+import parsePath from 'svg-path-parser';
+import { arcFromEndpoints } from '../../src/core/geometry/arc.ts';
+import { SegmentBuilder, type Segments } from '../../src/core/geometry/segments.ts';
+
+export interface WrittenGroup {
+  readonly attributes: ReadonlyMap<string, string>;
+  readonly paths: readonly string[];
+}
+
+/** The groups of a text that `writeSvg` made, by its lines: no reader of ours takes part. */
+export function groupsOf(svg: string): WrittenGroup[] {
+  return [...svg.matchAll(/^<g ([^>]*)>\n([\s\S]*?)^<\/g>$/gm)].map(([, head, body]) => ({
+    attributes: new Map([...head.matchAll(/([\w:-]+)="([^"]*)"/g)].map(([, name, value]) => [name, value])),
+    paths: [...body.matchAll(/<path d="([^"]*)"\/>/g)].map(([, d]) => d),
+  }));
+}
+
+/**
+ * The segments of one path's data as `writeSvg` writes it (absolute, but for h0), parsed by
+ * svg-path-parser; `closed` where it ends in Z.
+ */
+export function segmentsOfPath(d: string): { segments: Segments; closed: boolean } {
+  const builder = new SegmentBuilder();
+  let [x0, y0, startX, startY] = [0, 0, 0, 0];
+  let closed = false;
+  for (const c of parsePath(d)) {
+    const [x, y] = c.code === 'h' ? [x0 + c.x!, y0] : c.code === 'Z' ? [startX, startY] : [c.x!, c.y!];
+    if (c.code === 'M') [startX, startY] = [x, y];
+    else if (c.code === 'L' || c.code === 'h') builder.line(x0, y0, x, y);
+    else if (c.code === 'C') builder.cubic(x0, y0, c.x1!, c.y1!, c.x2!, c.y2!, x, y);
+    else if (c.code === 'A') {
+      const arc = arcFromEndpoints(x0, y0, c.rx!, c.ry!, c.xAxisRotation!, c.largeArc!, c.sweep!, x, y);
+      if (typeof arc === 'string') throw new Error(`an arc that is none: ${arc}`);
+      builder.arc(x0, y0, x, y, arc.cx, arc.cy, arc.ux, arc.uy, arc.vx, arc.vy, arc.theta0, arc.sweep);
+    } else if (c.code === 'Z') {
+      closed = true;
+      if (x0 !== x || y0 !== y) builder.line(x0, y0, x, y);
+    } else {
+      throw new Error(`unexpected command ${c.code}`);
+    }
+    [x0, y0] = [x, y];
+  }
+  return { segments: builder.finish(), closed };
+}
