@@ -5,7 +5,7 @@ import type { NearVertices } from './nearPairs.js';
 import type { TourGraph } from './problem.js';
 
 export interface Effort {
-  /** Kicks for each edge end; 0 only descends to a local optimum. */
+  /** Kicks for each end of a connector (small walks get more); 0 only descends to a local optimum. */
   readonly kicksPerEnd: number;
   readonly seed: number;
   /** Asked now and then; true ends the search with the best so far. */
@@ -17,6 +17,8 @@ export interface Effort {
 /** How many connectors apart, at most, the three of a kick stand in the walk. */
 const KICK_SPAN = 30;
 const ASK_EVERY = 256;
+/** Small walks get at least this many: they cost nothing. */
+const FEWEST_KICKS = 500;
 
 /**
  * Shortens a closed walk by iterated local search (Lourenço, Martin & Stützle 2003): descend by the
@@ -56,7 +58,7 @@ export function improveWalk(
   descend();
   walk.mark();
   const random = createRandom(effort.seed);
-  const kicks = walk.length < 5 ? 0 : Math.round(effort.kicksPerEnd * 2 * walk.length);
+  const kicks = kicksFor(walk, effort.kicksPerEnd);
   let cost = walk.totalCost();
   for (let k = 0; k < kicks && !stopped; k++) {
     if (k % (4 * ASK_EVERY) === 0) effort.onProgress(k / kicks, cost);
@@ -70,6 +72,14 @@ export function improveWalk(
   return { order: walk.order, stopped };
 }
 
+/** Each connector of the walk has two ends. */
+function kicksFor(walk: ClosedWalk, kicksPerEnd: number): number {
+  if (kicksPerEnd === 0) return 0;
+  let connectors = 0;
+  for (const h of walk.order) if (walk.cost(h ^ 1, walk.partner(h ^ 1)) > 0) connectors++;
+  return Math.max(FEWEST_KICKS, Math.round(2 * kicksPerEnd * connectors));
+}
+
 /** Swaps two neighbouring stretches between three connectors chosen near each other in the walk. */
 function kick(walk: ClosedWalk, random: () => number, touched: (node: number) => void): boolean {
   const start = walk.order[Math.floor(random() * walk.length)] ^ 1;
@@ -79,7 +89,7 @@ function kick(walk: ClosedWalk, random: () => number, touched: (node: number) =>
   if (e < 0) return false;
   const [b, d, f] = [walk.partner(a), walk.partner(c), walk.partner(e)];
   const inOrder = walk.stepsBetween(a, c) <= walk.stepsBetween(a, e) && a !== c && c !== e && a !== e;
-  if (!inOrder || walk.stepsBetween(a, e) > walk.length / 2) return false;
+  if (!inOrder) return false;
   walk.exchange(a, e);
   walk.exchange(a, d);
   walk.exchange(e, b);

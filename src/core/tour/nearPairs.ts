@@ -43,6 +43,9 @@ export interface NearVertices {
   readonly near: Int32Array;
 }
 
+/** Places of one other component among the neighbours of a vertex: more would crowd out the others. */
+const PER_COMPONENT = 2;
+
 /**
  * For every vertex the Delaunay neighbours and the nearest few, at most `limit` of them. Two vertices of
  * one component are neighbours only where both are odd or one is home: any other connector between them
@@ -70,11 +73,18 @@ export function nearVertices(graph: TourGraph, delaunay: Int32Array, limit: numb
   const near: number[] = [];
   for (let v = 0; v <= graph.home; v++) {
     const list = lists[v];
-    for (const u of index.neighbors(graph.x[v], graph.y[v], 2 * limit)) {
+    for (const u of index.neighbors(graph.x[v], graph.y[v], 3 * limit)) {
       if (u !== v && worthwhile(u, v) && !list.includes(u)) list.push(u);
     }
     list.sort((a, b) => distance(graph, v, a) - distance(graph, v, b) || a - b);
-    for (let i = 0; i < Math.min(limit, list.length); i++) near.push(list[i]);
+    const taken = new Map<number, number>();
+    for (const u of list) {
+      if (near.length - first[v] === limit) break;
+      const there = taken.get(graph.component[u]) ?? 0;
+      if (there === PER_COMPONENT && graph.component[u] !== graph.component[v]) continue;
+      taken.set(graph.component[u], there + 1);
+      near.push(u);
+    }
     first[v + 1] = near.length;
   }
   for (let v = graph.home + 1; v < n; v++) first[v + 1] = near.length;
