@@ -64,25 +64,22 @@ function boardThreeLayers() {
   const pad = ([x, y]) => `<circle cx="${n(x)}" cy="${n(y)}" r="1"/>`;
   const track = (points) => `<polyline points="${points.map(([x, y]) => `${n(x)},${n(y)}`).join(' ')}"/>`;
   const tracks = [];
-  // The first five upper pads go to a lower pad three places on: down, 45 degrees, down.
-  for (let i = 0; i < 5; i++) {
+  // Six upper pads go to the lower pad two places on: down, 45 degrees, down.
+  for (let i = 0; i < 6; i++) {
     const x = 12 + 5 * i;
     tracks.push(
       track([
         [x, 13],
         [x, 15],
         [x + 10, 25],
-        [x + 15, 25],
-        [x + 15, 27],
+        [x + 10, 27],
       ]),
     );
   }
   // The pads left over are joined side by side, from ring to ring.
   for (const [x, y] of [
-    [37, 12],
     [42, 12],
     [12, 28],
-    [17, 28],
   ]) {
     tracks.push(
       track([

@@ -27,6 +27,7 @@ export function programFromTours(
     for (let r = 0; r + 1 < tour.runFirst.length; r++) {
       const halfEdges = tour.halfEdges.subarray(tour.runFirst[r], tour.runFirst[r + 1]);
       drawRun(runs, drawing, networks[pen], halfEdges);
+      runs.endRun();
       penOfRun.push(pen);
     }
   });
