@@ -4,6 +4,8 @@ import { atan2 } from './trig.js';
 
 /** Twice the most that `pointAt` is off, as a share of the largest coordinate. */
 const ROUNDING = 16 * Number.EPSILON;
+/** Covers what underflow loses. */
+const UNDERFLOW = 1e-300;
 /** An extreme this near beyond an arc's end is counted in; it is higher than the end by half the square. */
 const ANGLE_SLACK = 1e-9;
 
@@ -33,8 +35,9 @@ export function segmentBox(segments: Segments, i: number, out: Float64Array): vo
       arcExtremes(a, b, v, d[o + 10], d[o + 11], axis, out);
       size = Math.max(Math.abs(a) + Math.abs(b) + Math.abs(v), Math.abs(p0), Math.abs(p1));
     }
-    out[axis] -= ROUNDING * size;
-    out[axis + 2] += ROUNDING * size;
+    const margin = ROUNDING * size + UNDERFLOW;
+    out[axis] -= margin;
+    out[axis + 2] += margin;
   }
 }
 

@@ -1,21 +1,19 @@
+import { ellipseAxes } from './arc.js';
+import { integrate } from './quadrature.js';
 import { CUBIC, LINE, type Segments } from './segments.js';
-import { sinCos } from './trig.js';
+import { atan2, sinCos } from './trig.js';
 
 /** Deviation from a circle, relative, below which an arc is measured as one. */
 const ROUND = 1e-12;
-/** Largest difference of two estimates, as a share of the whole length, that ends the refinement. */
-const TOLERANCE = 1e-11;
-const ROUNDING = 4 * Number.EPSILON;
-const DEEPEST = 48;
 
 /**
  * The length of segment i between parameters t0 and t1, in either order.
  *
- * Accuracy: relative 1e-9, cusps and folded curves included; lines and circular arcs are exact up to
- * rounding. Cubics and elliptical arcs by Gauss–Legendre quadrature of the speed, halving where two
- * estimates differ: the speed is analytic away from cusps, where 10 points converge like h²⁰; at a
- * cusp it is like |t − c|, whose error falls fourfold with each halving.
- * Cost: 30 speeds for a smooth curve, some hundreds at cusps.
+ * Accuracy: relative 1e-9, at cusps, folds and near them too; lines and circular arcs to rounding.
+ * (A span much shorter than its curve and beside a cusp is as good as the rounding of its points.)
+ * Cubics and elliptical arcs are integrals of the speed, whose branch points are known in closed form
+ * (`cubicBranches`, `ellipseLength`), so that `integrate` can place its pieces before it begins.
+ * Cost: 10 to 40 speeds for a smooth curve, some hundreds where the speed nearly vanishes.
  */
 export function segmentLength(segments: Segments, i: number, t0 = 0, t1 = 1): number {
   const d = segments.data;
@@ -24,101 +22,88 @@ export function segmentLength(segments: Segments, i: number, t0 = 0, t1 = 1): nu
   const low = Math.min(t0, t1);
   const high = Math.max(t0, t1);
   if (kind === LINE) return (high - low) * norm(d[o + 2] - d[o], d[o + 3] - d[o + 1]);
-  if (kind === CUBIC) return integrate(cubicSpeed(d, o), low, high, 1, cubicPeak(d, o));
-  const sweep = Math.abs(d[o + 11]);
+  if (kind === CUBIC) return cubicLength(d, o, low, high);
   const u2 = d[o + 6] * d[o + 6] + d[o + 7] * d[o + 7];
   const v2 = d[o + 8] * d[o + 8] + d[o + 9] * d[o + 9];
   const uv = d[o + 6] * d[o + 8] + d[o + 7] * d[o + 9];
   if (Math.abs(u2 - v2) <= ROUND * u2 && Math.abs(uv) <= ROUND * u2) {
-    return (high - low) * sweep * Math.sqrt((u2 + v2) / 2);
+    return (high - low) * Math.abs(d[o + 11]) * Math.sqrt((u2 + v2) / 2);
   }
-  const quarters = Math.max(1, Math.ceil(((high - low) * sweep) / (Math.PI / 2) - 1e-9));
-  return integrate(arcSpeed(d, o), low, high, quarters, sweep * Math.sqrt(u2 + v2));
+  const { rx, ry } = ellipseAxes(d[o + 6], d[o + 7], d[o + 8], d[o + 9]);
+  // |P′| is least where P lies on the major axis: there tan 2θ = 2 u·v / (|u|² − |v|²).
+  const major = atan2(2 * uv, u2 - v2) / 2;
+  const a = d[o + 10] - major + low * d[o + 11];
+  return ellipseLength(rx, ry, a, a + (high - low) * d[o + 11]);
 }
 
-type Speed = (t: number) => number;
-
-function cubicSpeed(d: Float64Array, o: number): Speed {
+function cubicLength(d: Float64Array, o: number, low: number, high: number): number {
   const ax = 3 * (d[o + 4] - d[o]);
   const ay = 3 * (d[o + 5] - d[o + 1]);
   const bx = 3 * (d[o + 6] - d[o + 4]);
   const by = 3 * (d[o + 7] - d[o + 5]);
   const cx = 3 * (d[o + 2] - d[o + 6]);
   const cy = 3 * (d[o + 3] - d[o + 7]);
-  return (t) => {
+  const speed = (t: number): number => {
     const s = 1 - t;
-    const x = s * (s * ax + 2 * t * bx) + t * t * cx;
-    const y = s * (s * ay + 2 * t * by) + t * t * cy;
-    return Math.sqrt(x * x + y * y);
+    return norm(s * (s * ax + 2 * t * bx) + t * t * cx, s * (s * ay + 2 * t * by) + t * t * cy);
   };
-}
-
-/** No point of a cubic is faster than three times its longest control leg. */
-function cubicPeak(d: Float64Array, o: number): number {
-  return (
-    3 *
-    Math.max(
-      norm(d[o + 4] - d[o], d[o + 5] - d[o + 1]),
-      norm(d[o + 6] - d[o + 4], d[o + 7] - d[o + 5]),
-      norm(d[o + 2] - d[o + 6], d[o + 3] - d[o + 7]),
-    )
-  );
-}
-
-function arcSpeed(d: Float64Array, o: number): Speed {
-  const sc = new Float64Array(2);
-  const sweep = Math.abs(d[o + 11]);
-  return (t) => {
-    sinCos(d[o + 10] + t * d[o + 11], sc);
-    const x = d[o + 8] * sc[1] - d[o + 6] * sc[0];
-    const y = d[o + 9] * sc[1] - d[o + 7] * sc[0];
-    return sweep * Math.sqrt(x * x + y * y);
-  };
+  const branches = cubicBranches(ax, ay, 2 * (bx - ax), 2 * (by - ay), ax - 2 * bx + cx, ay - 2 * by + cy);
+  return integrate(speed, low, high, branches);
 }
 
 /**
- * The integral of a speed from a to b, begun on equal parts. `peak` bounds the speeds: they are rounded
- * to a few ulps of it, and differences below that are not pursued.
+ * x′ + i·y′ = a + b·t + c·t² is a quadratic with complex coefficients, and the speed is its modulus:
+ * |c|·|t − z1|·|t − z2|, which branches at the two roots and their conjugates.
  */
-function integrate(speed: Speed, a: number, b: number, parts: number, peak: number): number {
-  const step = (b - a) / parts;
-  const first = new Float64Array(parts);
-  let estimate = 0;
-  for (let k = 0; k < parts; k++) {
-    first[k] = gauss(speed, a + k * step, a + (k + 1) * step);
-    estimate += first[k];
+function cubicBranches(ax: number, ay: number, bx: number, by: number, cx: number, cy: number): number[] {
+  const rootX = bx * bx - by * by - 4 * (ax * cx - ay * cy);
+  const rootY = 2 * bx * by - 4 * (ax * cy + ay * cx);
+  const size = norm(rootX, rootY);
+  const large = Math.sqrt((size + Math.abs(rootX)) / 2);
+  const small = large > 0 ? Math.abs(rootY) / (2 * large) : 0;
+  let sx = rootX >= 0 ? large : small;
+  let sy = (rootX >= 0 ? small : large) * (rootY < 0 ? -1 : 1);
+  // Of the two square roots the one that adds to b without cancellation.
+  if (bx * sx + by * sy < 0) {
+    sx = -sx;
+    sy = -sy;
   }
-  const tolerance = Math.max(TOLERANCE * estimate, ROUNDING * peak * (b - a));
+  const qx = -(bx + sx) / 2;
+  const qy = -(by + sy) / 2;
+  const c2 = cx * cx + cy * cy;
+  const q2 = qx * qx + qy * qy;
+  return [
+    (qx * cx + qy * cy) / c2,
+    (qy * cx - qx * cy) / c2,
+    (ax * qx + ay * qy) / q2,
+    (ay * qx - ax * qy) / q2,
+  ];
+}
+
+/**
+ * The length of an ellipse's arc between angles counted from the major axis. The speed
+ * √(rx²·sin² + ry²·cos²) branches at multiples of π ± i·artanh(ry/rx), and artanh q ≥ q. Taken half
+ * turn by half turn about those multiples, so that others stay away by more than the piece's half.
+ */
+function ellipseLength(rx: number, ry: number, from: number, to: number): number {
+  const a = Math.min(from, to);
+  const b = Math.max(from, to);
+  const sc = new Float64Array(2);
+  const speed = (angle: number): number => {
+    sinCos(angle, sc);
+    return norm(rx * sc[0], ry * sc[1]);
+  };
+  const im = rx > 0 ? ry / rx : 0;
   let total = 0;
-  for (let k = 0; k < parts; k++) {
-    total += refine(speed, a + k * step, a + (k + 1) * step, first[k], tolerance, DEEPEST);
+  let start = a;
+  for (let k = Math.floor(a / Math.PI + 0.5); start < b; k++) {
+    const end = Math.min(b, (k + 0.5) * Math.PI);
+    if (end > start) {
+      total += integrate(speed, start, end, [k * Math.PI, im]);
+      start = end;
+    }
   }
   return total;
-}
-
-function refine(speed: Speed, a: number, b: number, whole: number, tolerance: number, depth: number): number {
-  const m = (a + b) / 2;
-  const left = gauss(speed, a, m);
-  const right = gauss(speed, m, b);
-  if (depth === 0 || !(Math.abs(left + right - whole) > tolerance)) return left + right;
-  return refine(speed, a, m, left, tolerance, depth - 1) + refine(speed, m, b, right, tolerance, depth - 1);
-}
-
-// Abramowitz, M., Stegun, I. A. (1964), Handbook of Mathematical Functions, table 25.4, n = 10.
-const NODES = [
-  0.1488743389816312, 0.4333953941292472, 0.6794095682990244, 0.8650633666889845, 0.9739065285171717,
-] as const;
-const WEIGHTS = [
-  0.2955242247147529, 0.2692667193099964, 0.219086362515982, 0.1494513491505806, 0.0666713443086881,
-] as const;
-
-/** Ten-point Gauss–Legendre quadrature from a to b. */
-function gauss(speed: Speed, a: number, b: number): number {
-  const m = (a + b) / 2;
-  const h = (b - a) / 2;
-  let sum = 0;
-  for (let k = 0; k < 5; k++) sum += WEIGHTS[k] * (speed(m - h * NODES[k]) + speed(m + h * NODES[k]));
-  return h * sum;
 }
 
 function norm(x: number, y: number): number {

@@ -21,7 +21,7 @@ export function moveSeconds(distance: number, speed: number, acceleration: numbe
   const change = Math.abs(to - from) / acceleration;
   if (distance === 0) return change;
   const peak = Math.sqrt((from * from + to * to) / 2 + acceleration * distance);
-  if (peak <= speed) return Math.max(change, (2 * peak - from - to) / acceleration);
-  const ramps = (2 * speed * speed - from * from - to * to) / (2 * acceleration);
-  return (2 * speed - from - to) / acceleration + (distance - ramps) / speed;
+  if (peak <= speed) return Math.max(change, (2 * peak - (from + to)) / acceleration);
+  const ramps = (2 * speed * speed - (from * from + to * to)) / (2 * acceleration);
+  return (2 * speed - (from + to)) / acceleration + (distance - ramps) / speed;
 }

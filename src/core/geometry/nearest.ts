@@ -136,6 +136,8 @@ function feetOnArc(
   sinCos(span / pieces / 4, sc);
   const w = sc[0] / sc[1];
   for (let k = 0; k < pieces; k++) {
+    // A foot on the seam of two pieces may fall between them by rounding.
+    if (k > 0) visit(low + ((high - low) * k) / pieces);
     const middle = low + ((high - low) * (k + 0.5)) / pieces;
     sinCos(theta0 + middle * sweep, sc);
     const ux = d[o + 6] * sc[1] + d[o + 8] * sc[0];

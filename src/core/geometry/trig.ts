@@ -92,6 +92,8 @@ function kernelCos(x: number, tail: number): number {
   return top + (1 - top - half + (z * r - x * tail));
 }
 
+/** Beyond this slope an angle is π/2 to the last bit. */
+const LARGEST_SLOPE = 2 ** 60;
 /** π minus the double nearest it. */
 const PI_LOW = 1.2246467991473532e-16;
 
@@ -107,7 +109,9 @@ export function atan2(y: number, x: number): number {
   const below = y < 0 || Object.is(y, -0);
   const ay = Math.abs(y);
   const ax = Math.abs(x);
-  const a = ay === 0 ? 0 : ay === Number.POSITIVE_INFINITY && ax === ay ? Math.PI / 4 : atan(ay / ax);
+  const steep = ay > ax * LARGEST_SLOPE || (ay > 0 && ax === 0);
+  if (steep) return below ? -Math.PI / 2 : Math.PI / 2;
+  const a = ay === Number.POSITIVE_INFINITY ? Math.PI / 4 : ay === 0 ? 0 : atan(ay / ax);
   const turned = left ? Math.PI - (a - PI_LOW) : a;
   return below ? -turned : turned;
 }

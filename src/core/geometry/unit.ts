@@ -21,7 +21,7 @@ export interface Length {
   readonly unit: LengthUnit;
 }
 
-/** mm; `pxPerInch` is for px only, the other units have one meaning. */
+/** mm; `pxPerInch` is for px only, the other units have one meaning. Accuracy: rounding. */
 export function toMm(value: number, unit: LengthUnit, pxPerInch = UNITS_PER_INCH.px): number {
   switch (unit) {
     case 'mm':
@@ -30,10 +30,9 @@ export function toMm(value: number, unit: LengthUnit, pxPerInch = UNITS_PER_INCH
       return value * 10;
     case 'Q':
       return value / 4;
-    case 'px':
-      return (value * 25.4) / pxPerInch;
     default:
-      return (value * 25.4) / UNITS_PER_INCH[unit];
+      // An inch is 127/5 mm: whole numbers stay exact until the one division.
+      return (value * 127) / (5 * (unit === 'px' ? pxPerInch : UNITS_PER_INCH[unit]));
   }
 }
 
