@@ -23,6 +23,8 @@ const NO_EFFECT_M = new Set([1, 3, 4, 5, 7, 8, 9, 48, 49]);
 const STOPS = new Set([0, 6, 60]);
 const ENDS = new Set([2, 30]);
 const MM_PER_INCH = 25.4;
+const MOVES = 'XYZIJ';
+const ROTARY = 'ABC';
 
 /**
  * What the words do: keeps the state of the machine and writes down its moves. Only motion in the XY
@@ -77,15 +79,23 @@ export class GcodeMachine {
   }
 
   private executeWords(): void {
-    const { letter, value } = this.words;
-    const axis: Record<string, number> = {};
+    const { words } = this;
+    const { letter, value } = words;
     let motions = 0;
     let dwell = false;
+    let along = false;
+    let stops = false;
     for (let k = 0; k < letter.length; k++) {
       const name = letter[k];
-      if (name === 'G') {
+      if (name === 'M') {
+        stops = true;
+      } else if (name !== 'G') {
+        if (letter.indexOf(name) < k) this.findings.add('gcode-word-twice', this.line, name);
+        if (MOVES.includes(name)) along = true;
+        if (ROTARY.includes(name)) this.findings.add('gcode-not-supported', this.line, name);
+      } else {
         const code = Math.round(value[k] * 10);
-        if (code >= 0 && code <= 30 && code % 10 === 0) {
+        if (code === 0 || code === 10 || code === 20 || code === 30) {
           this.motion = code / 10;
           motions++;
         } else if (code === 40) {
@@ -93,16 +103,11 @@ export class GcodeMachine {
         } else {
           this.setMode(code);
         }
-      } else if (name !== 'M') {
-        if (name in axis) this.findings.add('gcode-word-twice', this.line, name);
-        axis[name] = value[k];
       }
     }
     if (motions > 1) this.findings.add('gcode-same-group', this.line);
-    for (const name of 'ABC') if (name in axis) this.findings.add('gcode-not-supported', this.line, name);
-    const moves = motions > 0 || ['X', 'Y', 'Z', 'I', 'J'].some((name) => name in axis);
-    if (moves && !dwell) this.move(axis);
-    for (let k = 0; k < letter.length; k++) if (letter[k] === 'M') this.stopOrNot(value[k]);
+    if ((along || motions > 0) && !dwell) this.move(words);
+    if (stops) for (let k = 0; k < letter.length; k++) if (letter[k] === 'M') this.stopOrNot(value[k]);
   }
 
   private setMode(code: number): void {
@@ -120,16 +125,16 @@ export class GcodeMachine {
     else if (!NO_EFFECT_M.has(code)) this.findings.add('gcode-word-ignored', this.line, `M${code}`);
   }
 
-  private move(axis: Record<string, number>): void {
+  private move(words: GcodeWords): void {
     if (this.motion === null) {
       this.findings.add('gcode-not-supported', this.line, 'G80');
       return;
     }
-    const x = this.target(axis.X, this.x);
-    const y = this.target(axis.Y, this.y);
-    const z = this.target(axis.Z, this.z);
+    const x = this.target(words.numberOf('X'), this.x);
+    const y = this.target(words.numberOf('Y'), this.y);
+    const z = this.target(words.numberOf('Z'), this.z);
     if (this.motion === CLOCKWISE || this.motion === COUNTERCLOCKWISE) {
-      const centre = this.centre(axis, x, y);
+      const centre = this.centre(words, x, y);
       if (centre === null) {
         this.findings.add('gcode-arc-error', this.line);
         return;
@@ -156,11 +161,12 @@ export class GcodeMachine {
     return current + value * this.scale;
   }
 
-  private centre(axis: Record<string, number>, x: number, y: number) {
-    const i = axis.I;
-    const j = axis.J;
-    const r = axis.R;
-    if ('K' in axis || (r !== undefined && (i !== undefined || j !== undefined))) return null;
+  private centre(words: GcodeWords, x: number, y: number) {
+    const i = words.numberOf('I');
+    const j = words.numberOf('J');
+    const r = words.numberOf('R');
+    if (words.numberOf('K') !== undefined || (r !== undefined && (i !== undefined || j !== undefined)))
+      return null;
     if (r !== undefined) {
       return centreFromRadius(this.x, this.y, x, y, r * this.scale, this.motion === CLOCKWISE);
     }

@@ -56,6 +56,12 @@ export class GcodeWords {
     }
   }
 
+  /** The number of the first word with this letter. */
+  numberOf(letter: string): number | undefined {
+    const i = this.letter.indexOf(letter);
+    return i < 0 ? undefined : this.value[i];
+  }
+
   private readPercent(): void {
     this.at++;
     this.skipBlanks();
@@ -95,13 +101,11 @@ export class GcodeWords {
 
   private readWord(letter: string): void {
     const start = this.at++;
-    let number = '';
-    for (this.skipBlanks(); this.at < this.text.length; this.skipBlanks()) {
-      const code = this.text.charCodeAt(this.at);
-      const signed = number === '' && (code === PLUS || code === MINUS);
-      if (!signed && code !== POINT && !(code >= ZERO && code <= NINE)) break;
-      number += this.char();
-      this.at++;
+    this.skipBlanks();
+    let number = this.digits();
+    // The rest of a number that has blanks in it; a sign may only come first.
+    for (this.skipBlanks(); this.at < this.text.length && this.isNumeric(number === ''); this.skipBlanks()) {
+      number += this.digits();
     }
     if (REAL_NUMBER.test(number)) {
       this.letter.push(letter);
@@ -111,6 +115,18 @@ export class GcodeWords {
     } else {
       this.fail('gcode-bad-number', start);
     }
+  }
+
+  /** What of a number stands here without a blank: a sign perhaps, digits and points. */
+  private digits(): string {
+    const from = this.at;
+    while (this.at < this.text.length && this.isNumeric(this.at === from)) this.at++;
+    return this.text.slice(from, this.at);
+  }
+
+  private isNumeric(signToo: boolean): boolean {
+    const code = this.text.charCodeAt(this.at);
+    return (code >= ZERO && code <= NINE) || code === POINT || (signToo && (code === PLUS || code === MINUS));
   }
 
   private skipBlanks(): void {
