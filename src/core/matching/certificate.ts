@@ -47,14 +47,17 @@ function matesFail(problem: MatchingProblem, mate: Int32Array): string | null {
 }
 
 function shapeFails(n: number, certificate: Certificate): string | null {
-  const { scale, vertexDual, setDual, setFirst, setMembers } = certificate;
+  const { scale, vertexDual, setDual, setFirst, setEnd, setMembers } = certificate;
   if (!(scale > 0 && Number.isFinite(2 * scale)) || 2 ** Math.round(Math.log2(scale)) !== scale) {
     return 'the scale is no power of two';
   }
-  if (vertexDual.length !== n || setFirst.length !== setDual.length + 1)
+  const sets = setDual.length;
+  if (vertexDual.length !== n || setFirst.length !== sets || setEnd.length !== sets) {
     return 'the columns do not fit together';
-  if (setFirst[0] !== 0 || setFirst[setDual.length] !== setMembers.length)
-    return 'the sets do not fill their column';
+  }
+  for (let i = 0; i < sets; i++) {
+    if (setFirst[i] > setEnd[i] || setEnd[i] > setMembers.length) return `set ${i} leaves its column`;
+  }
   for (const dual of vertexDual) {
     if (!Number.isInteger(dual) || Math.abs(dual) > EXACT) return 'a vertex dual is no exact integer';
   }
@@ -67,12 +70,12 @@ function shapeFails(n: number, certificate: Certificate): string | null {
 
 /** Sets must be odd, laminar (either apart or one in the other), and left by one pair where their dual counts. */
 function setsFail(n: number, matching: CertifiedMatching): string | null {
-  const { setDual, setFirst, setMembers } = matching.certificate;
+  const { setDual, setFirst, setEnd, setMembers } = matching.certificate;
   const inSet = new Int32Array(n).fill(-1);
   for (let i = 0; i < setDual.length; i++) {
-    const size = setFirst[i + 1] - setFirst[i];
+    const size = setEnd[i] - setFirst[i];
     if (size < 3 || size % 2 === 0) return `set ${i} is not odd`;
-    const members = setMembers.subarray(setFirst[i], setFirst[i + 1]);
+    const members = setMembers.subarray(setFirst[i], setEnd[i]);
     for (const v of members) {
       if (v >= n || inSet[v] === i) return `set ${i} has a wrong member`;
       inSet[v] = i;
@@ -94,13 +97,13 @@ interface Nesting {
 
 /** Null where two sets overlap: taken from large to small, all members of a set must lie in the same set so far. */
 function nesting(n: number, certificate: Certificate): Nesting | null {
-  const { setDual, setFirst, setMembers } = certificate;
+  const { setDual, setFirst, setEnd, setMembers } = certificate;
   const order = Array.from(setDual, (_, i) => i);
-  order.sort((a, b) => setFirst[b + 1] - setFirst[b] - (setFirst[a + 1] - setFirst[a]) || a - b);
+  order.sort((a, b) => setEnd[b] - setFirst[b] - (setEnd[a] - setFirst[a]) || a - b);
   const around = new Int32Array(setDual.length);
   const innermost = new Int32Array(n).fill(-1);
   for (const i of order) {
-    const members = setMembers.subarray(setFirst[i], setFirst[i + 1]);
+    const members = setMembers.subarray(setFirst[i], setEnd[i]);
     around[i] = innermost[members[0]];
     for (const v of members) {
       if (innermost[v] !== around[i]) return null;

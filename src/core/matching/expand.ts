@@ -1,5 +1,5 @@
 import { BEST, type Forest, pairRing, relabel, split } from './forest.js';
-import { RUNS_OUT, scanGrown, scanReleased } from './scan.js';
+import { scanGrown, scanReleased } from './scan.js';
 
 /**
  * A shrinking blossom's dual has run out: it is taken apart. The even way round its cycle, from the child
@@ -54,11 +54,11 @@ export function expand(f: Forest, s: number): void {
   for (const child of released) scanReleased(f, set[firstVertex[child]]);
 }
 
-/** A set has begun to shrink: if it is a blossom, notes when its dual will have run out. */
+/** A set has begun to shrink: if it is a blossom, promises when its dual will have run out (~ a vertex, no arc). */
 export function promiseExpansion(f: Forest, s: number): void {
   const blossom = f.node[s];
   if (blossom < f.n) return;
   // While shrinking z is z[blossom] − 2·time.
   const when = f.z[blossom] / 2;
-  if (when < f.clock[BEST]) f.events.push(when, f.firstVertex[blossom], RUNS_OUT);
+  if (when < f.clock[BEST]) f.events.push(when, f.promises++, ~f.firstVertex[blossom]);
 }

@@ -20,18 +20,22 @@ export function certificateOf(f: Forest, layout: Layout, scale: number, nests: A
   const sets = nests.blossoms.filter((blossom) => z[blossom] > 0);
   const setDual = Float64Array.from(sets, (blossom) => z[blossom] / 2);
   for (const dual of setDual) sum.add(dual);
-  const setFirst = new Uint32Array(sets.length + 1);
-  for (let i = 0; i < sets.length; i++) setFirst[i + 1] = setFirst[i] + size[sets[i]];
-  const setMembers = new Uint32Array(setFirst[sets.length]);
-  for (let i = 0; i < sets.length; i++) {
-    let at = setFirst[i];
-    for (let v = firstVertex[sets[i]]; ; v = next[v]) {
+  // A blossom's vertices are a run of its outermost blossom's chain.
+  const setMembers = new Uint32Array(n);
+  const position = new Int32Array(n);
+  let at = 0;
+  for (const blossom of nests.blossoms) {
+    if (nests.outermost[blossom] !== blossom) continue;
+    for (let v = firstVertex[blossom]; ; v = next[v]) {
+      position[v] = at;
       setMembers[at++] = original[v];
-      if (v === lastVertex[sets[i]]) break;
+      if (v === lastVertex[blossom]) break;
     }
   }
+  const setFirst = Uint32Array.from(sets, (blossom) => position[firstVertex[blossom]]);
+  const setEnd = Uint32Array.from(sets, (blossom) => position[firstVertex[blossom]] + size[blossom]);
   const lowerBound = roundedDown(sum.value()) / (2 * scale);
-  return { scale, vertexDual, setDual, setFirst, setMembers, lowerBound };
+  return { scale, vertexDual, setDual, setFirst, setEnd, setMembers: setMembers.slice(0, at), lowerBound };
 }
 
 /** Opens every blossom and reads each vertex's mate, in the problem's numbering. Destroys the forest. */

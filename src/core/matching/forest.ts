@@ -61,7 +61,9 @@ export class Forest {
   readonly clock = new Float64Array(2);
   bestInner = -1;
   bestOuter = -1;
+  /** What is to happen when: (time, order of promising, arc or ~vertex of a blossom). First come, first served keeps trees round. */
   readonly events = new PairHeap();
+  promises = 0;
   round = 0;
   marks = 0;
   labelled = 0;

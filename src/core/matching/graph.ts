@@ -30,6 +30,7 @@ export class EdgeList {
 /** Every edge as two arcs: those leaving v are first[v] … first[v + 1] − 1. */
 export interface Graph {
   readonly first: Int32Array;
+  readonly tail: Int32Array;
   readonly head: Int32Array;
   readonly cost: Float64Array;
 }
@@ -53,6 +54,7 @@ export function buildGraph(n: number, edges: EdgeList): Graph {
     first[v + 1]++;
   }
   for (let v = 0; v < n; v++) first[v + 1] += first[v];
+  const tail = new Int32Array(2 * kept);
   const head = new Int32Array(2 * kept);
   const arcCost = new Float64Array(2 * kept);
   const at = first.slice(0, n);
@@ -60,12 +62,14 @@ export function buildGraph(n: number, edges: EdgeList): Graph {
     const edge = keep[i];
     const u = from[edge];
     const v = to[edge];
+    tail[at[u]] = u;
     head[at[u]] = v;
     arcCost[at[u]++] = cost[edge];
+    tail[at[v]] = v;
     head[at[v]] = u;
     arcCost[at[v]++] = cost[edge];
   }
-  return { first, head, cost: arcCost };
+  return { first, tail, head, cost: arcCost };
 }
 
 function bucketByFrom(n: number, from: Int32Array, count: number): Int32Array {

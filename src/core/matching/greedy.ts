@@ -18,35 +18,37 @@ export function greedyMatching(problem: MatchingProblem): Matching {
   const rankings = Array.from({ length: special }, (_, i) => ranking(problem, placed + i));
   const ranked = new Int32Array(special);
   const mate = new Int32Array(n).fill(-1);
-  // The partner each free vertex has its one entry in the heap for.
-  const partner = new Int32Array(n).fill(-1);
   const heap = new PairHeap();
 
-  const announce = (v: number): void => {
-    if (v < placed) {
-      partner[v] = points.nearest(v);
-    } else {
-      const list = rankings[v - placed];
-      let at = ranked[v - placed];
-      while (at < list.length && mate[list[at]] >= 0) at++;
-      ranked[v - placed] = at;
-      partner[v] = at < list.length ? list[at] : -1;
-    }
-    const w = partner[v];
-    if (w >= 0) heap.push(pairCost(problem, v, w), Math.min(v, w), Math.max(v, w));
+  // The entry (cost, v, partner) of a free vertex v: its cheapest pair, of equal ones with the lowest partner.
+  const cheapest = (v: number): number => {
+    if (v < placed) return points.nearest(v);
+    const list = rankings[v - placed];
+    let at = ranked[v - placed];
+    while (at < list.length && mate[list[at]] >= 0) at++;
+    ranked[v - placed] = at;
+    return at < list.length ? list[at] : -1;
   };
-
-  for (let v = 0; v < n; v++) announce(v);
-  // An entry's cost never falls as vertices go, so the least entry with both ends free is the cheapest pair.
+  for (let v = 0; v < n; v++) {
+    const w = cheapest(v);
+    if (w >= 0) heap.push(pairCost(problem, v, w), v, w);
+  }
+  // Costs only rise as vertices go, so entries are lower bounds: the least one that still holds is the cheapest
+  // pair, and among equal costs every lower vertex has had its turn.
   while (heap.pop()) {
-    const { a, b } = heap;
-    if (mate[a] < 0 && mate[b] < 0) {
-      mate[a] = b;
-      mate[b] = a;
-      if (a < placed) points.remove(a);
-      if (b < placed) points.remove(b);
-    } else if (mate[a] < 0 && partner[a] === b) announce(a);
-    else if (mate[b] < 0 && partner[b] === a) announce(b);
+    const { key, a } = heap;
+    if (mate[a] >= 0) continue;
+    const b = mate[heap.b] < 0 ? heap.b : cheapest(a);
+    if (b < 0) continue;
+    const cost = pairCost(problem, a, b);
+    if (cost > key) {
+      heap.push(cost, a, b);
+      continue;
+    }
+    mate[a] = b;
+    mate[b] = a;
+    if (a < placed) points.remove(a);
+    if (b < placed) points.remove(b);
   }
   return { mate, total: totalOf(problem, mate) };
 }

@@ -30,7 +30,8 @@ export function interrupted(layout: Layout, costs: IntegerCosts): CertifiedMatch
     scale: costs.scale,
     vertexDual,
     setDual: new Float64Array(0),
-    setFirst: new Uint32Array(1),
+    setFirst: new Uint32Array(0),
+    setEnd: new Uint32Array(0),
     setMembers: new Uint32Array(0),
     lowerBound: roundedDown(sum.value()) / (2 * costs.scale),
   };

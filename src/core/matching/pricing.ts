@@ -61,10 +61,10 @@ class Pricer {
       const b = stack.pop() as number;
       const a = stack.pop() as number;
       const common = commonBlossom(nests, blossom[a], blossom[b]);
-      const need = highest[a] + highest[b] - (common < 0 ? 0 : zSum[common]);
-      if (costs.atLeast(boxDistance(tree, a, b)) >= need) continue;
+      const shared = common < 0 ? 0 : zSum[common];
+      if (costs.atLeast(boxDistance(tree, a, b)) + shared >= highest[a] + highest[b]) continue;
       if (a < tree.leaves && b < tree.leaves) {
-        this.leafPair(a, b);
+        this.leafPair(a, b, shared);
       } else if (a === b) {
         const left = tree.left[a];
         const right = tree.right[a];
@@ -80,7 +80,7 @@ class Pricer {
     }
   }
 
-  private leafPair(a: number, b: number): void {
+  private leafPair(a: number, b: number, shared: number): void {
     const { tree, first } = this.layout;
     const { highest } = this.places;
     const endA = Math.min(tree.x.length, LEAF * a + LEAF);
@@ -88,7 +88,7 @@ class Pricer {
     for (let p = LEAF * a; p < endA; p++) {
       for (let q = a === b ? p : LEAF * b; q < endB; q++) {
         const cost = this.costs.between(first[p], first[q]);
-        if (cost < highest[p] + highest[q]) this.placePair(p, q, cost);
+        if (cost + shared < highest[p] + highest[q]) this.placePair(p, q, cost);
       }
     }
   }

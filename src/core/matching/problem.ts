@@ -29,9 +29,14 @@ export interface Certificate {
   readonly scale: number;
   /** Free dual y of every vertex. */
   readonly vertexDual: Float64Array;
-  /** Odd sets with their duals ≥ 0: set i holds `members[first[i]]` up to `members[first[i + 1]]`. */
+  /**
+   * Odd sets with their duals ≥ 0: set i holds `setMembers[setFirst[i]]` up to, not including,
+   * `setMembers[setEnd[i]]`. Runs may lie in one another, as the sets do: nests thousands deep then take no
+   * more room than the vertices.
+   */
   readonly setDual: Float64Array;
   readonly setFirst: Uint32Array;
+  readonly setEnd: Uint32Array;
   readonly setMembers: Uint32Array;
   /** Sum of all duals / (2·scale), rounded down: no perfect matching costs less, in the problem's unit. */
   readonly lowerBound: number;

@@ -1,8 +1,5 @@
 import { BEST, type Forest, TIME } from './forest.js';
 
-/** In place of an arc: a shrinking blossom's dual runs out. */
-export const RUNS_OUT = -1;
-
 /**
  * Looks along the arcs of the vertices `from` … `to` (a chain) of the grown set s: promises the times at
  * which their slack is used up, if that is before the search would end anyway.
@@ -26,7 +23,7 @@ export function scanGrown(f: Forest, from: number, to: number, s: number): void 
       if (side > 0) {
         // The other end has grown by `time` too: half of what is left, from now.
         const when = (time + slack) / 2;
-        if (when < best) events.push(when, v, arc);
+        if (when < best) events.push(when, f.promises++, arc);
         continue;
       }
       const when = time + slack;
@@ -38,7 +35,7 @@ export function scanGrown(f: Forest, from: number, to: number, s: number): void 
       } else if (reachRound[r] !== round || when < reach[r]) {
         reachRound[r] = round;
         reach[r] = when;
-        events.push(when, v, arc);
+        events.push(when, f.promises++, arc);
       }
     }
     if (v === to) break;
@@ -65,7 +62,7 @@ export function scanReleased(f: Forest, s: number): void {
         earliest = when;
         reachRound[s] = round;
         reach[s] = when;
-        events.push(when, v, arc);
+        events.push(when, f.promises++, arc);
       }
     }
     if (v === f.lastVertex[node]) break;

@@ -1,6 +1,6 @@
 import { expand, promiseExpansion } from './expand.js';
 import { BEST, type Forest, relabel, TIME } from './forest.js';
-import { RUNS_OUT, scanGrown } from './scan.js';
+import { scanGrown } from './scan.js';
 import { shrink } from './shrink.js';
 
 /**
@@ -14,6 +14,7 @@ export function search(f: Forest, root: number, limit: number): boolean {
   f.round++;
   f.labelled = 1;
   f.touched.length = 0;
+  f.promises = 0;
   events.clear();
   clock[TIME] = 0;
   clock[BEST] = Number.POSITIVE_INFINITY;
@@ -35,24 +36,26 @@ export function search(f: Forest, root: number, limit: number): boolean {
       return false;
     }
     events.pop();
-    happen(f, events.a, events.b);
+    happen(f, events.b);
   }
 }
 
 /** An event is due; one that later changes have overtaken shows by the slack that is left, and is dropped. */
-function happen(f: Forest, v: number, arc: number): void {
+function happen(f: Forest, what: number): void {
   const { set, sign, node, pi, off, clock } = f;
-  const s = set[v];
   const time = clock[TIME];
-  if (arc === RUNS_OUT) {
-    const blossom = node[s];
-    if (sign[s] < 0 && blossom >= f.n && f.z[blossom] === 2 * time) expand(f, s);
+  if (what < 0) {
+    const s = set[~what];
+    if (sign[s] < 0 && node[s] >= f.n && f.z[node[s]] === 2 * time) expand(f, s);
     return;
   }
-  const w = f.graph.head[arc];
+  const { tail, head, cost } = f.graph;
+  const v = tail[what];
+  const w = head[what];
+  const s = set[v];
   const r = set[w];
   if (s === r || sign[s] + sign[r] <= 0) return;
-  const slack = f.graph.cost[arc] - pi[v] - off[s] - pi[w] - off[r] - (sign[s] + sign[r]) * time;
+  const slack = cost[what] - pi[v] - off[s] - pi[w] - off[r] - (sign[s] + sign[r]) * time;
   if (slack !== 0) return;
   if (sign[s] === sign[r]) shrink(f, v, w);
   else if (sign[s] > 0) grow(f, v, w);
