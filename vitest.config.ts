@@ -4,6 +4,7 @@ export default defineConfig({
   test: {
     include: ['test/**/*.test.ts'],
     reporters: ['default', './test/support/closingLine.ts'],
+    setupFiles: ['./test/support/seed.ts'],
     testTimeout: 120_000,
     maxWorkers: 2,
   },
