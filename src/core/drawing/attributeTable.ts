@@ -1,6 +1,7 @@
 import { Column } from './column.js';
 
 const DECODED = 0xffffffff;
+const MANY = 32;
 
 /**
  * The attributes of all elements as columns: a name's number and where its value stands in the text.
@@ -9,6 +10,8 @@ const DECODED = 0xffffffff;
  */
 export class AttributeTable {
   readonly names: string[] = [];
+  /** What stands before the colon of each name, null where there is none. */
+  readonly prefixes: (string | null)[] = [];
   private readonly numberOfName = new Map<string, number>();
   /** Attributes of element e: from first[e] up to first[e + 1], or to the last. */
   private readonly first = new Column();
@@ -16,12 +19,34 @@ export class AttributeTable {
   private readonly from = new Column();
   private readonly to = new Column();
   private readonly decoded: string[] = [];
+  private readonly manyNames = new Set<number>();
 
   constructor(private readonly text: string) {}
+
+  get elementCount(): number {
+    return this.first.length;
+  }
 
   /** What follows belongs to the next element; returns its number, from 0. */
   beginElement(): number {
     return this.first.push(this.name.length);
+  }
+
+  /** Whether the current element has an attribute of this name. A set serves a hostile tag of thousands. */
+  isRepeated(name: number): boolean {
+    const { manyNames } = this;
+    const begin = this.begin(this.first.length - 1);
+    const end = this.name.length;
+    if (end - begin < MANY) {
+      for (let i = begin; i < end; i++) if (this.name.values[i] === name) return true;
+      return false;
+    }
+    if (end - begin === MANY) {
+      manyNames.clear();
+      for (let i = begin; i < end; i++) manyNames.add(this.name.values[i]!);
+    }
+    const before = manyNames.size;
+    return manyNames.add(name).size === before;
   }
 
   /** A value as it stands in the text from `from` to `to`. */
@@ -40,6 +65,8 @@ export class AttributeTable {
     let number = this.numberOfName.get(name);
     if (number === undefined) {
       number = this.names.push(name) - 1;
+      const colon = name.indexOf(':');
+      this.prefixes.push(colon < 0 ? null : name.slice(0, colon));
       this.numberOfName.set(name, number);
     }
     return number;
@@ -51,6 +78,17 @@ export class AttributeTable {
 
   end(element: number): number {
     return element + 1 < this.first.length ? this.first.values[element + 1]! : this.name.length;
+  }
+
+  /** Characters of an element's values. */
+  sizeOf(element: number): number {
+    let size = 0;
+    for (let i = this.begin(element), end = this.end(element); i < end; i++) {
+      const from = this.from.values[i]!;
+      const to = this.to.values[i]!;
+      size += to === DECODED ? this.decoded[from]!.length : to - from;
+    }
+    return size;
   }
 
   nameAt(i: number): string {

@@ -1,4 +1,4 @@
-import { type Declaration, PROPERTIES, readDeclarations } from './declarations.js';
+import { type Declaration, readDeclarations } from './declarations.js';
 import type { FindingLog } from './findingLog.js';
 import { StyleSheet } from './styleSheet.js';
 import { type SvgElement, type SvgTree, textOf } from './svgTree.js';
@@ -38,8 +38,8 @@ export class Cascade {
     const { attributes } = tree;
     specified.clear();
     for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
-      const name = attributes.nameAt(i);
-      if (!name.includes(':')) specified.set(name, attributes.valueAt(i));
+      const name = attributes.nameNumberAt(i);
+      if (attributes.prefixes[name] === null) specified.set(attributes.names[name]!, attributes.valueAt(i));
     }
     const style = specified.get('style');
     if (style === undefined && this.sheet.isEmpty) return specified;
@@ -59,7 +59,7 @@ export class Cascade {
     return this.sheet.declarationsFor({
       name: element.name,
       id: this.specified.get('id') ?? null,
-      classes: classes ? classes.split(/\s+/) : [],
+      classes: new Set(classes ? classes.split(/\s+/) : []),
     });
   }
 
@@ -72,10 +72,4 @@ export class Cascade {
     }
     return declarations;
   }
-}
-
-/** True where an element has any property of the style; most inherit all of it. */
-export function hasStyle(specified: ReadonlyMap<string, string>): boolean {
-  for (const name of specified.keys()) if (PROPERTIES.has(name)) return true;
-  return false;
 }

@@ -6,6 +6,8 @@ export interface Colour {
   readonly alpha: number;
 }
 
+/** Longer than any colour in earnest; matching takes time with the square of a hostile one. */
+const LONGEST = 400;
 const HEX = /^#(?:[0-9a-f]{3,4}|[0-9a-f]{6}|[0-9a-f]{8})$/;
 const FUNCTION = /^(rgba?|hsla?|hwb)\(([^()]*)\)$/;
 
@@ -15,6 +17,7 @@ const FUNCTION = /^(rgba?|hsla?|hwb)\(([^()]*)\)$/;
  */
 export function readColour(text: string): Colour | null {
   const t = text.trim().toLowerCase();
+  if (t.length > LONGEST) return null;
   if (HEX.test(t)) return hexColour(t.slice(1));
   if (t === 'transparent') return { hex: '#000000', alpha: 0 };
   const named = COLOUR_NAMES.get(t);

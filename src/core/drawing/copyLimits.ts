@@ -2,6 +2,7 @@
 const MOST_COPIES = 100_000;
 const MOST_COPIED_ELEMENTS = 1_000_000;
 const MOST_COPIED_SEGMENTS = 5_000_000;
+const MOST_COPIED_CHARACTERS = 100_000_000;
 const DEEPEST = 256;
 
 /** Counts what `use` makes and says when it is enough. */
@@ -11,6 +12,7 @@ export class CopyLimits {
   private copies = 0;
   private elements = 0;
   private segments = 0;
+  private characters = 0;
 
   allowsDepth(depth: number): boolean {
     this.limit = DEEPEST;
@@ -22,10 +24,15 @@ export class CopyLimits {
     return this.copies++ < MOST_COPIES;
   }
 
-  /** Asked before each element inside a copy. */
-  allowsElement(): boolean {
-    this.limit = this.segments >= MOST_COPIED_SEGMENTS ? MOST_COPIED_SEGMENTS : MOST_COPIED_ELEMENTS;
-    return this.segments < MOST_COPIED_SEGMENTS && this.elements++ < MOST_COPIED_ELEMENTS;
+  /** Asked before each element inside a copy; `characters` is how much there is to read in it. */
+  allowsElement(characters: number): boolean {
+    this.elements++;
+    this.characters += characters;
+    const counts = [this.elements, this.segments, this.characters];
+    const limits = [MOST_COPIED_ELEMENTS, MOST_COPIED_SEGMENTS, MOST_COPIED_CHARACTERS];
+    const passed = limits.findIndex((limit, i) => counts[i]! > limit);
+    if (passed >= 0) this.limit = limits[passed]!;
+    return passed < 0;
   }
 
   addSegments(count: number): void {

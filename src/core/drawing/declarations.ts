@@ -26,8 +26,10 @@ export function readDeclarations(text: string): Declaration[] {
     const name = part.slice(0, colon).trim().toLowerCase();
     if (!PROPERTIES.has(name)) continue;
     const raw = part.slice(colon + 1).trim();
-    const value = raw.replace(/\s*!\s*important$/i, '');
-    if (value !== '') declarations.push({ name, value, important: value !== raw });
+    const bang = raw.lastIndexOf('!');
+    const important = bang >= 0 && /^!\s*important$/i.test(raw.slice(bang));
+    const value = important ? raw.slice(0, bang).trimEnd() : raw;
+    if (value !== '') declarations.push({ name, value, important });
   }
   return declarations;
 }

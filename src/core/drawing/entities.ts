@@ -3,6 +3,8 @@ import { Unreadable } from './findingLog.js';
 /** Expanded text an entity may add to a document in all; real ones add some hundred characters. */
 const LIMIT_CHARACTERS = 4_000_000;
 
+const LONGEST_NAME = 256;
+
 const PREDEFINED: ReadonlyMap<string, string> = new Map([
   ['amp', '&'],
   ['lt', '<'],
@@ -45,12 +47,13 @@ export class Entities {
     let unknown: string | null = null;
     let markup: string | null = null;
     let from = 0;
+    let end = 0;
     for (; at >= 0; at = text.indexOf('&', at)) {
-      const end = text.indexOf(';', at);
-      const name = end < 0 || end - at > 256 ? null : text.slice(at + 1, end);
+      if (end >= 0 && end <= at) end = text.indexOf(';', at);
+      const name = end < 0 || end - at > LONGEST_NAME ? null : text.slice(at + 1, end);
       const value = name === null ? null : this.replacement(name);
       if (value === null) {
-        unknown ??= text.slice(at, Math.min(end < 0 ? text.length : end + 1, at + 40));
+        unknown ??= text.slice(at, Math.min(end < 0 ? text.length : end + 1, at + 40)).split(/\s/)[0]!;
         at++;
         continue;
       }

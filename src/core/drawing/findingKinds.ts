@@ -20,6 +20,7 @@ export const READING_FINDINGS = {
   'xml-text-outside-root': 'error', // found
   'xml-too-deep': 'error', // limit
   'xml-unreadable': 'error',
+  'too-large': 'error',
   'entity-limit': 'error', // entity; limitCharacters
   'entity-loop': 'error', // entity
 

@@ -14,11 +14,14 @@ interface Entry {
 export class FindingLog {
   private readonly entries = new Map<ReadingCode, Entry>();
 
-  /** `place` is asked only the first time, since finding a line and column costs a search. */
-  add(code: ReadingCode, place: () => Place | null, first: Values = {}, count = 1): void {
+  /** `place` and `first` are asked only the first time: finding a line and column costs a search. */
+  add(code: ReadingCode, place: () => Place | null, first: Values | (() => Values) = {}, count = 1): void {
     const known = this.entries.get(code);
     if (known) known.count += count;
-    else this.entries.set(code, { place: place(), first, count, sums: new Map() });
+    else {
+      const values = typeof first === 'function' ? first() : first;
+      this.entries.set(code, { place: place(), first: values, count, sums: new Map() });
+    }
   }
 
   /** Adds to a value that is a sum over all times, after `add`. */

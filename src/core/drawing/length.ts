@@ -17,11 +17,14 @@ export interface WrittenLength {
   readonly unit: LengthUnit | '%' | 'em' | 'ex' | 'ch' | 'rem' | '';
 }
 
-const SHAPE = /^\s*([+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?)\s*(%|[a-z]*)\s*$/i;
+const SHAPE = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?)\s*(%|[a-z]*)$/i;
+/** Longer than any length in earnest; matching takes time with the square of a hostile one. */
+const LONGEST = 400;
 
 /** null for anything but a finite number and a unit known here. */
 export function readLength(text: string): WrittenLength | null {
-  const match = SHAPE.exec(text);
+  const trimmed = text.trim();
+  const match = trimmed.length > LONGEST ? null : SHAPE.exec(trimmed);
   if (!match) return null;
   const value = Number(match[1]) + 0;
   if (!Number.isFinite(value)) return null;

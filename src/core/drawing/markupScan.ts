@@ -5,6 +5,7 @@ import { skipDoctype } from './doctype.js';
 import { Entities } from './entities.js';
 import { type FindingLog, Unreadable } from './findingLog.js';
 import type { LineIndex } from './lineIndex.js';
+import { LongText } from './longText.js';
 
 /** Elements may stand this deep in one another; drawings stay below 50. */
 const DEEPEST = 1024;
@@ -43,7 +44,7 @@ class MarkupScan {
   private at = 0;
   private nextLess = -1;
   private nextAmpersand = -1;
-  private markup = '';
+  private readonly markup = new LongText();
   private pendingText = '';
   private rootDone = false;
   private readonly texts: string[] = [];
@@ -51,7 +52,6 @@ class MarkupScan {
   private readonly oddNames: string[] = [];
   private readonly placeholders = new Map<string, string>();
   private readonly starts = new Column();
-  private readonly manyNames = new Set<number>();
   private readonly open: string[] = [];
   private readonly openStarts: number[] = [];
   private readonly entities = new Entities();
@@ -80,8 +80,8 @@ class MarkupScan {
     }
     if (this.open.length > 0) throw this.cutOff('element');
     if (!this.rootDone) throw this.fail('not-xml', 0, { found: text.trim().slice(0, 20) });
-    const { markup, texts, oddNames, attributes, starts } = this;
-    return { markup, texts, oddNames, attributes, starts: starts.values };
+    const { texts, oddNames, attributes, starts } = this;
+    return { markup: this.markup.finish(), texts, oddNames, attributes, starts: starts.values };
   }
 
   private checkBeginning(): void {
@@ -108,7 +108,7 @@ class MarkupScan {
   /** Writes the text gathered since the last tag: comments between do not part it. */
   private flushText(): void {
     if (this.pendingText === '') return;
-    this.markup += `v${this.texts.push(this.pendingText) - 1}`;
+    this.markup.add(`v${this.texts.push(this.pendingText) - 1}`);
     this.pendingText = '';
   }
 
@@ -147,7 +147,7 @@ class MarkupScan {
     if (expected !== name) throw this.fail('xml-tag-mismatch', start, { expected, found: name });
     this.at++;
     this.flushText();
-    this.markup += `</${this.plainName(name)}>`;
+    this.markup.add(`</${this.plainName(name)}>`);
     if (this.open.length === 0) this.rootDone = true;
   }
 
@@ -160,8 +160,8 @@ class MarkupScan {
     if (this.rootDone) throw this.fail('xml-two-roots', start, { found: name });
     if (this.open.length >= DEEPEST) throw this.fail('xml-too-deep', start, { limit: DEEPEST });
     this.flushText();
-    this.markup += `<${this.plainName(name)} n="e${this.starts.push(start)}"`;
-    const element = this.attributes.beginElement();
+    this.markup.add(`<${this.plainName(name)} n="e${this.starts.push(start)}"`);
+    this.attributes.beginElement();
     for (;;) {
       const before = this.at;
       this.skipSpace();
@@ -171,23 +171,23 @@ class MarkupScan {
         this.open.push(name);
         this.openStarts.push(start);
         this.at++;
-        this.markup += '>';
+        this.markup.add('>');
         return;
       }
       if (c === '/') {
         if (this.at + 1 >= text.length) throw this.cutOff('tag', start);
         if (text[this.at + 1] !== '>') throw this.fail('xml-bad-tag', start);
         this.at += 2;
-        this.markup += '/>';
+        this.markup.add('/>');
         if (this.open.length === 0) this.rootDone = true;
         return;
       }
       if (this.at === before) throw this.fail('xml-bad-tag', start);
-      this.attribute(start, element);
+      this.attribute(start);
     }
   }
 
-  private attribute(tagStart: number, element: number): void {
+  private attribute(tagStart: number): void {
     const { text } = this;
     const start = this.at;
     const name = this.name();
@@ -197,7 +197,8 @@ class MarkupScan {
     this.skipSpace();
     if (this.at >= text.length) throw this.cutOff('tag', tagStart);
     const quote = text[this.at];
-    if (name === '' || !hasEquals || (quote !== '"' && quote !== "'")) {
+    if (name === '') throw this.fail('xml-bad-tag', tagStart);
+    if (!hasEquals || (quote !== '"' && quote !== "'")) {
       throw this.fail('xml-bad-attribute', start, { attribute: name });
     }
     const from = this.at + 1;
@@ -209,7 +210,7 @@ class MarkupScan {
     }
     if (end < 0) throw this.cutOff('attribute', tagStart);
     const number = this.attributes.numberOf(name);
-    if (this.isRepeated(number, element)) {
+    if (this.attributes.isRepeated(number)) {
       throw this.fail('xml-duplicate-attribute', start, { attribute: name });
     }
     if (this.nextAmpersand < from) this.nextAmpersand = this.nextOf('&', from);
@@ -221,23 +222,6 @@ class MarkupScan {
   private nextOf(character: string, from: number): number {
     const at = this.text.indexOf(character, from);
     return at < 0 ? this.text.length : at;
-  }
-
-  /** A look through the few names of a usual tag; a set where a hostile one has thousands. */
-  private isRepeated(name: number, element: number): boolean {
-    const { attributes, manyNames } = this;
-    const begin = attributes.begin(element);
-    const end = attributes.end(element);
-    if (end - begin < 32) {
-      for (let i = begin; i < end; i++) if (attributes.nameNumberAt(i) === name) return true;
-      return false;
-    }
-    if (end - begin === 32) {
-      manyNames.clear();
-      for (let i = begin; i < end; i++) manyNames.add(attributes.nameNumberAt(i));
-    }
-    const before = manyNames.size;
-    return manyNames.add(name).size === before;
   }
 
   private name(): string {

@@ -10,6 +10,8 @@ export type Paint =
 export const NONE: Paint = { kind: 'none' };
 export const BLACK: Paint = { kind: 'colour', hex: '#000000', visible: true };
 
+/** Longer than any paint in earnest; matching takes time with the square of a hostile one. */
+const LONGEST = 1000;
 const URL = /^url\(\s*(?:"([^"]*)"|'([^']*)'|([^)]*?))\s*\)\s*/i;
 /** Colour functions that are valid CSS and not evaluated here. */
 const UNEVALUATED = /^(?:lab|lch|oklab|oklch|color|color-mix|device-cmyk|light-dark)\(/i;
@@ -26,6 +28,7 @@ export function readPaint(
   isServer: (id: string) => boolean,
 ): { readonly paint: Paint; readonly exact: boolean } | null {
   const t = text.trim();
+  if (t.length > LONGEST) return null;
   const lower = t.toLowerCase();
   if (lower === 'none') return { paint: NONE, exact: true };
   if (lower === 'currentcolor') return { paint: { kind: 'current' }, exact: true };

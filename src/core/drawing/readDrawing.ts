@@ -36,6 +36,8 @@ export function readDrawing(text: string, options: ReadOptions = {}): Drawing {
     return read(text, name, pxPerInch, log);
   } catch (error) {
     if (error instanceof Unreadable) return emptyDrawing(name, log, error);
+    // Memory is the one thing a text can be too large for, and engines say so with a RangeError.
+    if (error instanceof RangeError) return emptyDrawing(name, log, new Unreadable('too-large', null));
     throw error;
   }
 }

@@ -28,6 +28,8 @@ export interface CopyOf {
   readonly outer: CopyOf | null;
 }
 
+type Values = Readonly<Record<string, string | number>>;
+
 /** One reading of one drawing: what it has gathered so far. */
 export class Session {
   readonly cascade: Cascade;
@@ -38,21 +40,18 @@ export class Session {
   readonly places: Place[] = [];
   elementCount = 0;
   private readonly colourNumbers = new Map<string, number>();
-  private readonly placeNumbers = new Map<number, number>();
+  /** By element number, plus one; 0 where the element has no place yet. */
+  private readonly placeNumbers: Uint32Array;
 
   constructor(
     readonly tree: SvgTree,
     readonly log: FindingLog,
   ) {
     this.cascade = new Cascade(tree, log);
+    this.placeNumbers = new Uint32Array(tree.elementCount);
   }
 
-  report(
-    code: ReadingCode,
-    element: SvgElement,
-    first: Readonly<Record<string, string | number>> = {},
-    count = 1,
-  ): void {
+  report(code: ReadingCode, element: SvgElement, first: Values | (() => Values) = {}, count = 1): void {
     this.log.add(code, () => this.tree.placeOf(element), first, count);
   }
 
@@ -67,16 +66,15 @@ export class Session {
 
   /** Copies of an element share its place. */
   placeNumber(element: SvgElement): number {
-    let number = this.placeNumbers.get(element.number);
-    if (number === undefined) {
-      number = this.places.push(this.tree.placeOf(element)) - 1;
-      this.placeNumbers.set(element.number, number);
-    }
+    const known = this.placeNumbers[element.number]!;
+    if (known > 0) return known - 1;
+    const number = this.places.push(this.tree.placeOf(element)) - 1;
+    this.placeNumbers[element.number] = number + 1;
     return number;
   }
 }
 
 /** A value as people can read it in a message. */
 export function shown(text: string): string {
-  return text.replace(/\s+/g, ' ').trim().slice(0, 60);
+  return text.slice(0, 400).replace(/\s+/g, ' ').trim().slice(0, 60);
 }

@@ -39,21 +39,19 @@ export interface Drawn {
 
 /** Gathers the strokes of a drawing: one per sub-path, in the order in which they come. */
 export class StrokeSink implements PathSink {
+  /** Segments drawn or measured so far. */
+  segmentsSeen = 0;
   private readonly builder = new SegmentBuilder();
   private readonly sub = new SubPath();
   private readonly first = new Column();
   private readonly colour = new Column();
   private readonly layer = new Column();
   private readonly element = new Column();
-  private readonly closed: number[] = [];
-  private readonly dot: number[] = [];
+  private readonly closed = new Column();
+  private readonly dot = new Column();
   private readonly widthMm: number[] = [];
   private properties: StrokeProperties | null = null;
   private drawn: Drawn = { strokes: 0, buttDots: 0, overflows: 0, outlineMm: 0 };
-
-  get segmentCount(): number {
-    return this.builder.count;
-  }
 
   /** Begins an element; with `properties` null its paths are measured, not drawn. */
   begin(map: Affine, properties: StrokeProperties | null): void {
@@ -98,8 +96,8 @@ export class StrokeSink implements PathSink {
       segments: this.builder.finish(),
       count,
       first,
-      closed: new Uint8Array(this.closed),
-      dot: new Uint8Array(this.dot),
+      closed: Uint8Array.from(this.closed.values.subarray(0, count)),
+      dot: Uint8Array.from(this.dot.values.subarray(0, count)),
       colour: this.colour.values.slice(0, count),
       layer: this.layer.values.slice(0, count),
       element: this.element.values.slice(0, count),
@@ -110,6 +108,7 @@ export class StrokeSink implements PathSink {
   private endSubPath(): void {
     const { sub, drawn } = this;
     if (!sub.started) return;
+    this.segmentsSeen += sub.count;
     if (!sub.drew) {
       // A lone moveto draws nothing, dots included (SVG 2, "Zero length path segments").
     } else if (!sub.isDrawable()) drawn.overflows++;

@@ -4,7 +4,7 @@ import { type Declaration, readDeclarations, splitOutside } from './declarations
 export interface Subject {
   readonly name: string;
   readonly id: string | null;
-  readonly classes: readonly string[];
+  readonly classes: ReadonlySet<string>;
 }
 
 /** A compound selector: a type, ids and classes that must all hold. */
@@ -23,6 +23,8 @@ interface Rule {
 
 /** Selectors of states that a drawing on paper is never in. */
 const NEVER = /:(?:hover|focus|active|visited|focus-within|focus-visible|target)\b/;
+/** Rules held against elements before a hostile sheet is given up; real drawings need some thousands. */
+const MOST_COMPARED = 20_000_000;
 /** At-rules that say nothing about lines. */
 const NO_STYLE = /^@(?:charset|font-face|namespace|keyframes|-webkit-keyframes|page|font-feature-values)\b/;
 
@@ -33,7 +35,10 @@ const NO_STYLE = /^@(?:charset|font-face|namespace|keyframes|-webkit-keyframes|p
  */
 export class StyleSheet {
   private readonly byKey = new Map<string, Rule[]>();
+  private readonly classes = new Set<string>();
+  private readonly matched = new Map<string, readonly Declaration[]>();
   private order = 0;
+  private compared = 0;
 
   get isEmpty(): boolean {
     return this.byKey.size === 0;
@@ -63,18 +68,38 @@ export class StyleSheet {
     }
   }
 
-  /** Declarations for an element, the strongest last; important ones are not set apart. */
-  declarationsFor(subject: Subject): Declaration[] {
+  /**
+   * Declarations for an element in the order of the cascade, at most two of each property: one
+   * important and one not. Elements that the rules cannot tell apart share one list.
+   */
+  declarationsFor(subject: Subject): readonly Declaration[] {
+    const idKey = `#${subject.id ?? ''}`;
+    const keys = ['*', subject.name];
+    if (subject.id !== null && this.byKey.has(idKey)) keys.push(idKey);
+    for (const name of subject.classes) if (this.classes.has(name)) keys.push(`.${name}`);
+    const key = keys.join(' ');
+    let declarations = this.matched.get(key);
+    if (!declarations) {
+      declarations = this.match(keys, subject);
+      this.matched.set(key, declarations);
+    }
+    return declarations;
+  }
+
+  private match(keys: readonly string[], subject: Subject): Declaration[] {
     const rules: Rule[] = [];
-    const collect = (key: string): void => {
-      for (const rule of this.byKey.get(key) ?? []) if (matches(rule.selector, subject)) rules.push(rule);
-    };
-    collect('*');
-    collect(subject.name);
-    if (subject.id !== null) collect(`#${subject.id}`);
-    for (const name of new Set(subject.classes)) collect(`.${name}`);
+    for (const key of keys) {
+      const candidates = this.byKey.get(key) ?? [];
+      this.compared += candidates.length;
+      if (this.compared > MOST_COMPARED) return [];
+      for (const rule of candidates) if (matches(rule.selector, subject)) rules.push(rule);
+    }
     rules.sort((a, b) => a.selector.specificity - b.selector.specificity || a.order - b.order);
-    return rules.flatMap((rule) => rule.declarations);
+    const strongest = new Map<string, Declaration>();
+    for (const rule of rules) {
+      for (const d of rule.declarations) strongest.set(d.important ? `!${d.name}` : d.name, d);
+    }
+    return [...strongest.values()];
   }
 
   private addRule(head: string, declarations: readonly Declaration[], unread: (rule: string) => void): void {
@@ -88,6 +113,7 @@ export class StyleSheet {
         continue;
       }
       const { ids, classes, name } = selector;
+      for (const c of classes) this.classes.add(c);
       const key = ids.length > 0 ? `#${ids[0]}` : classes.length > 0 ? `.${classes[0]}` : (name ?? '*');
       const rules = this.byKey.get(key);
       const rule = { selector, declarations, order: this.order++ };
@@ -122,6 +148,6 @@ function matches(selector: Selector, subject: Subject): boolean {
   return (
     (selector.name === null || selector.name === subject.name) &&
     selector.ids.every((id) => id === subject.id) &&
-    selector.classes.every((name) => subject.classes.includes(name))
+    selector.classes.every((name) => subject.classes.has(name))
   );
 }

@@ -29,6 +29,7 @@ export interface SvgTree {
   readonly byId: ReadonlyMap<string, SvgElement>;
   /** `style` elements in document order. */
   readonly sheets: readonly SvgElement[];
+  readonly elementCount: number;
   readonly attributes: AttributeTable;
   attributeOf(element: SvgElement, name: string): string | null;
   placeOf(element: SvgElement): Place;
@@ -111,6 +112,7 @@ class TreeRestorer {
       root: top.element,
       byId,
       sheets,
+      elementCount: attributes.elementCount,
       attributes,
       attributeOf: (element, name) => attributes.get(element.number, name),
       placeOf: (element) => this.placeOf(element),
@@ -122,10 +124,12 @@ class TreeRestorer {
     const { attributes } = this.skeleton;
     let scope = outer;
     for (let i = attributes.begin(number), end = attributes.end(number); i < end; i++) {
-      const name = attributes.nameAt(i);
-      if (name === 'xmlns') scope = { prefix: '', uri: attributes.valueAt(i), outer: scope };
-      else if (name.startsWith('xmlns:')) {
-        scope = { prefix: name.slice(6), uri: attributes.valueAt(i), outer: scope };
+      const name = attributes.nameNumberAt(i);
+      const prefix = attributes.prefixes[name];
+      if (prefix === 'xmlns') {
+        scope = { prefix: attributes.names[name]!.slice(6), uri: attributes.valueAt(i), outer: scope };
+      } else if (prefix === null && attributes.names[name] === 'xmlns') {
+        scope = { prefix: '', uri: attributes.valueAt(i), outer: scope };
       }
     }
     const name = this.nameOf(node.tagName);
@@ -141,7 +145,7 @@ class TreeRestorer {
     const id = attributes.get(number, 'id');
     if (id !== null && !this.byId.has(id)) this.byId.set(id, element);
     if (element.isSvg && element.name === 'style') this.sheets.push(element);
-    this.checkPrefixes(name, element, scope);
+    this.checkPrefixes(colon < 0 ? null : name.slice(0, colon), element, scope);
     return { node, element, children, scope, next: 0 };
   }
 
@@ -152,22 +156,21 @@ class TreeRestorer {
     return (prefix === '' && (uri === null || uri === '')) || (prefix === 'svg' && uri === null);
   }
 
-  private checkPrefixes(name: string, element: SvgElement, scope: Scope | null): void {
-    const place = (): Place => this.placeOf(element);
-    const check = (qualified: string): void => {
-      const colon = qualified.indexOf(':');
-      if (colon <= 0) return;
-      const prefix = qualified.slice(0, colon);
-      if (prefix === 'xml' || prefix === 'xmlns' || lookUp(prefix, scope) !== null) return;
-      this.log.add('undeclared-prefix', place, { prefix });
-    };
-    if (element.isSvg && !name.includes(':') && !lookUp('', scope))
-      this.log.add('svg-namespace-missing', place);
-    check(name);
+  private checkPrefixes(prefix: string | null, element: SvgElement, scope: Scope | null): void {
+    if (prefix !== null) this.checkPrefix(prefix, element, scope);
+    else if (element.isSvg && !lookUp('', scope)) {
+      this.log.add('svg-namespace-missing', () => this.placeOf(element));
+    }
     const { attributes } = this.skeleton;
     for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
-      check(attributes.nameAt(i));
+      const attributePrefix = attributes.prefixes[attributes.nameNumberAt(i)]!;
+      if (attributePrefix !== null) this.checkPrefix(attributePrefix, element, scope);
     }
+  }
+
+  private checkPrefix(prefix: string, element: SvgElement, scope: Scope | null): void {
+    if (prefix === 'xml' || prefix === 'xmlns' || prefix === '' || lookUp(prefix, scope) !== null) return;
+    this.log.add('undeclared-prefix', () => this.placeOf(element), { prefix });
   }
 
   private restoreText(placeholder: string): string {

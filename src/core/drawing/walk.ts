@@ -74,7 +74,10 @@ class Walk {
     const { name } = element;
     const copied = frame.useSize !== null;
     if (!element.isSvg || (NOT_RENDERED.has(name) && !(name === 'symbol' && copied))) return;
-    if (context.copies && !this.limits.allowsElement()) {
+    if (
+      context.copies &&
+      !this.limits.allowsElement(session.tree.attributes.sizeOf(element.number) + element.children.length)
+    ) {
       session.report('use-limit', element, { limit: this.limits.limit });
       return;
     }
@@ -93,9 +96,9 @@ class Walk {
     const map = this.mapOf(element, specified, context);
     this.reportEffects(element, specified);
     if (SHAPES.has(name)) {
-      const before = session.sink.segmentCount;
+      const before = session.sink.segmentsSeen;
       drawElement(session, element, specified, style, map, context);
-      if (context.copies) this.limits.addSegments(session.sink.segmentCount - before);
+      if (context.copies) this.limits.addSegments(session.sink.segmentsSeen - before);
       return;
     }
     if (readOpacity(specified.get('opacity') ?? '') === 0) {
@@ -201,7 +204,7 @@ class Walk {
     const { session } = this;
     switch (element.name) {
       case 'text':
-        if (style.visible) session.report('text-not-drawn', element, { text: textOf(element, 60) });
+        if (style.visible) session.report('text-not-drawn', element, () => ({ text: textOf(element, 60) }));
         break;
       case 'image': {
         const href = hrefOf(session, element) ?? '';
