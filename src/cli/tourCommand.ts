@@ -7,10 +7,10 @@ import { lengthMm, numberAtLeastZero, placeMm, positiveLengthMm, wholeNumber } f
 import { inDirectory, outputKind, runTourJob } from './tourJob.js';
 
 interface TourFlags {
-  output: string[];
+  output?: string[];
   outDir?: string;
-  inPlace: boolean;
-  showTravel: boolean;
+  inPlace?: boolean;
+  showTravel?: boolean;
   snap: number;
   accuracy: number;
   junctions: Settings['junctions'];
@@ -24,16 +24,16 @@ interface TourFlags {
   seconds?: number;
   bound: Settings['bound'];
   seed: number;
-  json: boolean;
-  quiet: boolean;
+  json?: boolean;
+  quiet?: boolean;
 }
 
 const EXAMPLES = `
 Examples:
-  fewlift tour drawing.svg -o ordered.svg              order a drawing
-  fewlift tour drawing.svg -o ordered.gcode -o run.json  G-code and a report
-  fewlift tour a.svg b.svg --out-dir ordered           several drawings
-  cat drawing.svg | fewlift tour - > ordered.svg       in a pipe
+  fewlift tour drawing.svg -o ordered.svg                 order a drawing
+  fewlift tour drawing.svg -o ordered.gcode -o run.json   G-code and a report
+  fewlift tour a.svg b.svg --out-dir ordered              several drawings
+  cat drawing.svg | fewlift tour - > ordered.svg          in a pipe
   fewlift tour drawing.svg -o out.svg --minimise lifts --end anywhere
 
 The kind of an output follows its extension: .svg; .gcode .ngc .nc .tap; .json (the report).
@@ -49,16 +49,18 @@ export function tourCommand(finish: (code: number) => void): Command {
       'Reads an SVG line drawing, orders its strokes so that every line is drawn once with few lifts and little travel, audits the result and writes it. Without -o, SVG goes to standard output.',
     )
     .argument('<drawing...>', 'SVG files; - is standard input')
-    .option('-o, --output <file>', 'where to write; may be given several times', collect, [])
+    .option('-o, --output <file>', 'where to write; may be given several times', collect)
     .option('--out-dir <dir>', 'write each drawing there as SVG, under its own name')
-    .option('--in-place', 'let an output overwrite its input', false)
-    .option('--show-travel', 'show the lifted travel in SVG, as a group of its own', false)
-    .option('--snap <length>', 'ends this close meet', lengthMm, d.snapMm)
-    .option(
-      '--accuracy <length>',
-      'largest chord error of curves written as lines',
-      positiveLengthMm,
-      d.accuracyMm,
+    .option('--in-place', 'let an output overwrite its input')
+    .option('--show-travel', 'show the lifted travel in SVG, as a group of its own')
+    .addOption(length('--snap <length>', 'ends this close meet', lengthMm, d.snapMm))
+    .addOption(
+      length(
+        '--accuracy <length>',
+        'largest chord error of curves written as lines',
+        positiveLengthMm,
+        d.accuracyMm,
+      ),
     )
     .addOption(choice('--junctions <where>', 'where lines join', ['ends', 'touching'], d.junctions))
     .addOption(choice('--repeats <how>', 'lines that stand more than once', ['once', 'keep'], d.repeats))
@@ -75,8 +77,8 @@ export function tourCommand(finish: (code: number) => void): Command {
     .option('--seconds <s>', 'stop improving after this time', numberAtLeastZero)
     .addOption(choice('--bound <kind>', 'lower bound', ['none', 'quick'], d.bound))
     .option('--seed <n>', 'seed of the improvement', wholeNumber, d.seed)
-    .option('--json', 'print the report as JSON instead of the table', false)
-    .option('--quiet', 'print no table and no progress', false)
+    .option('--json', 'print the report as JSON instead of the table')
+    .option('--quiet', 'print no table and no progress')
     .addHelpText('after', EXAMPLES)
     .action((drawings: string[], flags: TourFlags) => finish(orderAll(drawings, flags)));
 }
@@ -105,9 +107,9 @@ function orderAll(drawings: string[], flags: TourFlags): number {
         outputs: outputsOf(input),
         settings,
         seconds: flags.seconds ?? null,
-        showTravel: flags.showTravel,
-        json: flags.json,
-        quiet: flags.quiet,
+        showTravel: flags.showTravel ?? false,
+        json: flags.json ?? false,
+        quiet: flags.quiet ?? false,
       });
     } catch (error) {
       if (!(error instanceof Ending)) throw error;
@@ -121,7 +123,7 @@ function orderAll(drawings: string[], flags: TourFlags): number {
 /** Checks the outputs as a whole before any work; throws an Ending of wrong usage. */
 function planOutputs(drawings: string[], flags: TourFlags): (input: string) => string[] {
   const usage = (message: string) => new Ending(EXIT.wrongUsage, message);
-  const { output, outDir } = flags;
+  const { output = [], outDir } = flags;
   if (outDir !== undefined && output.length > 0) throw usage('-o and --out-dir do not go together');
   if (drawings.length > 1 && outDir === undefined) throw usage('several drawings need --out-dir');
   if (drawings.length > 1 && flags.json) throw usage('--json takes one drawing at a time');
@@ -163,6 +165,15 @@ function choice(flags: string, description: string, choices: string[], preset: s
   return new Option(flags, description).choices(choices).default(preset);
 }
 
-function collect(value: string, all: string[]): string[] {
+function length(
+  flags: string,
+  description: string,
+  parse: (text: string) => number,
+  presetMm: number,
+): Option {
+  return new Option(flags, description).argParser(parse).default(presetMm, `${presetMm} mm`);
+}
+
+function collect(value: string, all: string[] = []): string[] {
   return [...all, value];
 }

@@ -27,6 +27,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'entity-limit': (v) =>
     `the entity ${quoted(v.entity)} expands to more than ${v.limitCharacters} characters: refused`,
   'entity-loop': (v) => `the entity ${quoted(v.entity)} contains itself: refused`,
+  'too-large': () => 'the drawing is larger than can be held in memory',
   'nothing-stroked': () => 'nothing in the drawing has a stroke: there is nothing to draw',
 
   // Reading: read, but not quite as it stands.
@@ -87,6 +88,27 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'nothing-to-draw': (v) => `${some(v.count, 'element')} without anything to draw`,
   'unknown-element': (v) => `<${v.name}> is not known and was left out${times(v)}`,
 
+  // Reading G-code.
+  'gcode-bad-character': (v) => `a character that the language does not know: ${quoted(v.word)}${times(v)}`,
+  'gcode-bad-number': (v) => `no number after ${quoted(v.word)}${times(v)}`,
+  'gcode-comment-open': (v) => `a comment that is not closed on its line${times(v)}`,
+  'gcode-expression': (v) => `parameters and expressions are not evaluated: ${quoted(v.word)}${times(v)}`,
+  'gcode-word-twice': (v) => `the letter ${v.word} twice on one line${times(v)}`,
+  'gcode-same-group': (v) => `two motions on one line: ${v.word}${times(v)}`,
+  'gcode-not-supported': (v) => `${v.word} is not supported${times(v)}`,
+  'gcode-arc-error': (v) => `an arc without a centre or a fitting radius${times(v)}`,
+  'gcode-no-heights': () => 'the tool never goes up and down: what is drawn cannot be told from travel',
+  'gcode-arc-radii': (v) => `the ends of an arc are not equally far from its centre${times(v)}`,
+  'gcode-optional-line': (v) => `a line that may be skipped was taken as run${times(v)}`,
+  'gcode-word-ignored': (v) => `${v.word} was passed over${times(v)}`,
+  'gcode-height-unknown': (v) => `a move along the sheet before any height was taken as lifted${times(v)}`,
+  'gcode-slanted-move': (v) => `a move both along the sheet and up or down was taken as drawn${times(v)}`,
+  'gcode-rapid-down': (v) => `a rapid move with the tool down was taken as drawn${times(v)}`,
+  'gcode-stop-down': (v) => `a stop with the tool down${times(v)}`,
+  'gcode-no-end': () => 'neither M2 nor M30 ends the program',
+  'gcode-no-placement': () => "the page's height is not known: y = 0 was taken as its top",
+  'gcode-nothing-drawn': () => 'the program draws nothing',
+
   // Network and program.
   'repeats-drawn-once': (v) => `${number(v.lengthMm)} mm were in the drawing more than once: drawn once`,
   'dots-on-lines': (v) => `${some(v.count, 'dot')} on a line of the same pen: drawn with the line`,
@@ -120,8 +142,8 @@ function quoted(value: string | number | undefined): string {
 }
 
 function number(value: string | number | undefined): string {
-  const n = Number(value);
-  return String(Math.round(n * 1000) / 1000);
+  const n = Number(value ?? Number.NaN);
+  return Number.isFinite(n) ? String(Math.round(n * 1000) / 1000) : 'an unknown number of';
 }
 
 function some(count: string | number | undefined, one: string): string {
