@@ -8,6 +8,7 @@ import { strokeEnds } from './marks.js';
 import type { Network, NetworkOptions } from './network.js';
 import { cutIntoPieces } from './pieces.js';
 import { findRepeats } from './repeats.js';
+import { splitWhereJointsPart } from './sharedJoints.js';
 import { snapMarks } from './snap.js';
 import { addSpan, cutAtMarks, noSpans, type Spans } from './spans.js';
 import { splitWhereEndsTouch } from './touches.js';
@@ -24,7 +25,10 @@ export function buildNetwork(drawing: Drawing, strokes: Uint32Array, options: Ne
 
   const pieces = cutIntoPieces(drawing, strokes, options.accuracyMm);
   const marks = strokeEnds(drawing, strokes);
-  if (options.junctions !== 'ends') splitWhereEndsTouch(marks, drawing, pieces, options.snapMm);
+  if (options.junctions !== 'ends') {
+    splitWhereEndsTouch(marks, drawing, pieces, options.snapMm);
+    splitWhereJointsPart(marks, drawing, strokes);
+  }
   const snapped = snapMarks(marks, options.snapMm);
   const spans = cutAtMarks(marks, snapped.vertexOfMark, drawing, strokes);
 

@@ -22,6 +22,16 @@ function allStrokes(drawing: Drawing): Uint32Array {
   return Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i);
 }
 
+const square = (x: number, y: number): StrokeSpec => ({
+  line: [
+    [x, y],
+    [x + 10, y],
+    [x + 10, y + 10],
+    [x, y + 10],
+  ],
+  closed: true,
+});
+
 const lengthOf = (network: Network) => network.edgeLengthMm.reduce((sum, length) => sum + length, 0);
 
 describe('junctions', () => {
@@ -247,20 +257,63 @@ describe('what is drawn once', () => {
     expect(n.oddVertices.length).toBe(0);
   });
 
-  test('a side shared by two frames that start at its corners is drawn once', () => {
-    const square = (x: number, y: number): StrokeSpec => ({
-      line: [
-        [x, y],
-        [x + 10, y],
-        [x + 10, y + 10],
-        [x, y + 10],
-      ],
-      closed: true,
-    });
-    // The corners of the first are where the others start, so it is split there.
+  test('sides shared by frames are drawn once', () => {
     const n = networkOf([square(0, 0), square(10, 0), square(10, 10), square(0, 10)]);
-    expect(n.repeatedMm).toBeGreaterThan(0);
-    expect(lengthOf(n) + n.repeatedMm).toBeCloseTo(160, 9);
+    expect(n.repeatedMm).toBeCloseTo(40, 9);
+    expect(lengthOf(n)).toBeCloseTo(120, 9);
+    // The five inner points, and the corner where the first frame starts.
+    expect([n.vertexCount, n.edgeCount, n.oddVertices.length]).toEqual([6, 9, 4]);
+  });
+
+  test('a lattice of 6 x 8 panes, each a closed frame, falls into single sides', () => {
+    const panes: StrokeSpec[] = [];
+    for (let i = 0; i < 6; i++) for (let j = 0; j < 8; j++) panes.push(square(10 * i, 10 * j));
+    const n = networkOf(panes);
+    expect(n.repeatedMm).toBeCloseTo(820, 6);
+    expect(lengthOf(n)).toBeCloseTo(1100, 6);
+    expect(n.oddVertices.length).toBe(24);
+  });
+
+  test('a border of many points shared by two areas is one piece', () => {
+    const border = Array.from({ length: 30 }, (_, i) => [20 + Math.sin(i), 2 * i] as const);
+    const left: StrokeSpec = { line: [[0, 0], ...border, [0, 58]], closed: true };
+    const right: StrokeSpec = { line: [[40, 58], ...[...border].reverse(), [40, 0]], closed: true };
+    const n = networkOf([left, right]);
+    const single = border
+      .slice(1)
+      .reduce((sum, [x, y], i) => sum + Math.hypot(x - border[i][0], y - border[i][1]), 0);
+    expect(n.repeatedMm).toBeCloseTo(single, 6);
+    expect([n.edgeCount, n.oddVertices.length]).toEqual([5, 2]);
+  });
+
+  test('the same ring again, begun elsewhere and the other way round, is drawn once', () => {
+    const ring = Array.from({ length: 12 }, (_, i) => [20 + 9 * Math.cos(i), 20 + 9 * Math.sin(i)] as const);
+    const again = [...ring.slice(5), ...ring.slice(0, 5)].reverse();
+    const n = networkOf([
+      { line: ring, closed: true },
+      { line: again, closed: true },
+    ]);
+    expect(n.repeatedMm).toBeCloseTo(lengthOf(n), 6);
+  });
+
+  test('two lines that cross at a joint of both are joined there', () => {
+    const n = networkOf([
+      {
+        line: [
+          [0, 5],
+          [5, 5],
+          [10, 5],
+        ],
+      },
+      {
+        line: [
+          [5, 0],
+          [5, 5],
+          [5, 10],
+        ],
+      },
+    ]);
+    expect([n.componentCount, n.edgeCount, n.vertexCount]).toEqual([1, 4, 5]);
   });
 });
 
