@@ -171,3 +171,25 @@ describe('published walks', () => {
     expect(runs.sort()).toEqual(['0,2', '1,3']);
   });
 });
+
+describe('a drawing in one piece', () => {
+  test('with 2,000 odd vertices is solved, and says so', () => {
+    const random = createRandom(3);
+    const teeth = Array.from({ length: 1000 }, (_, i): StrokeSpec => {
+      const x = 1 + 0.2 * i;
+      const up = random() < 0.5 ? -1 : 1;
+      return { line: [[x, 50] as const, [x, 50 + up * (2 + 45 * random())] as const] };
+    });
+    const network = networkOf([{ line: [[0, 50] as const, [201, 50] as const] }, ...teeth]);
+    expect([network.componentCount, network.oddVertices.length]).toEqual([1, 2002]);
+    const home: [number, number] = [0, 100];
+    const tour = findTour(network, { homeX: 0, homeY: 100, end: 'home', weigh: (d) => d }, OPTIONS);
+    checkTour(network, tour, home, 'home');
+    expect(tour.bound).toMatchObject({ exact: true, method: 'matching' });
+    expect(tour.stopped).toBe('proven');
+    const { certified } = tour.bound;
+    expect(certified).not.toBeNull();
+    expect(tour.cost).toBeCloseTo(certified?.total ?? 0, 6);
+    expect(tour.runFirst.length - 1).toBeGreaterThanOrEqual(1001);
+  });
+});
