@@ -1,0 +1,193 @@
+import { addInterval, type Intervals } from './intervals.js';
+import { isNear, visitPieces } from './nearness.js';
+import type { Side } from './side.js';
+import { findOverlap, newOverlap } from './sideBySide.js';
+import { type Stretch, unpairedStretches } from './stretches.js';
+import type { Tolerances } from './tolerances.js';
+
+/** Repeats run at nearly the same direction; lines that cross do not. */
+const LEAST_COSINE = 0.5;
+const PARALLEL_COSINE = 0.98;
+
+/**
+ * Takes what is wanted but unpaired as drawn where it repeats a wanted line that is paired.
+ *
+ * A line may repeat one that repeats the drawn one, so a second pass lets what was excused in the first
+ * stand for others, if a drawn line lies within both tolerances. Cost: a search for each unpaired piece.
+ */
+export function excuseRepeats(wanted: Side, drawn: Side, tolerances: Tolerances): void {
+  for (let pass = 0; pass < 2; pass++) {
+    const stretches = unpairedStretches(wanted, 0);
+    if (stretches.length === 0) return;
+    const excuses: { span: number; piece: number; parts: Intervals }[] = [];
+    for (const stretch of stretches) {
+      for (let k = 0; k < stretch.piece.length; k++) {
+        if (pass === 1 && !isDrawnNear(stretch, k, drawn, tolerances)) continue;
+        const parts = repeatedParts(wanted, stretch, k, tolerances);
+        if (parts.length > 0) excuses.push({ span: stretch.span[k], piece: stretch.piece[k], parts });
+      }
+    }
+    // Only now: what is excused in a pass must not excuse others in the same pass.
+    for (const { span, piece, parts } of excuses) {
+      for (let i = 0; i < parts.length; i += 2) {
+        wanted.pair(span, piece, parts[i], parts[i + 1], tolerances.repeatMm);
+      }
+    }
+  }
+}
+
+function isDrawnNear(stretch: Stretch, k: number, drawn: Side, tolerances: Tolerances): boolean {
+  const x = (stretch.x[k] + stretch.x[k + 1]) / 2;
+  const y = (stretch.y[k] + stretch.y[k + 1]) / 2;
+  return isNear(x, y, drawn, stretch.pen, tolerances.repeatMm + tolerances.matchMm);
+}
+
+/** The fractions of part k's piece, within the part, that repeat something paired. */
+function repeatedParts(side: Side, stretch: Stretch, k: number, tolerances: Tolerances): Intervals {
+  const parts: Intervals = [];
+  const [from, to] = [stretch.from[k], stretch.to[k]];
+  const accept = (low: number, high: number): boolean => {
+    const a = Math.max(from, low);
+    const b = Math.min(to, high);
+    if (b > a) addInterval(parts, a, b, 0);
+    return parts.length === 2 && parts[0] <= from && parts[1] >= to;
+  };
+  visitPairedBeside(side, stretch.piece[k], stretch.pen, tolerances.repeatMm, LEAST_COSINE, isOther, accept);
+  return parts;
+}
+
+/**
+ * The length that is drawn again on a place where something is drawn already: paired wanted lines beside
+ * others that are paired as well, each pair counted once. Lines that run together for less than ten
+ * tolerances merely meet or cross, unless that is the whole of them.
+ */
+export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
+  const { spans, lines } = wanted;
+  let sum = 0;
+  for (let chain = 0; chain < lines.count; chain++) {
+    let together = 0;
+    let whole = true;
+    let chainSum = 0;
+    const close = (): void => {
+      if (together >= 10 * tolerances.repeatMm) chainSum += together;
+      together = 0;
+    };
+    for (let span = spans.firstOfChain[chain]; span < spans.firstOfChain[chain + 1]; span++) {
+      if (wanted.touched[span] === 0 || !hasCompany(wanted, span, tolerances.repeatMm)) {
+        close();
+        whole = false;
+        continue;
+      }
+      const first = wanted.flatten(span);
+      for (let v = first; v < first + wanted.pieceCount(span); v++) {
+        const length = wanted.pieceLength(v);
+        const parts = againParts(wanted, span, v, lines.pen[chain], tolerances);
+        const full = parts.length === 2 && parts[0] <= 1e-9 && parts[1] >= 1 - 1e-9;
+        if (full) {
+          together += length;
+          continue;
+        }
+        whole = false;
+        for (let i = 0; i < parts.length; i += 2) {
+          if (parts[i] > 1e-9) close();
+          together += (parts[i + 1] - parts[i]) * length;
+          if (parts[i + 1] < 1 - 1e-9) close();
+        }
+        if (parts.length === 0) close();
+      }
+    }
+    if (whole) sum += chainSum + together;
+    else {
+      close();
+      sum += chainSum;
+    }
+  }
+  return sum;
+}
+
+/** Whether the box of a span is touched by any other paired span's but those it simply goes on from. */
+function hasCompany(side: Side, span: number, reach: number): boolean {
+  const { boxes, chain, segment } = side.spans;
+  const pen = side.penOf(span);
+  const o = 4 * span;
+  let found = false;
+  side.index.visit(
+    boxes[o] - reach,
+    boxes[o + 1] - reach,
+    boxes[o + 2] + reach,
+    boxes[o + 3] + reach,
+    (w) => {
+      const joined = chain[w] === chain[span] && Math.abs(segment[w] - segment[span]) <= 1;
+      if (w === span || side.touched[w] === 0 || side.penOf(w) !== pen) return false;
+      found = !joined || foldsBack(side, segment[w], segment[span]);
+      return found;
+    },
+  );
+  return found;
+}
+
+/** Whether two segments run in roughly opposite directions from end to end. */
+function foldsBack(side: Side, i: number, j: number): boolean {
+  const { offset, data: d } = side.lines.segments;
+  const [o, p] = [offset[i], offset[j]];
+  const ax = d[o + 2] - d[o];
+  const ay = d[o + 3] - d[o + 1];
+  const bx = d[p + 2] - d[p];
+  const by = d[p + 3] - d[p + 1];
+  const dot = ax * bx + ay * by;
+  return dot < 0 && 4 * dot * dot > (ax * ax + ay * ay) * (bx * bx + by * by);
+}
+
+function againParts(side: Side, span: number, v: number, pen: number, tolerances: Tolerances): Intervals {
+  const own = side.pairedParts(span, v, 0, 1);
+  const parts: Intervals = [];
+  if (own.length === 0) return parts;
+  visitPairedBeside(side, v, pen, tolerances.repeatMm, PARALLEL_COSINE, isEarlier, (low, high) => {
+    for (let i = 0; i < own.length; i += 2) {
+      const from = Math.max(low, own[i]);
+      const to = Math.min(high, own[i + 1]);
+      if (to > from) addInterval(parts, from, to, 1e-12);
+    }
+    return parts.length === 2 && parts[0] <= 0 && parts[1] >= 1;
+  });
+  return parts;
+}
+
+function isOther(v: number, w: number): boolean {
+  return v !== w;
+}
+
+function isEarlier(v: number, w: number): boolean {
+  return w < v;
+}
+
+/** Calls `accept` with the fractions of piece v beside which other paired pieces run, until it returns true. */
+function visitPairedBeside(
+  side: Side,
+  v: number,
+  pen: number,
+  reach: number,
+  leastCosine: number,
+  counts: (v: number, w: number) => boolean,
+  accept: (from: number, to: number) => boolean,
+): void {
+  const o = newOverlap();
+  const ax = side.x[v];
+  const ay = side.y[v];
+  const bx = side.x[v + 1];
+  const by = side.y[v + 1];
+  visitPieces(side, pen, ax, ay, bx, by, reach, (w, span) => {
+    if (side.touched[span] === 0 || !counts(v, w)) return false;
+    const { x, y } = side;
+    if (!findOverlap(ax, ay, bx, by, x[w], y[w], x[w + 1], y[w + 1], reach, leastCosine, o)) return false;
+    const low = Math.min(o.from1, o.to1);
+    const high = Math.max(o.from1, o.to1);
+    const paired = side.pairedParts(span, w, low, high);
+    for (let i = 0; i < paired.length; i += 2) {
+      const s = o.from0 + ((paired[i] - o.from1) / (o.to1 - o.from1)) * (o.to0 - o.from0);
+      const t = o.from0 + ((paired[i + 1] - o.from1) / (o.to1 - o.from1)) * (o.to0 - o.from0);
+      if (accept(Math.min(s, t), Math.max(s, t))) return true;
+    }
+    return false;
+  });
+}

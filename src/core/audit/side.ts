@@ -1,0 +1,150 @@
+import { pointAt } from '../geometry/evaluate.js';
+import { flattenSegment } from '../geometry/flatten.js';
+import { BoxIndex } from './boxIndex.js';
+import { addInterval, gapsIn, type Intervals, partsIn } from './intervals.js';
+import type { LineSet } from './lineSet.js';
+import { cutToSpans, type Spans } from './spans.js';
+import type { Tolerances } from './tolerances.js';
+
+const NOTHING: Intervals = [];
+
+/**
+ * One of the two line sets, ready to be held against the other: its spans, their polylines (made when
+ * first asked for), and which parts of them are paired already.
+ *
+ * A polyline's vertices are numbered throughout the side; piece v runs from vertex v to v + 1, and a
+ * place on it is a fraction from 0 to 1.
+ */
+export class Side {
+  readonly spans: Spans;
+  /** Largest deviation of what was paired on each span. */
+  readonly deviation: Float64Array;
+  /** 1 where all of a span is paired. */
+  readonly whole: Uint8Array;
+  /** 1 where any of a span is paired. */
+  readonly touched: Uint8Array;
+  x = new Float64Array(1024);
+  y = new Float64Array(1024);
+  private vertices = 0;
+  private pieceDone = new Uint8Array(1024);
+  private readonly paired = new Map<number, Intervals>();
+  private readonly firstVertex: Int32Array;
+  private readonly pieces: Uint32Array;
+  private readonly piecesLeft: Uint32Array;
+  private boxIndex: BoxIndex | null = null;
+
+  constructor(
+    readonly lines: LineSet,
+    private readonly tolerances: Tolerances,
+  ) {
+    this.spans = cutToSpans(lines, tolerances.flatMm);
+    const { count } = this.spans;
+    this.deviation = new Float64Array(count);
+    this.whole = new Uint8Array(count);
+    this.touched = new Uint8Array(count);
+    this.firstVertex = new Int32Array(count).fill(-1);
+    this.pieces = new Uint32Array(count);
+    this.piecesLeft = new Uint32Array(count);
+  }
+
+  get index(): BoxIndex {
+    if (this.boxIndex === null) this.boxIndex = new BoxIndex(this.spans.boxes);
+    return this.boxIndex;
+  }
+
+  penOf(span: number): number {
+    return this.lines.pen[this.spans.chain[span]];
+  }
+
+  /** First vertex of a span's polyline; its pieces are the `pieceCount(span)` from there. */
+  flatten(span: number): number {
+    if (this.firstVertex[span] >= 0) return this.firstVertex[span];
+    const { segment, t0, t1 } = this.spans;
+    const { segments } = this.lines;
+    const first = this.vertices;
+    const at = new Float64Array(2);
+    pointAt(segments, segment[span], t0[span], at);
+    this.push(at[0], at[1]);
+    flattenSegment(segments, segment[span], t0[span], t1[span], this.tolerances.flatMm, (x, y) =>
+      this.push(x, y),
+    );
+    this.firstVertex[span] = first;
+    this.pieces[span] = this.piecesLeft[span] = this.vertices - first - 1;
+    return first;
+  }
+
+  /** How many pieces a flattened span has. */
+  pieceCount(span: number): number {
+    return this.pieces[span];
+  }
+
+  pieceLength(v: number): number {
+    const dx = this.x[v + 1] - this.x[v];
+    const dy = this.y[v + 1] - this.y[v];
+    return Math.sqrt(dx * dx + dy * dy);
+  }
+
+  isPieceDone(v: number): boolean {
+    return this.pieceDone[v] === 1;
+  }
+
+  /** The parts of piece v of a span from fraction `from` to `to` that are not paired yet. */
+  unpaired(span: number, v: number, from: number, to: number): Intervals {
+    if (this.whole[span] === 1 || this.pieceDone[v] === 1) return NOTHING;
+    const list = this.paired.get(v);
+    return list === undefined ? [from, to] : gapsIn(list, from, to);
+  }
+
+  /** The parts of piece v of a span from fraction `from` to `to` that are paired. */
+  pairedParts(span: number, v: number, from: number, to: number): Intervals {
+    if (this.whole[span] === 1 || this.pieceDone[v] === 1) return [from, to];
+    const list = this.paired.get(v);
+    return list === undefined ? NOTHING : partsIn(list, from, to);
+  }
+
+  /** Marks a span as paired without flattening it. */
+  pairSpan(span: number, deviation: number): void {
+    this.whole[span] = 1;
+    this.touched[span] = 1;
+    if (deviation > this.deviation[span]) this.deviation[span] = deviation;
+  }
+
+  /** Marks part of a piece as paired. Gaps shorter than a hair close. */
+  pair(span: number, v: number, from: number, to: number, deviation: number): void {
+    if (deviation > this.deviation[span]) this.deviation[span] = deviation;
+    this.touched[span] = 1;
+    if (this.pieceDone[v] === 1) return;
+    const slack = this.tolerances.hairMm / this.pieceLength(v);
+    const low = from <= slack ? 0 : from;
+    const high = to >= 1 - slack ? 1 : to;
+    if (low > 0 || high < 1) {
+      const list = this.paired.get(v);
+      if (list === undefined) {
+        this.paired.set(v, [low, high]);
+        return;
+      }
+      addInterval(list, low, high, slack);
+      if (list.length > 2 || list[0] > 0 || list[1] < 1) return;
+      this.paired.delete(v);
+    }
+    this.pieceDone[v] = 1;
+    this.piecesLeft[span]--;
+    if (this.piecesLeft[span] === 0) this.whole[span] = 1;
+  }
+
+  private push(x: number, y: number): void {
+    const v = this.vertices++;
+    if (v === this.x.length) {
+      this.x = doubled(this.x, new Float64Array(2 * v));
+      this.y = doubled(this.y, new Float64Array(2 * v));
+      this.pieceDone = doubled(this.pieceDone, new Uint8Array(2 * v));
+    }
+    this.x[v] = x;
+    this.y[v] = y;
+  }
+}
+
+function doubled<T extends Float64Array | Uint8Array>(from: T, to: T): T {
+  to.set(from);
+  return to;
+}

@@ -1,0 +1,122 @@
+import { segmentBox } from '../geometry/box.js';
+import { flattenSegment } from '../geometry/flatten.js';
+import { ARC, CUBIC, LINE, type Segments } from '../geometry/segments.js';
+import type { LineSet } from './lineSet.js';
+
+/**
+ * Segments cut to similar sizes, in order: span k is segment `segment[k]` from `t0[k]` to `t1[k]`, on
+ * chain `chain[k]`. Chain c owns spans `firstOfChain[c]` up to `firstOfChain[c + 1]`, segment i owns
+ * `firstOfSegment[i]` up to `firstOfSegment[i + 1]`. Dots and segments of no extent own none.
+ */
+export interface Spans {
+  readonly count: number;
+  readonly segment: Uint32Array;
+  readonly t0: Float64Array;
+  readonly t1: Float64Array;
+  readonly chain: Uint32Array;
+  readonly firstOfChain: Uint32Array;
+  readonly firstOfSegment: Uint32Array;
+  /** minX, minY, maxX, maxY of each, never too small. */
+  readonly boxes: Float64Array;
+}
+
+/** A segment is cut where it is longer than so many times the mean: this adds a quarter more at most. */
+const LONGEST = 4;
+
+/**
+ * Cuts the segments of all chains so that no box is much longer than the others: a long diagonal box
+ * would answer every search. O(segments).
+ */
+export function cutToSpans(lines: LineSet, flatMm: number): Spans {
+  const { segments, first, dot } = lines;
+  const parts = partsOfSegments(lines);
+  const firstOfSegment = new Uint32Array(segments.count + 1);
+  for (let i = 0; i < segments.count; i++) firstOfSegment[i + 1] = firstOfSegment[i] + parts[i];
+  const count = firstOfSegment[segments.count];
+  const segment = new Uint32Array(count);
+  const t0 = new Float64Array(count);
+  const t1 = new Float64Array(count);
+  const chain = new Uint32Array(count);
+  const boxes = new Float64Array(4 * count);
+  const firstOfChain = new Uint32Array(lines.count + 1);
+  const box = new Float64Array(4);
+  let at = 0;
+  for (let c = 0; c < lines.count; c++) {
+    firstOfChain[c] = at;
+    if (dot[c]) continue;
+    for (let i = first[c]; i < first[c + 1]; i++) {
+      for (let k = 0; k < parts[i]; k++) {
+        segment[at] = i;
+        chain[at] = c;
+        t0[at] = k / parts[i];
+        t1[at] = (k + 1) / parts[i];
+        spanBox(segments, i, t0[at], t1[at], flatMm, box);
+        boxes.set(box, 4 * at);
+        at++;
+      }
+    }
+  }
+  firstOfChain[lines.count] = at;
+  return { count, segment, t0, t1, chain, firstOfChain, firstOfSegment, boxes };
+}
+
+function partsOfSegments(lines: LineSet): Uint32Array {
+  const { segments, first, dot } = lines;
+  const parts = new Uint32Array(segments.count);
+  const size = new Float64Array(segments.count);
+  let total = 0;
+  let counted = 0;
+  for (let c = 0; c < lines.count; c++) {
+    if (dot[c]) continue;
+    for (let i = first[c]; i < first[c + 1]; i++) {
+      size[i] = roughLength(segments, i);
+      if (size[i] === 0) continue;
+      total += size[i];
+      counted++;
+    }
+  }
+  const longest = (LONGEST * total) / Math.max(1, counted);
+  for (let i = 0; i < segments.count; i++) parts[i] = size[i] > 0 ? Math.ceil(size[i] / longest) : 0;
+  return parts;
+}
+
+/** At least the length, and 0 only where the segment is a single point. */
+function roughLength(segments: Segments, i: number): number {
+  const d = segments.data;
+  const o = segments.offset[i];
+  const kind = segments.kind[i];
+  if (kind === ARC) {
+    const sum = Math.abs(d[o + 6]) + Math.abs(d[o + 7]) + Math.abs(d[o + 8]) + Math.abs(d[o + 9]);
+    return Math.abs(d[o + 11]) * sum;
+  }
+  if (kind !== CUBIC) return between(d, o, o + 2);
+  return between(d, o, o + 4) + between(d, o + 4, o + 6) + between(d, o + 6, o + 2);
+}
+
+function between(d: Float64Array, a: number, b: number): number {
+  const dx = d[b] - d[a];
+  const dy = d[b + 1] - d[a + 1];
+  return Math.sqrt(dx * dx + dy * dy);
+}
+
+function spanBox(s: Segments, i: number, t0: number, t1: number, flatMm: number, box: Float64Array): void {
+  if (t0 === 0 && t1 === 1) {
+    segmentBox(s, i, box);
+    return;
+  }
+  box.fill(Number.POSITIVE_INFINITY, 0, 2);
+  box.fill(Number.NEGATIVE_INFINITY, 2, 4);
+  const include = (x: number, y: number): void => {
+    box[0] = Math.min(box[0], x);
+    box[1] = Math.min(box[1], y);
+    box[2] = Math.max(box[2], x);
+    box[3] = Math.max(box[3], y);
+  };
+  flattenSegment(s, i, t1, t0, flatMm, include);
+  flattenSegment(s, i, t0, t1, flatMm, include);
+  const spare = s.kind[i] === LINE ? 0 : flatMm;
+  box[0] -= spare;
+  box[1] -= spare;
+  box[2] += spare;
+  box[3] += spare;
+}
