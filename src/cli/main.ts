@@ -1,6 +1,7 @@
 import { Command, CommanderError } from 'commander';
 import { version } from '../node/version.js';
 import { Ending, EXIT } from './exitCodes.js';
+import { surveyCommand } from './surveyCommand.js';
 import { tourCommand } from './tourCommand.js';
 
 /** Runs the command line; the process ends with the code returned. Never throws on a user's mistake. */
@@ -18,11 +19,10 @@ export async function main(args: readonly string[]): Promise<number> {
     .version(version(), '-V, --version', 'print the version')
     .helpCommand('help [command]', 'show help and examples for a command')
     .addHelpText('after', '\nStart here:\n  fewlift tour drawing.svg -o ordered.svg\n  fewlift help tour');
-  program.addCommand(
-    tourCommand((result) => {
-      code = result;
-    }),
-  );
+  const finish = (result: number) => {
+    code = result;
+  };
+  program.addCommand(tourCommand(finish)).addCommand(surveyCommand(finish));
   for (const command of [program, ...program.commands]) {
     command.exitOverride().configureOutput({ outputError: (text, write) => write(`fewlift: ${text}`) });
   }

@@ -1,29 +1,23 @@
 import { mkdirSync } from 'node:fs';
 import { resolve } from 'node:path';
-import { Command, Option } from 'commander';
-import { DEFAULT_SETTINGS, type Settings } from '../core/index.js';
+import { Command } from 'commander';
 import { Ending, EXIT } from './exitCodes.js';
-import { lengthMm, numberAtLeastZero, placeMm, positiveLengthMm, wholeNumber } from './optionValues.js';
+import { numberAtLeastZero } from './optionValues.js';
+import {
+  addNetworkOptions,
+  addSearchOptions,
+  type NetworkFlags,
+  type SearchFlags,
+  settingsOf,
+} from './sharedOptions.js';
 import { inDirectory, outputKind, runTourJob } from './tourJob.js';
 
-interface TourFlags {
+interface TourFlags extends NetworkFlags, SearchFlags {
   output?: string[];
   outDir?: string;
   inPlace?: boolean;
   showTravel?: boolean;
-  snap: number;
-  accuracy: number;
-  junctions: Settings['junctions'];
-  repeats: Settings['repeats'];
-  matching: Settings['matching'];
-  minimise: Settings['minimise'];
-  home?: [number, number];
-  end: Settings['end'];
-  pens: Settings['pens'];
-  effort: number;
   seconds?: number;
-  bound: Settings['bound'];
-  seed: number;
   json?: boolean;
   quiet?: boolean;
 }
@@ -42,8 +36,7 @@ Exit codes: 0 done, 2 wrong usage, 3 not read or nothing to draw, 4 refused (not
 
 /** `fewlift tour`: the main job. `finish` receives the exit code. */
 export function tourCommand(finish: (code: number) => void): Command {
-  const d = DEFAULT_SETTINGS;
-  return new Command('tour')
+  const command = new Command('tour')
     .summary('order a drawing: every line once, few lifts, little travel')
     .description(
       'Reads an SVG line drawing, orders its strokes so that every line is drawn once with few lifts and little travel, audits the result and writes it. Without -o, SVG goes to standard output.',
@@ -52,31 +45,9 @@ export function tourCommand(finish: (code: number) => void): Command {
     .option('-o, --output <file>', 'where to write; may be given several times', collect)
     .option('--out-dir <dir>', 'write each drawing there as SVG, under its own name')
     .option('--in-place', 'let an output overwrite its input')
-    .option('--show-travel', 'show the lifted travel in SVG, as a group of its own')
-    .addOption(length('--snap <length>', 'ends this close meet', lengthMm, d.snapMm))
-    .addOption(
-      length(
-        '--accuracy <length>',
-        'largest chord error of curves written as lines',
-        positiveLengthMm,
-        d.accuracyMm,
-      ),
-    )
-    .addOption(choice('--junctions <where>', 'where lines join', ['ends', 'touching'], d.junctions))
-    .addOption(choice('--repeats <how>', 'lines that stand more than once', ['once', 'keep'], d.repeats))
-    .addOption(choice('--matching <how>', 'how odd vertices are paired', ['exact', 'greedy'], d.matching))
-    .addOption(choice('--minimise <what>', 'what counts most', ['travel', 'lifts'], d.minimise))
-    .option(
-      '--home <x,y>',
-      "where the tool starts, page mm from the top left (default: the page's bottom left corner)",
-      placeMm,
-    )
-    .addOption(choice('--end <where>', 'where the tool ends', ['home', 'anywhere'], d.end))
-    .addOption(choice('--pens <rule>', 'what makes a pen', ['colour', 'layer', 'one'], d.pens))
-    .option('--effort <n>', 'improvement: kicks for each stroke end, 0 for none', numberAtLeastZero, d.effort)
+    .option('--show-travel', 'show the lifted travel in SVG, as a group of its own');
+  return addSearchOptions(addNetworkOptions(command))
     .option('--seconds <s>', 'stop improving after this time', numberAtLeastZero)
-    .addOption(choice('--bound <kind>', 'lower bound', ['none', 'quick'], d.bound))
-    .option('--seed <n>', 'seed of the improvement', wholeNumber, d.seed)
     .option('--json', 'print the report as JSON instead of the table')
     .option('--quiet', 'print no table and no progress')
     .addHelpText('after', EXAMPLES)
@@ -85,20 +56,7 @@ export function tourCommand(finish: (code: number) => void): Command {
 
 function orderAll(drawings: string[], flags: TourFlags): number {
   const outputsOf = planOutputs(drawings, flags);
-  const settings: Settings = {
-    snapMm: flags.snap,
-    accuracyMm: flags.accuracy,
-    junctions: flags.junctions,
-    repeats: flags.repeats,
-    matching: flags.matching,
-    minimise: flags.minimise,
-    homeMm: flags.home ?? null,
-    end: flags.end,
-    pens: flags.pens,
-    effort: flags.effort,
-    bound: flags.bound,
-    seed: flags.seed,
-  };
+  const settings = settingsOf(flags);
   let worst: number = EXIT.done;
   for (const input of drawings) {
     try {
@@ -159,19 +117,6 @@ function planOutputs(drawings: string[], flags: TourFlags): (input: string) => s
     }
   }
   return outputsOf;
-}
-
-function choice(flags: string, description: string, choices: string[], preset: string): Option {
-  return new Option(flags, description).choices(choices).default(preset);
-}
-
-function length(
-  flags: string,
-  description: string,
-  parse: (text: string) => number,
-  presetMm: number,
-): Option {
-  return new Option(flags, description).argParser(parse).default(presetMm, `${presetMm} mm`);
 }
 
 function collect(value: string, all: string[] = []): string[] {

@@ -1,23 +1,20 @@
 import { basename, extname, join } from 'node:path';
 import {
-  type Drawing,
   findingLines,
   type MachineProfile,
   PEN_ON_Z,
   type Report,
-  readDrawing,
   reportOf,
   reportTable,
   type Settings,
-  sentence,
   tour,
   type Written,
   writeAudited,
 } from '../core/index.js';
-import { decodeText, NotText } from '../node/decodeText.js';
-import { readBytes, writeWhole } from '../node/files.js';
+import { writeWhole } from '../node/files.js';
 import { version } from '../node/version.js';
 import { Ending, EXIT } from './exitCodes.js';
+import { readText, reason, strokedDrawingFrom } from './input.js';
 import { ProgressLine } from './progressLine.js';
 
 /** One drawing to order, and what to do with the result. */
@@ -50,7 +47,7 @@ export function outputKind(path: string): OutputKind | null {
 
 /** Reads, orders, writes, audits and reports one drawing; throws an Ending where that cannot be done. */
 export function runTourJob(job: TourJob): void {
-  const drawing = readInput(job.input);
+  const drawing = strokedDrawingFrom(readText(job.input), job.input);
   const progress = new ProgressLine(!job.quiet && process.stderr.isTTY === true);
   const until = job.seconds === null ? Number.POSITIVE_INFINITY : performance.now() + 1000 * job.seconds;
   const { settings } = job;
@@ -86,36 +83,6 @@ export function runTourJob(job: TourJob): void {
     );
 }
 
-function readInput(path: string): Drawing {
-  const shown = path === '-' ? 'standard input' : path;
-  let text: string;
-  try {
-    text = decodeText(readBytes(path));
-  } catch (error) {
-    if (error instanceof NotText) {
-      throw new Ending(
-        EXIT.notRead,
-        `${shown} is not text in ${error.message}: a drawing is expected, as SVG`,
-      );
-    }
-    throw new Ending(EXIT.notRead, `${shown} could not be read: ${reason(error)}`);
-  }
-  const name = path === '-' ? 'drawing' : basename(path);
-  const drawing = readDrawing(text, { name });
-  const stop = drawing.findings.find((finding) => finding.severity === 'error');
-  if (stop) {
-    const { line, column } = stop.place ?? { line: null, column: null };
-    const where = line === null ? '' : ` (line ${line}, column ${column})`;
-    throw new Ending(EXIT.notRead, `${shown} could not be read: ${sentence(stop)}${where}`);
-  }
-  if (drawing.strokes.count === 0) {
-    const why = drawing.findings.find((finding) => finding.severity === 'warning');
-    const nothing = sentence({ code: 'nothing-stroked', severity: 'error', place: null, values: {} });
-    throw new Ending(EXIT.notRead, `${shown}: ${nothing}${why ? `\n  ${sentence(why)}` : ''}`);
-  }
-  return drawing;
-}
-
 function refusal(report: Report): Ending {
   const first = report.findings.find((finding) => finding.severity === 'error');
   const { missingMm, extraMm } = report.audit;
@@ -148,22 +115,6 @@ function tell(report: Report, outputs: string[], gcode: boolean): void {
   }
   const stream = outputs.includes('-') ? process.stderr : process.stdout;
   stream.write(`${lines.join('\n')}\n`);
-}
-
-/** The file system's own reason, without a stack. */
-function reason(error: unknown): string {
-  const code = (error as { code?: unknown }).code;
-  const known: Readonly<Record<string, string>> = {
-    ENOENT: 'there is no such file or directory',
-    EISDIR: 'it is a directory',
-    EACCES: 'permission denied',
-    EPERM: 'permission denied',
-    ENOTDIR: 'part of the path is not a directory',
-    ENOSPC: 'no space is left',
-    EROFS: 'the file system is read-only',
-  };
-  if (typeof code === 'string') return known[code] ?? code;
-  return error instanceof Error ? error.message : String(error);
 }
 
 /** The output of one of several drawings in a directory. */

@@ -2,7 +2,7 @@ import { type AuditResult, auditLines } from './audit/audit.js';
 import type { LineSet } from './audit/lineSet.js';
 import { linesOfDrawing, linesOfProgram } from './audit/lines.js';
 import type { Drawing } from './drawing/drawing.js';
-import { type PenPlan, planPens } from './drawing/pens.js';
+import { type PenPlan, planPens, strokesOfPens } from './drawing/pens.js';
 import { readDrawing } from './drawing/readDrawing.js';
 import type { MachineProfile } from './machine/profile.js';
 import { type Measure, measureProgram } from './measure/measure.js';
@@ -45,7 +45,7 @@ export function orderDrawing(
 ): Ordered {
   if (drawing.strokes.count === 0) throw new RangeError('the drawing has no stroke');
   const plan = planPens(drawing, settings.pens);
-  const strokesOfPen = plan.pens.map((_, pen) => strokesOf(plan, pen));
+  const strokesOfPen = strokesOfPens(plan);
   const [homeX, homeY] = settings.homeMm ?? [0, drawing.heightMm];
   const home: HomeRule = { homeX, homeY, endAtHome: settings.end === 'home' };
 
@@ -113,14 +113,6 @@ function readBack(text: string, kind: 'svg' | 'gcode'): LineSet {
   if (kind === 'gcode') return linesOfProgram(readGcode(text).program);
   const drawing = readDrawing(withoutTravel(text));
   return linesOfDrawing(drawing, planPens(drawing, 'layer'));
-}
-
-function strokesOf(plan: PenPlan, pen: number): Uint32Array {
-  const strokes: number[] = [];
-  plan.penOfStroke.forEach((p, s) => {
-    if (p === pen) strokes.push(s);
-  });
-  return Uint32Array.from(strokes);
 }
 
 function weighing(network: Network, home: HomeRule, settings: Settings): Weigh {

@@ -39,3 +39,12 @@ export function planPens(drawing: Drawing, rule: PenRule): PenPlan {
   }
   return { pens, penOfStroke };
 }
+
+/** The strokes of each pen, in document order. */
+export function strokesOfPens(plan: PenPlan): Uint32Array[] {
+  const lists: number[][] = plan.pens.map(() => []);
+  plan.penOfStroke.forEach((pen, stroke) => {
+    lists[pen].push(stroke);
+  });
+  return lists.map((list) => Uint32Array.from(list));
+}

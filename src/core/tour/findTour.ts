@@ -2,9 +2,10 @@ import type { Network } from '../network/network.js';
 import { eulerWalk } from './eulerWalk.js';
 import { type Effort, improveWalk } from './improve.js';
 import { joinComponents } from './join.js';
+import { NO_BOUND, quickBound, ROUNDING } from './lowerBound.js';
 import { delaunayPairs, nearVertices } from './nearPairs.js';
 import { type MatchingRule, type Pairing, pairGiven, pairWithHome } from './pairing.js';
-import { connectorCost, nearestToHome, type TourGraph, type TourTask, withHome } from './problem.js';
+import { nearestToHome, type TourGraph, type TourTask, withHome } from './problem.js';
 import { componentTree, connectorsCost } from './spanningTree.js';
 import type { LowerBound, Tour } from './tour.js';
 
@@ -16,9 +17,6 @@ export interface TourOptions extends Effort {
 /** Neighbours of a vertex that the search may connect it to. */
 const NEIGHBOURS = 8;
 
-/** Sums of many costs are compared with this much slack: the rounding of n additions, generously. */
-const ROUNDING = 1e-9;
-
 /**
  * A short closed (or open) tour over all edges of a network: the rural postman problem.
  *
@@ -29,14 +27,15 @@ const ROUNDING = 1e-9;
 export function findTour(network: Network, task: TourTask, options: TourOptions): Tour {
   const graph = withHome(network, task);
   const pairing = pairWithHome(graph, options.matching);
+  const boundOf = (tree: Int32Array) =>
+    options.bound === 'none' ? NO_BOUND : quickBound(graph, pairing, tree);
   if (network.componentCount === 1) {
-    const order = eulerWalk(graph, pairing.connectors);
-    return finished(graph, order, boundOf(graph, pairing, null, options), false);
+    return finished(graph, eulerWalk(graph, pairing.connectors), boundOf(new Int32Array(0)), false);
   }
   const delaunay = delaunayPairs(graph);
   const tree = componentTree(graph, delaunay);
   const near = nearVertices(graph, delaunay, NEIGHBOURS);
-  const bound = boundOf(graph, pairing, tree, options);
+  const bound = boundOf(tree);
 
   const starts = [byTree(graph, tree, options.matching), byJoining(graph, pairing, tree, near)];
   let best: Int32Array | null = null;
@@ -57,6 +56,13 @@ export function findTour(network: Network, task: TourTask, options: TourOptions)
   });
   // Walked afresh over the same connectors, now straight on at every junction where that is free.
   return finished(graph, eulerWalk(graph, connectorsOf(graph, best!)), bound, stopped);
+}
+
+/** The lower bound alone, without looking for a tour. */
+export function boundOnly(network: Network, task: TourTask): LowerBound {
+  const graph = withHome(network, task);
+  const tree = network.componentCount === 1 ? new Int32Array(0) : componentTree(graph, delaunayPairs(graph));
+  return quickBound(graph, pairWithHome(graph, 'exact'), tree);
 }
 
 /** Spanning tree of the components, home's way in, then a pairing of what is odd. */
@@ -81,24 +87,6 @@ function byJoining(
     }
   }
   return joinComponents(graph, pairing.connectors, Int32Array.from(pairs));
-}
-
-function boundOf(
-  graph: TourGraph,
-  pairing: Pairing,
-  tree: Int32Array | null,
-  options: TourOptions,
-): LowerBound {
-  const certified = pairing.certified;
-  if (options.bound === 'none') return { value: 0, method: 'none', exact: false, certified };
-  const byMatching = certified ? certified.certificate.lowerBound : 0;
-  // Home can be visited once only, by the triangle inequality; without it the rest still hangs together.
-  const wayOut = connectorCost(graph, graph.home, nearestToHome(graph));
-  const treeCost = (tree ? connectorsCost(graph, tree) : 0) + (graph.free < 0 ? 2 : 1) * wayOut;
-  const byTree = Math.max(0, treeCost * (1 - ROUNDING));
-  return byMatching >= byTree
-    ? { value: byMatching, method: 'matching', exact: false, certified }
-    : { value: byTree, method: 'tree', exact: false, certified };
 }
 
 /** Transitions of a walk that lead from one vertex to another, as u0 v0 u1 v1 …. */

@@ -20,7 +20,7 @@ export interface SvgOptions {
 
 /** How the name of a pen is kept: `label` of its group, in a name space of our own. */
 const NAME_SPACE = 'urn:fewlift:1';
-const TRAVEL_OPENS = '\n<g id="travel"';
+const TRAVEL_OPENS = '\n<g id="travel" fewlift:label="travel"';
 
 /**
  * The program as an SVG drawing in mm: a group for each pen, in it one path for each run, in order, as

@@ -1,0 +1,62 @@
+import { basename } from 'node:path';
+import { type Drawing, readDrawing, sentence, withoutTravel } from '../core/index.js';
+import { decodeText, NotText } from '../node/decodeText.js';
+import { readBytes } from '../node/files.js';
+import { Ending, EXIT } from './exitCodes.js';
+
+/** The text of an input, `-` for standard input; throws an Ending where it cannot be had. */
+export function readText(path: string): string {
+  try {
+    return decodeText(readBytes(path));
+  } catch (error) {
+    if (error instanceof NotText) {
+      throw new Ending(
+        EXIT.notRead,
+        `${shownName(path)} is not text in ${error.message}: a drawing is expected, as SVG`,
+      );
+    }
+    throw new Ending(EXIT.notRead, `${shownName(path)} could not be read: ${reason(error)}`);
+  }
+}
+
+/** The drawing in a text; throws an Ending where it cannot be read. The travel that we draw is no line of it. */
+export function drawingFrom(text: string, path: string): Drawing {
+  const name = path === '-' ? 'drawing' : basename(path);
+  const drawing = readDrawing(withoutTravel(text), { name });
+  const stop = drawing.findings.find((finding) => finding.severity === 'error');
+  if (stop) {
+    const { line, column } = stop.place ?? { line: null, column: null };
+    const where = line === null ? '' : ` (line ${line}, column ${column})`;
+    throw new Ending(EXIT.notRead, `${shownName(path)} could not be read: ${sentence(stop)}${where}`);
+  }
+  return drawing;
+}
+
+/** The same, where there must be something to draw. */
+export function strokedDrawingFrom(text: string, path: string): Drawing {
+  const drawing = drawingFrom(text, path);
+  if (drawing.strokes.count > 0) return drawing;
+  const why = drawing.findings.find((finding) => finding.severity === 'warning');
+  const nothing = sentence({ code: 'nothing-stroked', severity: 'error', place: null, values: {} });
+  throw new Ending(EXIT.notRead, `${shownName(path)}: ${nothing}${why ? `\n  ${sentence(why)}` : ''}`);
+}
+
+function shownName(path: string): string {
+  return path === '-' ? 'standard input' : path;
+}
+
+/** The file system's own reason, without a stack. */
+export function reason(error: unknown): string {
+  const code = (error as { code?: unknown }).code;
+  const known: Readonly<Record<string, string>> = {
+    ENOENT: 'there is no such file or directory',
+    EISDIR: 'it is a directory',
+    EACCES: 'permission denied',
+    EPERM: 'permission denied',
+    ENOTDIR: 'part of the path is not a directory',
+    ENOSPC: 'no space is left',
+    EROFS: 'the file system is read-only',
+  };
+  if (typeof code === 'string') return known[code] ?? code;
+  return error instanceof Error ? error.message : String(error);
+}

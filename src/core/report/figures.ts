@@ -1,0 +1,40 @@
+/** How figures are put for people: one place, so that every table reads alike. */
+
+export function mm(value: number): string {
+  return `${value.toFixed(1)} mm`;
+}
+
+/** Small distances, to a tenth of a micrometre. */
+export function fineMm(value: number): string {
+  return `${value.toFixed(4)} mm`;
+}
+
+/** A size: at most two decimals, none where not needed. */
+export function size(value: number): string {
+  return String(Math.round(value * 100) / 100);
+}
+
+export function duration(seconds: number): string {
+  if (seconds < 100) return `${seconds.toFixed(1)} s`;
+  const whole = Math.round(seconds / 60);
+  return whole < 60 ? `${whole} min` : `${Math.floor(whole / 60)} h ${whole % 60} min`;
+}
+
+export function count(n: number, one: string, many = `${one}s`): string {
+  return `${n} ${n === 1 ? one : many}`;
+}
+
+/** After against before in per cent; nothing where there was nothing. */
+export function change(before: number, after: number): string {
+  if (before === 0) return '';
+  const percent = (100 * (after - before)) / before;
+  return `${percent > 0 ? '+' : ''}${percent.toFixed(1)} %`;
+}
+
+/** Rows in columns: the first to the left, the others to the right; every line indented by two. */
+export function columns(rows: readonly (readonly string[])[]): string[] {
+  const width = rows[0].map((_, c) => Math.max(...rows.map((row) => row[c].length)));
+  return rows.map((row) =>
+    `  ${row.map((cell, c) => (c === 0 ? cell.padEnd(width[c]) : cell.padStart(width[c]))).join('  ')}`.trimEnd(),
+  );
+}
