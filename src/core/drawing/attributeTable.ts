@@ -43,7 +43,7 @@ export class AttributeTable {
     }
     if (end - begin === MANY) {
       manyNames.clear();
-      for (let i = begin; i < end; i++) manyNames.add(this.name.values[i]!);
+      for (let i = begin; i < end; i++) manyNames.add(this.name.values[i]);
     }
     const before = manyNames.size;
     return manyNames.add(name).size === before;
@@ -73,36 +73,36 @@ export class AttributeTable {
   }
 
   begin(element: number): number {
-    return this.first.values[element]!;
+    return this.first.values[element];
   }
 
   end(element: number): number {
-    return element + 1 < this.first.length ? this.first.values[element + 1]! : this.name.length;
+    return element + 1 < this.first.length ? this.first.values[element + 1] : this.name.length;
   }
 
   /** Characters of an element's values. */
   sizeOf(element: number): number {
     let size = 0;
     for (let i = this.begin(element), end = this.end(element); i < end; i++) {
-      const from = this.from.values[i]!;
-      const to = this.to.values[i]!;
-      size += to === DECODED ? this.decoded[from]!.length : to - from;
+      const from = this.from.values[i];
+      const to = this.to.values[i];
+      size += to === DECODED ? this.decoded[from].length : to - from;
     }
     return size;
   }
 
   nameAt(i: number): string {
-    return this.names[this.name.values[i]!]!;
+    return this.names[this.name.values[i]]!;
   }
 
   nameNumberAt(i: number): number {
-    return this.name.values[i]!;
+    return this.name.values[i];
   }
 
   valueAt(i: number): string {
-    const from = this.from.values[i]!;
-    const to = this.to.values[i]!;
-    return to === DECODED ? this.decoded[from]! : this.text.slice(from, to);
+    const from = this.from.values[i];
+    const to = this.to.values[i];
+    return to === DECODED ? this.decoded[from] : this.text.slice(from, to);
   }
 
   /** The value of an element's attribute, or null. O(attributes of the element). */

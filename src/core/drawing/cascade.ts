@@ -1,6 +1,7 @@
 import { type Declaration, readDeclarations } from './declarations.js';
 import type { FindingLog } from './findingLog.js';
-import { StyleSheet } from './styleSheet.js';
+import type { Subject } from './selector.js';
+import { MOST_COMPARED, StyleSheet } from './styleSheet.js';
 import { type SvgElement, type SvgTree, textOf } from './svgTree.js';
 
 /** Distinct style attributes remembered; drawings repeat a few of them thousands of times. */
@@ -13,11 +14,13 @@ const REMEMBERED = 4096;
 export class Cascade {
   private readonly sheet = new StyleSheet();
   private readonly specified = new Map<string, string>();
+  private readonly subjects = new Map<SvgElement, Subject>();
+  private saidGivenUp = false;
   private readonly remembered = new Map<string, readonly Declaration[]>();
 
   constructor(
     private readonly tree: SvgTree,
-    log: FindingLog,
+    private readonly log: FindingLog,
   ) {
     for (const element of tree.sheets) {
       const place = () => tree.placeOf(element);
@@ -32,19 +35,22 @@ export class Cascade {
     }
   }
 
-  /** The map is the same one each time, valid until the next call. */
-  specifiedOn(element: SvgElement): ReadonlyMap<string, string> {
+  /**
+   * The map is the same one each time, valid until the next call. `copied` is what a `use` copies around
+   * here: selectors see ancestors up to it only (SVG 2, "The use-element shadow tree").
+   */
+  specifiedOn(element: SvgElement, copied: SvgElement | null = null): ReadonlyMap<string, string> {
     const { specified, tree } = this;
     const { attributes } = tree;
     specified.clear();
     for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
       const name = attributes.nameNumberAt(i);
-      if (attributes.prefixes[name] === null) specified.set(attributes.names[name]!, attributes.valueAt(i));
+      if (attributes.prefixes[name] === null) specified.set(attributes.names[name], attributes.valueAt(i));
     }
     const style = specified.get('style');
     if (style === undefined && this.sheet.isEmpty) return specified;
     const inline = style === undefined ? [] : this.declarationsOf(style);
-    const ruled = this.sheet.isEmpty ? [] : this.ruled(element);
+    const ruled = this.sheet.isEmpty ? [] : this.ruled(element, copied);
     // The order of the cascade: rules, style attribute, important rules, important style attribute.
     for (const important of [false, true]) {
       for (const declarations of [ruled, inline]) {
@@ -54,13 +60,32 @@ export class Cascade {
     return specified;
   }
 
-  private ruled(element: SvgElement): readonly Declaration[] {
-    const classes = this.specified.get('class')?.trim();
-    return this.sheet.declarationsFor({
-      name: element.name,
-      id: this.specified.get('id') ?? null,
-      classes: new Set(classes ? classes.split(/\s+/) : []),
+  private ruled(element: SvgElement, copied: SvgElement | null): readonly Declaration[] {
+    const declarations = this.sheet.declarationsFor(this.subjectOf(element), () => {
+      const ancestors: Subject[] = [];
+      for (let e = element; e !== copied && e.parent !== null; e = e.parent)
+        ancestors.push(this.subjectOf(e.parent));
+      return ancestors;
     });
+    if (this.sheet.gaveUp && !this.saidGivenUp) {
+      this.saidGivenUp = true;
+      this.log.add('style-limit', () => this.tree.placeOf(element), { limit: MOST_COMPARED });
+    }
+    return declarations;
+  }
+
+  private subjectOf(element: SvgElement): Subject {
+    let subject = this.subjects.get(element);
+    if (!subject) {
+      const classes = this.tree.attributeOf(element, 'class')?.trim();
+      subject = {
+        name: element.name,
+        id: this.tree.attributeOf(element, 'id'),
+        classes: new Set(classes ? classes.split(/\s+/) : []),
+      };
+      this.subjects.set(element, subject);
+    }
+    return subject;
   }
 
   private declarationsOf(style: string): readonly Declaration[] {

@@ -23,7 +23,7 @@ export function readColour(text: string): Colour | null {
   const named = COLOUR_NAMES.get(t);
   if (named !== undefined) return { hex: `#${named}`, alpha: 1 };
   const match = FUNCTION.exec(t);
-  return match ? functionColour(match[1]!, match[2]!) : null;
+  return match ? functionColour(match[1], match[2]) : null;
 }
 
 function hexColour(digits: string): Colour {

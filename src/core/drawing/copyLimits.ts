@@ -7,8 +7,9 @@ const DEEPEST = 256;
 
 /** Counts what `use` makes and says when it is enough. */
 export class CopyLimits {
-  /** The limit asked about last. */
+  /** The limit asked about last, and what it is a number of. */
   limit = 0;
+  of: 'levels' | 'copies' | 'elements' | 'segments' | 'characters' = 'copies';
   private copies = 0;
   private elements = 0;
   private segments = 0;
@@ -16,11 +17,13 @@ export class CopyLimits {
 
   allowsDepth(depth: number): boolean {
     this.limit = DEEPEST;
+    this.of = 'levels';
     return depth < DEEPEST;
   }
 
   allowsCopy(): boolean {
     this.limit = MOST_COPIES;
+    this.of = 'copies';
     return this.copies++ < MOST_COPIES;
   }
 
@@ -28,11 +31,15 @@ export class CopyLimits {
   allowsElement(characters: number): boolean {
     this.elements++;
     this.characters += characters;
-    const counts = [this.elements, this.segments, this.characters];
-    const limits = [MOST_COPIED_ELEMENTS, MOST_COPIED_SEGMENTS, MOST_COPIED_CHARACTERS];
-    const passed = limits.findIndex((limit, i) => counts[i]! > limit);
-    if (passed >= 0) this.limit = limits[passed]!;
-    return passed < 0;
+    if (this.elements > MOST_COPIED_ELEMENTS) return this.passed(MOST_COPIED_ELEMENTS, 'elements');
+    if (this.segments > MOST_COPIED_SEGMENTS) return this.passed(MOST_COPIED_SEGMENTS, 'segments');
+    return this.characters <= MOST_COPIED_CHARACTERS || this.passed(MOST_COPIED_CHARACTERS, 'characters');
+  }
+
+  private passed(limit: number, of: CopyLimits['of']): false {
+    this.limit = limit;
+    this.of = of;
+    return false;
   }
 
   addSegments(count: number): void {

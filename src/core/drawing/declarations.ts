@@ -42,7 +42,7 @@ export function splitOutside(text: string, mark: string): string[] {
   let depth = 0;
   let quote = '';
   for (let at = 0; at < text.length; at++) {
-    const c = text[at]!;
+    const c = text[at];
     if (quote !== '') {
       if (c === '\\') at++;
       else if (c === quote) quote = '';

@@ -39,7 +39,7 @@ function skipDeclaration(text: string, start: number, entities: Entities): numbe
   ENTITY.lastIndex = start;
   const match = ENTITY.exec(text);
   if (match) {
-    entities.declare(match[1]!, match[2] ?? match[3] ?? '');
+    entities.declare(match[1], match[2] ?? match[3] ?? '');
     return ENTITY.lastIndex;
   }
   for (let at = start + 1; at < text.length; at++) {

@@ -53,7 +53,7 @@ export class Entities {
       const name = end < 0 || end - at > LONGEST_NAME ? null : text.slice(at + 1, end);
       const value = name === null ? null : this.replacement(name);
       if (value === null) {
-        unknown ??= text.slice(at, Math.min(end < 0 ? text.length : end + 1, at + 40)).split(/\s/)[0]!;
+        unknown ??= text.slice(at, Math.min(end < 0 ? text.length : end + 1, at + 40)).split(/\s/)[0];
         at++;
         continue;
       }

@@ -31,6 +31,7 @@ export const READING_FINDINGS = {
   'undeclared-prefix': 'warning', // prefix
   'style-rule-not-read': 'warning', // rule
   'style-sheet-not-read': 'warning', // type
+  'style-limit': 'warning', // limit: comparisons, after which no rule was applied any more
   'path-error': 'warning', // offset: characters from the start of the data; found
   'points-error': 'warning', // offset, found
   'points-odd': 'warning',
@@ -48,7 +49,7 @@ export const READING_FINDINGS = {
   'use-external': 'warning', // href
   'use-loop': 'warning', // href
   'use-too-deep': 'warning', // limit
-  'use-limit': 'warning', // limit
+  'use-limit': 'warning', // limit; of: copies | elements | segments | characters
   'switch-without-match': 'warning',
 
   // Read, and not drawn, or drawn otherwise than on a screen.

@@ -28,7 +28,7 @@ export function readLength(text: string): WrittenLength | null {
   if (!match) return null;
   const value = Number(match[1]) + 0;
   if (!Number.isFinite(value)) return null;
-  const unit = match[2]!.toLowerCase();
+  const unit = match[2].toLowerCase();
   if (unit === 'q') return { value, unit: 'Q' };
   return isUnit(unit) ? { value, unit } : null;
 }

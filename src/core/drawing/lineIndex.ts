@@ -11,10 +11,10 @@ export class LineIndex {
     let high = this.starts.length;
     while (high - low > 1) {
       const middle = (low + high) >> 1;
-      if (this.starts[middle]! <= offset) low = middle;
+      if (this.starts[middle] <= offset) low = middle;
       else high = middle;
     }
-    return { line: low + 1, column: offset - this.starts[low]! + 1 };
+    return { line: low + 1, column: offset - this.starts[low] + 1 };
   }
 }
 

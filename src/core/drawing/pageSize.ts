@@ -35,27 +35,30 @@ export function pageSize(
     heightGiven: h.given !== null,
     physical: w.physical || h.physical,
   };
-  if (w.given !== null && h.given !== null) {
-    return { widthMm: w.given, heightMm: h.given, guess: null, ...known };
-  }
-  const box = viewBox !== null && viewBox.width > 0 && viewBox.height > 0 ? viewBox : null;
-  if (box && w.given !== null) {
-    return { widthMm: w.given, heightMm: (w.given * box.height) / box.width, guess: null, ...known };
-  }
-  if (box && h.given !== null) {
-    return { widthMm: (h.given * box.width) / box.height, heightMm: h.given, guess: null, ...known };
-  }
   const px = (value: number): number => toMm(value, 'px', pxPerInch);
-  if (box) {
-    const widthMm = w.share ?? px(box.width);
-    return { widthMm, heightMm: h.share ?? px(box.height), guess: 'viewBox', ...known };
+  const box = viewBox !== null && viewBox.width > 0 && viewBox.height > 0 ? viewBox : null;
+  let widthMm = w.given;
+  let heightMm = h.given;
+  let guess: PageSize['guess'] = null;
+  if (box && widthMm !== null) heightMm ??= (widthMm * box.height) / box.width;
+  else if (box && heightMm !== null) widthMm = (heightMm * box.width) / box.height;
+  else if (box) {
+    widthMm = w.share ?? px(box.width);
+    heightMm = h.share ?? px(box.height);
+    guess = 'viewBox';
   }
+  if (isUsable(widthMm) && isUsable(heightMm)) return { widthMm, heightMm, guess, ...known };
   return {
     widthMm: w.given ?? px(DEFAULT_WIDTH),
     heightMm: h.given ?? px(DEFAULT_HEIGHT),
     guess: 'extent',
     ...known,
   };
+}
+
+/** Neither too large nor too small to be a page at all. */
+function isUsable(mm: number | null): mm is number {
+  return mm !== null && mm > 1e-6 && mm < 1e9;
 }
 
 interface Side {
@@ -79,7 +82,6 @@ function side(text: string | null, viewBoxSide: number | undefined, pxPerInch: n
   if (unit === 'em' || unit === 'rem') mm = toMm(value * 16, 'px', pxPerInch);
   else if (unit === 'ex' || unit === 'ch') mm = toMm(value * 8, 'px', pxPerInch);
   else mm = toMm(value, unit === '' ? 'px' : unit, pxPerInch);
-  // Also refuses what is too large or too small to be a page at all.
-  if (!(mm > 1e-9 && mm < 1e9)) return nothing;
+  if (!isUsable(mm)) return nothing;
   return { given: mm, share: null, physical: ['mm', 'cm', 'in', 'pt', 'pc', 'Q'].includes(unit) };
 }

@@ -42,13 +42,13 @@ export class PathCommands {
     // A first `m` is absolute (SVG 2, "The moveto commands").
     this.codes[this.count] = this.count === 0 && code === M + 32 ? M : code === Z + 32 ? Z : code;
     this.count++;
-    this.used = at + ARITY[code]!;
+    this.used = at + ARITY[code];
     return at;
   }
 
   /** Takes the last command back. */
   pop(): void {
     this.count--;
-    this.used -= ARITY[this.codes[this.count]!]!;
+    this.used -= ARITY[this.codes[this.count]]!;
   }
 }

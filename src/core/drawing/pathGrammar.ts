@@ -21,7 +21,7 @@ export function readPathByGrammar(data: string, out: PathCommands): boolean {
       return false;
     }
     for (let i = from === 0 ? 0 : 1; i < commands.length; i++) {
-      if (!append(commands[i]!, out)) return false;
+      if (!append(commands[i], out)) return false;
     }
     from = to;
   }
@@ -58,6 +58,6 @@ function append(command: ParsedCommand, out: PathCommands): boolean {
   put(command.x);
   put(command.y);
   if (at - base !== ARITY[code]) return false;
-  while (--at >= base) if (!Number.isFinite(out.numbers[at]!)) return false;
+  while (--at >= base) if (!Number.isFinite(out.numbers[at])) return false;
   return true;
 }

@@ -17,7 +17,7 @@ export function readPathTokens(data: string, cursor: TextCursor, out: PathComman
   cursor.reset(data).skipSpace();
   while (!cursor.atEnd()) {
     const code = data.charCodeAt(cursor.at);
-    const arity = code < 128 ? ARITY[code]! : 255;
+    const arity = code < 128 ? ARITY[code] : 255;
     if (arity === 255 || (out.count === 0 && (code & ~32) !== M)) return cursor.at;
     cursor.at++;
     if ((code & ~32) === Z) out.push(code);

@@ -72,8 +72,8 @@ function extentOf(strokes: Strokes, page: PageSize): { widthMm: number; heightMm
   let heightMm = 0;
   for (let i = 0; i < strokes.segments.count; i++) {
     segmentBox(strokes.segments, i, box);
-    widthMm = Math.max(widthMm, box[2]!);
-    heightMm = Math.max(heightMm, box[3]!);
+    widthMm = Math.max(widthMm, box[2]);
+    heightMm = Math.max(heightMm, box[3]);
   }
   return {
     widthMm: page.widthGiven || widthMm <= 0 ? page.widthMm : widthMm,

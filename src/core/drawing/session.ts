@@ -66,7 +66,7 @@ export class Session {
 
   /** Copies of an element share its place. */
   placeNumber(element: SvgElement): number {
-    const known = this.placeNumbers[element.number]!;
+    const known = this.placeNumbers[element.number];
     if (known > 0) return known - 1;
     const number = this.places.push(this.tree.placeOf(element)) - 1;
     this.placeNumbers[element.number] = number + 1;

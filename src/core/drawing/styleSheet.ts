@@ -1,19 +1,5 @@
 import { type Declaration, readDeclarations, splitOutside } from './declarations.js';
-
-/** What a selector is matched against. */
-export interface Subject {
-  readonly name: string;
-  readonly id: string | null;
-  readonly classes: ReadonlySet<string>;
-}
-
-/** A compound selector: a type, ids and classes that must all hold. */
-interface Selector {
-  readonly name: string | null;
-  readonly ids: readonly string[];
-  readonly classes: readonly string[];
-  readonly specificity: number;
-}
+import { matches, readSelector, type Selector, type Subject } from './selector.js';
 
 interface Rule {
   readonly selector: Selector;
@@ -23,19 +9,21 @@ interface Rule {
 
 /** Selectors of states that a drawing on paper is never in. */
 const NEVER = /:(?:hover|focus|active|visited|focus-within|focus-visible|target)\b/;
-/** Rules held against elements before a hostile sheet is given up; real drawings need some thousands. */
-const MOST_COMPARED = 20_000_000;
+/** Comparisons with elements before a hostile sheet is given up; real drawings need some thousands. */
+export const MOST_COMPARED = 20_000_000;
 /** At-rules that say nothing about lines. */
 const NO_STYLE = /^@(?:charset|font-face|namespace|keyframes|-webkit-keyframes|page|font-feature-values)\b/;
 
 /**
- * The rules of a drawing's style sheets whose selectors are made of types, classes and ids, by their
- * key so that an element is held against few of them. What else there is goes to `unread`.
+ * The rules of a drawing's style sheets whose selectors `readSelector` reads, by the key of their last
+ * compound so that an element is held against few of them. What else there is goes to `unread`.
  * Sources: Selectors Level 3; CSS Cascading and Inheritance Level 4, "Cascade Sorting Order".
  */
 export class StyleSheet {
   private readonly byKey = new Map<string, Rule[]>();
   private readonly classes = new Set<string>();
+  /** Keys of rules that ask for ancestors. */
+  private readonly contextual = new Set<string>();
   private readonly matched = new Map<string, readonly Declaration[]>();
   private order = 0;
   private compared = 0;
@@ -68,36 +56,49 @@ export class StyleSheet {
     }
   }
 
+  /** Whether rules were given up for want of time. */
+  get gaveUp(): boolean {
+    return this.compared > MOST_COMPARED;
+  }
+
   /**
    * Declarations for an element in the order of the cascade, at most two of each property: one
-   * important and one not. Elements that the rules cannot tell apart share one list.
+   * important and one not. Elements that the rules cannot tell apart share one list, unless their
+   * ancestors matter; `ancestors` is asked only then.
    */
-  declarationsFor(subject: Subject): readonly Declaration[] {
+  declarationsFor(subject: Subject, ancestors: () => readonly Subject[]): readonly Declaration[] {
     const idKey = `#${subject.id ?? ''}`;
     const keys = ['*', subject.name];
     if (subject.id !== null && this.byKey.has(idKey)) keys.push(idKey);
     for (const name of subject.classes) if (this.classes.has(name)) keys.push(`.${name}`);
+    if (keys.some((key) => this.contextual.has(key))) return this.match(keys, [subject, ...ancestors()]);
     const key = keys.join(' ');
     let declarations = this.matched.get(key);
     if (!declarations) {
-      declarations = this.match(keys, subject);
+      declarations = this.match(keys, [subject]);
       this.matched.set(key, declarations);
     }
     return declarations;
   }
 
-  private match(keys: readonly string[], subject: Subject): Declaration[] {
+  private match(keys: readonly string[], path: readonly Subject[]): Declaration[] {
+    const step = (): boolean => ++this.compared <= MOST_COMPARED;
     const rules: Rule[] = [];
     for (const key of keys) {
-      const candidates = this.byKey.get(key) ?? [];
-      this.compared += candidates.length;
-      if (this.compared > MOST_COMPARED) return [];
-      for (const rule of candidates) if (matches(rule.selector, subject)) rules.push(rule);
+      for (const rule of this.byKey.get(key) ?? []) {
+        if (matches(rule.selector, path, step)) rules.push(rule);
+        else if (this.gaveUp) return [];
+      }
     }
     rules.sort((a, b) => a.selector.specificity - b.selector.specificity || a.order - b.order);
     const strongest = new Map<string, Declaration>();
     for (const rule of rules) {
-      for (const d of rule.declarations) strongest.set(d.important ? `!${d.name}` : d.name, d);
+      for (const d of rule.declarations) {
+        const slot = d.important ? `!${d.name}` : d.name;
+        // Taken out first, so that the order of the list is that of the cascade.
+        strongest.delete(slot);
+        strongest.set(slot, d);
+      }
     }
     return [...strongest.values()];
   }
@@ -112,9 +113,10 @@ export class StyleSheet {
         unread(text);
         continue;
       }
-      const { ids, classes, name } = selector;
+      const { ids, classes, name } = selector.compounds[0];
       for (const c of classes) this.classes.add(c);
       const key = ids.length > 0 ? `#${ids[0]}` : classes.length > 0 ? `.${classes[0]}` : (name ?? '*');
+      if (selector.compounds.length > 1) this.contextual.add(key);
       const rules = this.byKey.get(key);
       const rule = { selector, declarations, order: this.order++ };
       if (rules) rules.push(rule);
@@ -131,23 +133,4 @@ function closingBrace(text: string, brace: number): number {
     else if (c === 125 && --depth === 0) return at;
   }
   return text.length;
-}
-
-function readSelector(text: string): Selector | null {
-  const match = /^(\*|[A-Za-z_][\w-]*)?((?:[.#][\w\u0080-\uffff-]+)*)$/.exec(text);
-  if (!match || text === '') return null;
-  const parts = match[2]!.match(/[.#][^.#]+/g) ?? [];
-  const ids = parts.filter((p) => p.startsWith('#')).map((p) => p.slice(1));
-  const classes = parts.filter((p) => p.startsWith('.')).map((p) => p.slice(1));
-  const name = match[1] === undefined || match[1] === '*' ? null : match[1];
-  const specificity = ids.length * 1_000_000 + classes.length * 1000 + (name === null ? 0 : 1);
-  return { name, ids, classes, specificity };
-}
-
-function matches(selector: Selector, subject: Subject): boolean {
-  return (
-    (selector.name === null || selector.name === subject.name) &&
-    selector.ids.every((id) => id === subject.id) &&
-    selector.classes.every((name) => subject.classes.has(name))
-  );
 }

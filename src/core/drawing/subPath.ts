@@ -98,8 +98,8 @@ export class SubPath {
       this.mappedLineTo(startX, startY);
       return;
     }
-    const o = this.offset[this.count - 1]!;
-    if (this.kind[this.count - 1] === LINE && same(data[o]!, data[o + 1]!, startX, startY)) {
+    const o = this.offset[this.count - 1];
+    if (this.kind[this.count - 1] === LINE && same(data[o], data[o + 1], startX, startY)) {
       this.count--;
       this.used = o;
     } else {
@@ -114,11 +114,11 @@ export class SubPath {
   isDrawable(): boolean {
     if (!(Math.abs(this.startX) <= FURTHEST_MM && Math.abs(this.startY) <= FURTHEST_MM)) return false;
     for (let i = 0; i < this.count; i++) {
-      const o = this.offset[i]!;
+      const o = this.offset[i];
       const isArc = this.kind[i] === ARC;
-      const points = o + (isArc ? 4 : SEGMENT_SIZE[this.kind[i]!]!);
-      for (let k = o; k < points; k++) if (!(Math.abs(this.data[k]!) <= FURTHEST_MM)) return false;
-      if (isArc) for (let k = points; k < o + 12; k++) if (!Number.isFinite(this.data[k]!)) return false;
+      const points = o + (isArc ? 4 : SEGMENT_SIZE[this.kind[i]]!);
+      for (let k = o; k < points; k++) if (!(Math.abs(this.data[k]) <= FURTHEST_MM)) return false;
+      if (isArc) for (let k = points; k < o + 12; k++) if (!Number.isFinite(this.data[k])) return false;
     }
     return true;
   }
@@ -126,17 +126,17 @@ export class SubPath {
   appendTo(builder: SegmentBuilder): void {
     const d = this.data;
     for (let i = 0; i < this.count; i++) {
-      const o = this.offset[i]!;
+      const o = this.offset[i];
       const kind = this.kind[i];
-      const x0 = d[o]!;
-      const y0 = d[o + 1]!;
-      const x1 = d[o + 2]!;
-      const y1 = d[o + 3]!;
+      const x0 = d[o];
+      const y0 = d[o + 1];
+      const x1 = d[o + 2];
+      const y1 = d[o + 3];
       if (kind === LINE) builder.line(x0, y0, x1, y1);
-      else if (kind === CUBIC) builder.cubic(x0, y0, d[o + 4]!, d[o + 5]!, d[o + 6]!, d[o + 7]!, x1, y1);
+      else if (kind === CUBIC) builder.cubic(x0, y0, d[o + 4], d[o + 5], d[o + 6], d[o + 7], x1, y1);
       else {
-        const [cx, cy, ux, uy] = [d[o + 4]!, d[o + 5]!, d[o + 6]!, d[o + 7]!];
-        builder.arc(x0, y0, x1, y1, cx, cy, ux, uy, d[o + 8]!, d[o + 9]!, d[o + 10]!, d[o + 11]!);
+        const [cx, cy, ux, uy] = [d[o + 4], d[o + 5], d[o + 6], d[o + 7]];
+        builder.arc(x0, y0, x1, y1, cx, cy, ux, uy, d[o + 8], d[o + 9], d[o + 10], d[o + 11]);
       }
     }
   }
@@ -165,7 +165,7 @@ export class SubPath {
     this.data[o + 1] = this.y;
     this.data[o + 2] = this.x = x;
     this.data[o + 3] = this.y = y;
-    this.used = o + SEGMENT_SIZE[kind]!;
+    this.used = o + SEGMENT_SIZE[kind];
     return o;
   }
 }

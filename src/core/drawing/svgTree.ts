@@ -57,7 +57,7 @@ export function textOf(element: SvgElement, limit: number): string {
   while (pending.length > 0 && text.length <= 4 * limit) {
     const node = pending.pop()!;
     if (typeof node === 'string') text += node.slice(0, 4 * limit);
-    else for (let i = node.children.length - 1; i >= 0; i--) pending.push(node.children[i]!);
+    else for (let i = node.children.length - 1; i >= 0; i--) pending.push(node.children[i]);
   }
   return text.replace(/\s+/g, ' ').trim().slice(0, limit);
 }
@@ -96,7 +96,7 @@ class TreeRestorer {
     }
     const frames = [top];
     while (frames.length > 0) {
-      const frame = frames[frames.length - 1]!;
+      const frame = frames[frames.length - 1];
       const child = frame.node.children[frame.next++];
       if (child === undefined) frames.pop();
       else if (child.type === 'text') frame.children.push(this.restoreText(child.value));
@@ -127,7 +127,7 @@ class TreeRestorer {
       const name = attributes.nameNumberAt(i);
       const prefix = attributes.prefixes[name];
       if (prefix === 'xmlns') {
-        scope = { prefix: attributes.names[name]!.slice(6), uri: attributes.valueAt(i), outer: scope };
+        scope = { prefix: attributes.names[name].slice(6), uri: attributes.valueAt(i), outer: scope };
       } else if (prefix === null && attributes.names[name] === 'xmlns') {
         scope = { prefix: '', uri: attributes.valueAt(i), outer: scope };
       }
@@ -163,7 +163,7 @@ class TreeRestorer {
     }
     const { attributes } = this.skeleton;
     for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
-      const attributePrefix = attributes.prefixes[attributes.nameNumberAt(i)]!;
+      const attributePrefix = attributes.prefixes[attributes.nameNumberAt(i)];
       if (attributePrefix !== null) this.checkPrefix(attributePrefix, element, scope);
     }
   }
@@ -174,17 +174,17 @@ class TreeRestorer {
   }
 
   private restoreText(placeholder: string): string {
-    return this.skeleton.texts[Number(placeholder.slice(1))]!;
+    return this.skeleton.texts[Number(placeholder.slice(1))];
   }
 
   private nameOf(plain: string): string {
-    return plain.startsWith('__') ? this.skeleton.oddNames[Number(plain.slice(2))]! : plain;
+    return plain.startsWith('__') ? this.skeleton.oddNames[Number(plain.slice(2))] : plain;
   }
 
   private placeOf(element: SvgElement): Place {
     const { attributes, starts } = this.skeleton;
     const id = attributes.get(element.number, 'id');
-    return { element: element.name, id, ...this.lines.locate(starts[element.number]!) };
+    return { element: element.name, id, ...this.lines.locate(starts[element.number]) };
   }
 }
 

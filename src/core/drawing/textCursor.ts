@@ -80,8 +80,8 @@ export class TextCursor {
     }
     this.at = at;
     // One rounding of two exact numbers is the nearest double (Clinger 1990, the fast path).
-    if (exact && exponent <= 0 && exponent >= -22) mantissa /= POWERS_OF_TEN[-exponent]!;
-    else if (exact && exponent > 0 && exponent <= 22) mantissa *= POWERS_OF_TEN[exponent]!;
+    if (exact && exponent <= 0 && exponent >= -22) mantissa /= POWERS_OF_TEN[-exponent];
+    else if (exact && exponent > 0 && exponent <= 22) mantissa *= POWERS_OF_TEN[exponent];
     else mantissa = Math.abs(Number(text.slice(start, at)));
     this.value = negative && mantissa !== 0 ? -mantissa : mantissa;
     return true;

@@ -29,7 +29,7 @@ export function tracePath(commands: PathCommands, sink: PathSink): void {
   let largest = 0;
 
   for (let i = 0; i < commands.count; i++) {
-    const code = commands.codes[i]!;
+    const code = commands.codes[i];
     const relative = code >= 97;
     const bx = relative ? x : 0;
     const by = relative ? y : 0;
@@ -42,23 +42,23 @@ export function tracePath(commands: PathCommands, sink: PathSink): void {
     let kind = NEITHER;
     switch (command) {
       case 77: // M
-        x = startX = bx + n[at++]!;
-        y = startY = by + n[at++]!;
+        x = startX = bx + n[at++];
+        y = startY = by + n[at++];
         sink.moveTo(x, y);
         open = true;
         largest = 0;
         break;
       case 76: // L
-        x = bx + n[at++]!;
-        y = by + n[at++]!;
+        x = bx + n[at++];
+        y = by + n[at++];
         sink.lineTo(x, y);
         break;
       case 72: // H
-        x = bx + n[at++]!;
+        x = bx + n[at++];
         sink.lineTo(x, y);
         break;
       case 86: // V
-        y = by + n[at++]!;
+        y = by + n[at++];
         sink.lineTo(x, y);
         break;
       case 67: // C
@@ -68,13 +68,13 @@ export function tracePath(commands: PathCommands, sink: PathSink): void {
         let ax = mirrored ? 2 * x - controlX : x;
         let ay = mirrored ? 2 * y - controlY : y;
         if (command === 67) {
-          ax = bx + n[at++]!;
-          ay = by + n[at++]!;
+          ax = bx + n[at++];
+          ay = by + n[at++];
         }
-        controlX = bx + n[at++]!;
-        controlY = by + n[at++]!;
-        x = bx + n[at++]!;
-        y = by + n[at++]!;
+        controlX = bx + n[at++];
+        controlY = by + n[at++];
+        x = bx + n[at++];
+        y = by + n[at++];
         sink.cubicTo(ax, ay, controlX, controlY, x, y);
         kind = CUBIC;
         break;
@@ -83,8 +83,8 @@ export function tracePath(commands: PathCommands, sink: PathSink): void {
       case 84: {
         // T
         if (command === 81) {
-          controlX = bx + n[at++]!;
-          controlY = by + n[at++]!;
+          controlX = bx + n[at++];
+          controlY = by + n[at++];
         } else {
           const mirrored = last === QUADRATIC;
           controlX = mirrored ? 2 * x - controlX : x;
@@ -92,19 +92,19 @@ export function tracePath(commands: PathCommands, sink: PathSink): void {
         }
         const ax = (x + 2 * controlX) / 3;
         const ay = (y + 2 * controlY) / 3;
-        x = bx + n[at++]!;
-        y = by + n[at++]!;
+        x = bx + n[at++];
+        y = by + n[at++];
         sink.cubicTo(ax, ay, (x + 2 * controlX) / 3, (y + 2 * controlY) / 3, x, y);
         kind = QUADRATIC;
         break;
       }
       case 65: {
         // A
-        const toX = bx + n[at + 5]!;
-        const toY = by + n[at + 6]!;
+        const toX = bx + n[at + 5];
+        const toY = by + n[at + 6];
         const large = n[at + 3] === 1;
         const sweep = n[at + 4] === 1;
-        const arc = arcFromEndpoints(x, y, n[at]!, n[at + 1]!, n[at + 2]!, large, sweep, toX, toY);
+        const arc = arcFromEndpoints(x, y, n[at], n[at + 1], n[at + 2], large, sweep, toX, toY);
         if (typeof arc === 'string') sink.lineTo(toX, toY);
         else sink.arcTo(arc, toX, toY);
         x = toX;

@@ -19,7 +19,7 @@ export function readTransformList(text: string): Affine | null {
     FUNCTION.lastIndex = at;
     const match = FUNCTION.exec(text);
     if (!match) return null;
-    const map = mapOf(match[1]!.toLowerCase(), match[2]!);
+    const map = mapOf(match[1].toLowerCase(), match[2]);
     if (!map) return null;
     result = multiply(result, map);
     at = FUNCTION.lastIndex;
@@ -100,11 +100,11 @@ function argumentsOf(list: string): number[] | null {
 function rotate(degrees: number): Affine {
   const sc = new Float64Array(2);
   sinCosDegrees(degrees, sc);
-  return [sc[1]!, sc[0]!, -sc[0]! + 0, sc[1]!, 0, 0];
+  return [sc[1], sc[0], -sc[0] + 0, sc[1], 0, 0];
 }
 
 function tangent(degrees: number): number {
   const sc = new Float64Array(2);
   sinCosDegrees(degrees, sc);
-  return sc[0]! / sc[1]!;
+  return sc[0] / sc[1];
 }

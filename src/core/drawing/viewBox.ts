@@ -41,8 +41,8 @@ export function readAspectRatio(text: string): AspectRatio | null {
   if (!match) return null;
   if (match[1]) return { alignX: 0, alignY: 0, mode: 'none' };
   return {
-    alignX: shareOf(match[2]!),
-    alignY: shareOf(match[3]!),
+    alignX: shareOf(match[2]),
+    alignY: shareOf(match[3]),
     mode: match[4] === 'slice' ? 'slice' : 'meet',
   };
 }

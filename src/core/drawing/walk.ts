@@ -57,7 +57,7 @@ class Walk {
   run(root: SvgElement, context: Context): void {
     this.enter(root.children, context);
     while (this.frames.length > 0) {
-      const frame = this.frames[this.frames.length - 1]!;
+      const frame = this.frames[this.frames.length - 1];
       const child = frame.children[frame.next++];
       if (child === undefined) this.frames.pop();
       else if (typeof child !== 'string') this.visit(child, frame);
@@ -78,12 +78,12 @@ class Walk {
       context.copies &&
       !this.limits.allowsElement(session.tree.attributes.sizeOf(element.number) + element.children.length)
     ) {
-      session.report('use-limit', element, { limit: this.limits.limit });
+      session.report('use-limit', element, { limit: this.limits.limit, of: this.limits.of });
       return;
     }
     const isLayer = context.atTop && name === 'g';
     const layer = isLayer ? this.addLayer(element) : context.layer;
-    const specified = session.cascade.specifiedOn(element);
+    const specified = session.cascade.specifiedOn(element, context.copies?.target);
     if (!holds(specified)) {
       this.reportShapes('condition-not-met', element);
       return;
@@ -144,7 +144,7 @@ class Walk {
     const { chosen, passedOver } = firstThatHolds(
       element,
       (child) => !NOT_RENDERED.has(child.name),
-      (child) => this.session.cascade.specifiedOn(child),
+      (child) => this.session.cascade.specifiedOn(child, context.copies?.target),
     );
     for (const foreign of passedOver) this.session.report('foreign-object-not-drawn', foreign);
     if (chosen) this.enter([chosen], context);
@@ -167,7 +167,7 @@ class Walk {
     else if (!this.limits.allowsDepth(context.copies?.depth ?? 0)) {
       session.report('use-too-deep', element, { limit: this.limits.limit });
     } else if (!this.limits.allowsCopy()) {
-      session.report('use-limit', element, { limit: this.limits.limit });
+      session.report('use-limit', element, { limit: this.limits.limit, of: this.limits.of });
     } else {
       const length = (name: string, axis: 'x' | 'y'): number =>
         lengthOf(session, element, specified, name, axis, context.style, context) ?? 0;
@@ -195,6 +195,9 @@ class Walk {
       const value = specified.get(property)?.trim();
       if (value === undefined || value === '' || ['none', 'inherit', 'initial', 'unset'].includes(value))
         continue;
+      // A reference to nothing has no effect (CSS Masking Module Level 1).
+      const id = /^url\(\s*["']?#([^"')]*)/.exec(value)?.[1];
+      if (id !== undefined && !this.session.tree.byId.has(id)) continue;
       const code = property === 'clip-path' ? 'clip-not-applied' : (`${property}-not-applied` as const);
       this.session.report(code, element, { [property === 'clip-path' ? 'clip' : property]: shown(value) });
     }
