@@ -76,7 +76,9 @@ export function orderDrawing(
   const before = { program: asDrawn, measure: measureProgram(asDrawn, profile) };
   const found = programFromTours(drawing, plan.pens, networks, tours, home);
   const measured = measureProgram(found, profile);
-  const after = isWorse(measured, before.measure, settings) ? before : { program: found, measure: measured };
+  const all = networks.every(drawsAll);
+  const after =
+    all && isWorse(measured, before.measure, settings) ? before : { program: found, measure: measured };
   return { drawing, settings, profile, plan, networks, tours, before, after };
 }
 
@@ -125,6 +127,11 @@ function weighing(network: Network, home: HomeRule, settings: Settings): Weigh {
     );
   }
   return liftsFirst(2 * reach, network.edgeCount).weigh;
+}
+
+/** Whether nothing was left out as drawn already: a line drawn twice may by chance save travel. */
+function drawsAll(network: Network): boolean {
+  return network.repeatedMm === 0 && network.dotsOnLines === 0;
 }
 
 /** The order found is kept only where it is better, or as good, by what was asked for. */

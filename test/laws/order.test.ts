@@ -12,6 +12,7 @@ import {
   writeAudited,
 } from '../../src/core/index.ts';
 import { fewestRuns } from '../../src/core/network/fewestRuns.ts';
+import { createRandom } from '../../src/core/structures/random.ts';
 import { anyDrawing, connectedDrawing, mapped, reversed } from '../support/arbitraries.ts';
 import { drawingOf, type StrokeSpec } from '../support/drawings.ts';
 
@@ -38,7 +39,7 @@ const settings = fc.record({
 });
 
 describe('laws of the whole job', () => {
-  test('nothing is lost, added or drawn too often; the bound holds; before is never beaten by after', () => {
+  test('nothing is lost, added or drawn too often; the bound holds; after never loses to before', () => {
     fc.assert(
       fc.property(anyDrawing, settings, (specs, chosen) => {
         const { report, runs } = order(drawingOf(specs, 50, 50), chosen);
@@ -46,14 +47,33 @@ describe('laws of the whole job', () => {
         expect(report.findings.filter((f) => f.severity === 'error')).toEqual([]);
         expect(audit).toMatchObject({ ok: true, missingMm: 0, extraMm: 0 });
         expect(after.runs).toBeGreaterThanOrEqual(runs);
+        // A line drawn twice may by chance bring the tool back for nothing: once is what was asked for.
+        const fair = report.findings.every(
+          ({ code }) => code !== 'repeats-drawn-once' && code !== 'dots-on-lines',
+        );
         if (chosen.minimise === 'lifts') {
           expect(after.runs).toBeLessThanOrEqual(before.runs);
           expect(bound.value).toBeLessThanOrEqual(after.runs);
         } else {
-          expect(after.travelMm).toBeLessThanOrEqual(before.travelMm);
+          if (fair) expect(after.travelMm).toBeLessThanOrEqual(before.travelMm);
           expect(bound.value).toBeLessThanOrEqual(after.travelMm * (1 + 1e-9) + 1e-9);
         }
         if (gap !== null) expect(gap).toBeGreaterThanOrEqual(-1e-9);
+      }),
+      { numRuns: 150 },
+    );
+  });
+
+  test('the same where ends only nearly meet, and bridges are drawn', () => {
+    fc.assert(
+      fc.property(anyDrawing, settings, fc.integer(), (specs, chosen, seed) => {
+        const random = createRandom(seed);
+        const near = (at: number) => at + 0.06 * (random() - 0.5);
+        const jittered = specs.map((spec) => mapped(spec, ([x, y]) => [near(x), near(y)], 1));
+        const { report } = order(drawingOf(jittered, 50, 50), chosen);
+        expect(report.findings.filter((f) => f.severity === 'error')).toEqual([]);
+        expect(report.audit.ok).toBe(true);
+        expect(report.network.snapMaxMm).toBeLessThanOrEqual(SETTINGS.snapMm);
       }),
       { numRuns: 150 },
     );

@@ -30,7 +30,7 @@ export function buildNetwork(drawing: Drawing, strokes: Uint32Array, options: Ne
     splitWhereJointsPart(marks, drawing, strokes);
   }
   const snapped = snapMarks(marks, options.snapMm);
-  const spans = cutAtMarks(marks, snapped.vertexOfMark, drawing, strokes);
+  const spans = cutAtMarks(marks, snapped, drawing, strokes, options.snapMm);
 
   const lengthMm = spanLengths(spans, lengthOfPiece);
   const repeated =

@@ -38,8 +38,9 @@ export function findTour(network: Network, task: TourTask, options: TourOptions)
   const bound = boundOf(tree);
 
   const starts = [byTree(graph, tree, options.matching), byJoining(graph, pairing, tree, near)];
-  let best: Int32Array | null = null;
-  let least = Number.POSITIVE_INFINITY;
+  // The drawing's own order is there to be beaten: what comes out is never worse.
+  let best = asGiven(graph, network);
+  let least = connectorsCost(graph, connectorsOf(graph, best));
   let stopped = false;
   starts.forEach((connectors, k) => {
     const improved = improveWalk(graph, eulerWalk(graph, connectors), near, {
@@ -55,7 +56,15 @@ export function findTour(network: Network, task: TourTask, options: TourOptions)
     }
   });
   // Walked afresh over the same connectors, now straight on at every junction where that is free.
-  return finished(graph, eulerWalk(graph, connectorsOf(graph, best!)), bound, stopped);
+  return finished(graph, eulerWalk(graph, connectorsOf(graph, best)), bound, stopped);
+}
+
+/** All edges in document order, each as it was drawn. */
+function asGiven(graph: TourGraph, network: Network): Int32Array {
+  const edges = Array.from({ length: network.edgeCount }, (_, e) => e);
+  // Pieces of a stroke follow each other already; only dots stand behind their turn.
+  edges.sort((a, b) => network.edgeStroke[a] - network.edgeStroke[b] || a - b);
+  return Int32Array.from([2 * graph.homeEdge, ...edges.map((e) => 2 * e)]);
 }
 
 /** The lower bound alone, without looking for a tour. */

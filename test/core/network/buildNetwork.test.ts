@@ -152,6 +152,29 @@ describe('junctions', () => {
     expect([n.edgeCount, n.vertexCount]).toEqual([2, 3]);
   });
 
+  test('ends that touch a line within a hair of each other split it once', () => {
+    const teeth = [4, 4.02, 4.04].map(
+      (x): StrokeSpec => ({
+        line: [
+          [x, 0],
+          [x, 5],
+        ],
+      }),
+    );
+    const n = networkOf([
+      {
+        line: [
+          [0, 0],
+          [10, 0],
+        ],
+      },
+      ...teeth,
+    ]);
+    expect(n.edgeCount).toBe(5);
+    expect(Math.min(...n.edgeLengthMm)).toBeGreaterThan(3);
+    expect(n.componentCount).toBe(1);
+  });
+
   test('three hatch lines that end on both sides of a frame make twelve ends odd or even as they should', () => {
     const frame: StrokeSpec = {
       line: [
