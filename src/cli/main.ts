@@ -1,5 +1,6 @@
 import { Command, CommanderError } from 'commander';
 import { version } from '../node/version.js';
+import { compareCommand } from './compareCommand.js';
 import { Ending, EXIT } from './exitCodes.js';
 import { surveyCommand } from './surveyCommand.js';
 import { tourCommand } from './tourCommand.js';
@@ -22,7 +23,10 @@ export async function main(args: readonly string[]): Promise<number> {
   const finish = (result: number) => {
     code = result;
   };
-  program.addCommand(tourCommand(finish)).addCommand(surveyCommand(finish));
+  program
+    .addCommand(tourCommand(finish))
+    .addCommand(surveyCommand(finish))
+    .addCommand(compareCommand(finish));
   for (const command of [program, ...program.commands]) {
     command.exitOverride().configureOutput({ outputError: (text, write) => write(`fewlift: ${text}`) });
   }

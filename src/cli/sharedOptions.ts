@@ -77,11 +77,11 @@ export function settingsOf(flags: NetworkFlags & Partial<SearchFlags>): Settings
   };
 }
 
-function choice(flags: string, description: string, choices: string[], preset: string): Option {
+export function choice(flags: string, description: string, choices: string[], preset: string): Option {
   return new Option(flags, description).choices(choices).default(preset);
 }
 
-function length(
+export function length(
   flags: string,
   description: string,
   parse: (text: string) => number,

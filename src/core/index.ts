@@ -1,6 +1,13 @@
 export { type AuditOptions, type AuditResult, auditLines as audit } from './audit/audit.js';
 export type { LineSet } from './audit/lineSet.js';
 export { linesOfDrawing, linesOfProgram } from './audit/lines.js';
+export {
+  type ComparedSide,
+  type CompareSettings,
+  compareSides,
+  sideOfDrawing,
+  sideOfProgram,
+} from './compare.js';
 export type { Drawing, Layer, Strokes } from './drawing/drawing.js';
 export { type Pen, type PenPlan, type PenRule, planPens } from './drawing/pens.js';
 export { readDrawing } from './drawing/readDrawing.js';
@@ -15,6 +22,8 @@ export { type Measure, measureProgram } from './measure/measure.js';
 export { type Ordered, orderDrawing as tour, type Written, writeAudited } from './pipeline.js';
 export type { Program } from './program/program.js';
 export { readGcode } from './program/readGcode.js';
+export type { Comparison, Difference } from './report/comparison.js';
+export { comparisonTable } from './report/comparisonTable.js';
 export { makeReport, type Report } from './report/report.js';
 export { sentence } from './report/sentences.js';
 export type { Survey } from './report/survey.js';

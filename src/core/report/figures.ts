@@ -27,8 +27,27 @@ export function count(n: number, one: string, many = `${one}s`): string {
 /** After against before in per cent; nothing where there was nothing. */
 export function change(before: number, after: number): string {
   if (before === 0) return '';
-  const percent = (100 * (after - before)) / before;
-  return `${percent > 0 ? '+' : ''}${percent.toFixed(1)} %`;
+  const percent = ((100 * (after - before)) / before).toFixed(1);
+  if (Number(percent) === 0) return '0.0 %';
+  return `${after > before ? '+' : ''}${percent} %`;
+}
+
+interface Totals {
+  readonly runs: number;
+  readonly travelMm: number;
+  readonly drawnMm: number;
+  readonly seconds: number;
+}
+
+/** What either costs to draw, side by side, with the change. */
+export function sideBySide(before: Totals, after: Totals): string[] {
+  return columns([
+    ['', 'before', 'after', 'change'],
+    ['runs', `${before.runs}`, `${after.runs}`, change(before.runs, after.runs)],
+    ['travel', mm(before.travelMm), mm(after.travelMm), change(before.travelMm, after.travelMm)],
+    ['drawn', mm(before.drawnMm), mm(after.drawnMm), change(before.drawnMm, after.drawnMm)],
+    ['time', duration(before.seconds), duration(after.seconds), change(before.seconds, after.seconds)],
+  ]);
 }
 
 /** Rows in columns: the first to the left, the others to the right; every line indented by two. */

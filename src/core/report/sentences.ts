@@ -121,6 +121,9 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'line-added': (v) =>
     `${number(v.lengthMm)} mm near ${place(v)} (pen ${penOf(v)}) are drawn but not in the drawing`,
   'line-doubled': (v) => `${number(v.lengthMm)} mm near ${place(v)} (pen ${penOf(v)}) are drawn too often`,
+  'line-moved': (v) =>
+    `${number(v.lengthMm)} mm near ${place(v)} (pen ${penOf(v)}) have moved by ${number(v.movedMm)} mm`,
+  'dot-moved': (v) => `the dot at ${place(v)} (pen ${penOf(v)}) has moved by ${number(v.movedMm)} mm`,
   'dot-missing': (v) => `the dot at ${place(v)} (pen ${penOf(v)}) is not drawn`,
   'dot-added': (v) => `the dot at ${place(v)} (pen ${penOf(v)}) is not in the drawing`,
 };

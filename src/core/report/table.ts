@@ -1,19 +1,12 @@
-import { change, columns, count, duration, fineMm, mm, size } from './figures.js';
+import { count, fineMm, mm, sideBySide, size } from './figures.js';
 import type { Report } from './report.js';
 
 /** The report in a few lines for a terminal: before and after, bound and gap, findings, audit. */
 export function reportTable(report: Report): string {
   const { before, after, bound, gap, drawing, network } = report;
-  const rows = [
-    ['', 'before', 'after', 'change'],
-    ['runs', `${before.runs}`, `${after.runs}`, change(before.runs, after.runs)],
-    ['travel', mm(before.travelMm), mm(after.travelMm), change(before.travelMm, after.travelMm)],
-    ['drawn', mm(before.drawnMm), mm(after.drawnMm), change(before.drawnMm, after.drawnMm)],
-    ['time', duration(before.seconds), duration(after.seconds), change(before.seconds, after.seconds)],
-  ];
   const lines = [
     `${drawing.name}: ${size(drawing.widthMm)} x ${size(drawing.heightMm)} mm, ${count(drawing.strokes, 'stroke')}, ${count(network.components, 'component')}, ${count(network.oddVertices, 'odd vertex', 'odd vertices')}, ${count(report.pens.length, 'pen')}`,
-    ...columns(rows),
+    ...sideBySide(before, after),
     `  bound   ${boundText(bound, gap)}`,
     `  audit   ${auditText(report)}`,
   ];

@@ -1,0 +1,65 @@
+import { basename } from 'node:path';
+import { Command } from 'commander';
+import {
+  type ComparedSide,
+  type CompareSettings,
+  compareSides,
+  comparisonTable,
+  PEN_ON_Z,
+  readGcode,
+  sentence,
+  sideOfDrawing,
+  sideOfProgram,
+} from '../core/index.js';
+import { version } from '../node/version.js';
+import { Ending, EXIT } from './exitCodes.js';
+import { drawingFrom, readText } from './input.js';
+import { addNetworkOptions, type NetworkFlags, settingsOf } from './sharedOptions.js';
+import { outputKind } from './tourJob.js';
+
+const EXAMPLES = `
+Examples:
+  fewlift compare drawing.svg ordered.svg          is every line still there, and what was saved?
+  fewlift compare drawing.svg ordered.gcode        the same for G-code that says where its page lies
+  fewlift compare one.svg two.svg --accuracy 0.1mm --json
+
+Lines may be drawn in another order, direction or number of pieces; gaps up to --snap may be bridged.
+With --repeats once (the default) a line that stands there twice may be drawn once.
+Exit codes: 0 the same lines, 1 lines differ, 2 wrong usage, 3 not read.`;
+
+/** `fewlift compare`: holds two files against each other, line by line. */
+export function compareCommand(finish: (code: number) => void): Command {
+  const command = new Command('compare')
+    .summary('hold two files against each other: the same lines? what was saved?')
+    .description(
+      'Compares two files, SVG or G-code: travel, runs, drawn length and time side by side, and whether they draw the same lines, with the place of every difference.',
+    )
+    .argument('<before>', 'SVG or G-code; - is standard input')
+    .argument('<after>', 'SVG or G-code');
+  return addNetworkOptions(command)
+    .option('--json', 'print JSON instead of the table')
+    .addHelpText('after', EXAMPLES)
+    .action((before: string, after: string, flags: NetworkFlags & { json?: boolean }) => {
+      const settings = settingsOf(flags);
+      const comparison = compareSides(
+        sideOf(before, settings),
+        sideOf(after, settings),
+        settings,
+        PEN_ON_Z,
+        version(),
+      );
+      const text = flags.json ? JSON.stringify(comparison, null, 2) : comparisonTable(comparison);
+      process.stdout.write(`${text}\n`);
+      finish(comparison.same ? EXIT.done : EXIT.checkFailed);
+    });
+}
+
+function sideOf(path: string, settings: CompareSettings): ComparedSide {
+  const text = readText(path);
+  if (outputKind(path) !== 'gcode') return sideOfDrawing(drawingFrom(text, path), settings);
+  const { program, findings } = readGcode(text);
+  if (program) return sideOfProgram(basename(path), program, settings);
+  const stop = findings.find(({ severity }) => severity === 'error');
+  const line = stop?.place?.line ? ` (line ${stop.place.line})` : '';
+  throw new Ending(EXIT.notRead, `${path} could not be read: ${stop ? sentence(stop) : 'no program'}${line}`);
+}

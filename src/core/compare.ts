@@ -1,0 +1,87 @@
+import { auditLines } from './audit/audit.js';
+import type { LineSet } from './audit/lineSet.js';
+import { linesOfDrawing, linesOfProgram } from './audit/lines.js';
+import type { Drawing } from './drawing/drawing.js';
+import { type PenRule, planPens, strokesOfPens } from './drawing/pens.js';
+import type { MachineProfile } from './machine/profile.js';
+import { type Measure, measureProgram } from './measure/measure.js';
+import { programAsDrawn } from './program/fromTours.js';
+import type { Program } from './program/program.js';
+import { type Comparison, pairMoved } from './report/comparison.js';
+import { REPEAT_TOLERANCE_MM } from './settings.js';
+
+export interface CompareSettings {
+  /** How far lines may deviate and still be the same, mm. */
+  readonly accuracyMm: number;
+  /** Gaps up to this may have been drawn across, mm. */
+  readonly snapMm: number;
+  readonly repeats: 'once' | 'keep';
+  readonly pens: PenRule;
+  /** Null: the bottom left corner of each page. */
+  readonly homeMm: readonly [number, number] | null;
+  readonly end: 'home' | 'anywhere';
+}
+
+/** One of the two files: its lines with the names of their pens, and its moves as they stand. */
+export interface ComparedSide {
+  readonly name: string;
+  readonly program: Program;
+  readonly lines: LineSet;
+}
+
+/** A drawing as it stands, for comparison. */
+export function sideOfDrawing(drawing: Drawing, settings: CompareSettings): ComparedSide {
+  const plan = planPens(drawing, settings.pens);
+  const [homeX, homeY] = settings.homeMm ?? [0, drawing.heightMm];
+  const home = { homeX, homeY, endAtHome: settings.end === 'home' };
+  return {
+    name: drawing.name,
+    program: programAsDrawn(drawing, plan.pens, strokesOfPens(plan), home),
+    lines: linesOfDrawing(drawing, plan),
+  };
+}
+
+/** A program read back from G-code, for comparison. */
+export function sideOfProgram(name: string, program: Program, settings: CompareSettings): ComparedSide {
+  const lines = linesOfProgram(program);
+  const one = settings.pens === 'one';
+  return { name, program, lines: one ? { ...lines, pen: new Uint32Array(lines.count) } : lines };
+}
+
+/**
+ * Whether two files draw the same lines, and what either costs to draw. The lines are held against each
+ * other as in the audit: one to one along their length, pens told apart by name.
+ */
+export function compareSides(
+  before: ComparedSide,
+  after: ComparedSide,
+  settings: CompareSettings,
+  profile: MachineProfile,
+  version: string,
+): Comparison {
+  const pens = before.program.pens.map(({ name }) => name);
+  const numberOf = after.program.pens.map(({ name }) => {
+    const known = pens.indexOf(name);
+    return known >= 0 ? known : pens.push(name) - 1;
+  });
+  const drawn =
+    settings.pens === 'one' ? after.lines : { ...after.lines, pen: after.lines.pen.map((p) => numberOf[p]) };
+  const audit = auditLines(before.lines, drawn, { ...settings, repeatToleranceMm: REPEAT_TOLERANCE_MM });
+  return {
+    schema: 'fewlift-comparison/1',
+    version,
+    before: { name: before.name, ...figures(measureProgram(before.program, profile)) },
+    after: { name: after.name, ...figures(measureProgram(after.program, profile)) },
+    same: audit.ok,
+    missingMm: audit.missingMm,
+    extraMm: audit.extraMm,
+    twiceMm: audit.twiceMm,
+    bridgedMm: audit.bridgedMm,
+    maxDeviationMm: audit.maxDeviationMm,
+    differences: pairMoved(audit.findings, pens),
+  };
+}
+
+function figures({ runs, travelMm, drawnMm, seconds }: Measure) {
+  return { runs, travelMm, drawnMm, seconds };
+}
