@@ -14,7 +14,7 @@ export function holds(specified: Specified): boolean {
 
 /**
  * The child that a `switch` draws: the first whose conditions hold. A foreignObject is passed over
- * whatever its conditions, since its content is never drawn and what follows stands in for it.
+ * even where its conditions hold, since its content is never drawn and what follows stands in for it.
  */
 export function firstThatHolds(
   element: SvgElement,
@@ -24,8 +24,9 @@ export function firstThatHolds(
   const passedOver: SvgElement[] = [];
   for (const child of element.children) {
     if (typeof child === 'string' || !child.isSvg || !isCandidate(child)) continue;
-    if (child.name === 'foreignObject') passedOver.push(child);
-    else if (holds(specifiedOn(child))) return { chosen: child, passedOver };
+    if (!holds(specifiedOn(child))) continue;
+    if (child.name !== 'foreignObject') return { chosen: child, passedOver };
+    passedOver.push(child);
   }
   return { chosen: null, passedOver };
 }

@@ -172,7 +172,10 @@ describe('switch', () => {
     const body =
       '<switch><foreignObject requiredExtensions="urn:x"><p xmlns="urn:y"/></foreignObject><g><path d="M1 1h1"/></g></switch>';
     expectSame(body, '<path d="M1 1h1"/>');
-    expectSame(body.replace(' requiredExtensions="urn:x"', ''), '<path d="M1 1h1"/>');
+    expect(codesOf(readBody(`<g ${STROKED}>${body}</g>`))).toEqual([]);
+    const unconditional = body.replace(' requiredExtensions="urn:x"', '');
+    expectSame(unconditional, '<path d="M1 1h1"/>');
+    expect(codesOf(readBody(`<g ${STROKED}>${unconditional}</g>`))).toEqual(['foreign-object-not-drawn']);
   });
 
   test('without a child that holds draws nothing, and says so', () => {
