@@ -11,8 +11,11 @@ interface Rule {
 const NEVER = /:(?:hover|focus|active|visited|focus-within|focus-visible|target)\b/;
 /** Comparisons with elements before a hostile sheet is given up; real drawings need some thousands. */
 export const MOST_COMPARED = 20_000_000;
-/** At-rules that say nothing about lines. */
-const NO_STYLE = /^@(?:charset|font-face|namespace|keyframes|-webkit-keyframes|page|font-feature-values)\b/;
+/** At-rules that say nothing about lines, and media that a drawing as first shown on a screen is not in. */
+const NO_STYLE =
+  /^@(?:charset|font-face|namespace|keyframes|-webkit-keyframes|page|font-feature-values|media\s+(?:print|\(\s*prefers-color-scheme\s*:\s*dark\s*\))\s*$)/i;
+const HOLDS = /^@media\s+(?:all|screen|\(\s*prefers-color-scheme\s*:\s*light\s*\))$/i;
+const DEEPEST_MEDIA = 4;
 
 /**
  * The rules of a drawing's style sheets whose selectors `readSelector` reads, by the key of their last
@@ -33,7 +36,7 @@ export class StyleSheet {
   }
 
   /** Adds the text of one `style` element; `unread` gets the beginning of each rule left out. */
-  add(text: string, unread: (rule: string) => void): void {
+  add(text: string, unread: (rule: string) => void, depth = 0): void {
     const clean = text.replace(/\/\*[\s\S]*?(?:\*\/|$)/g, ' ').replace(/<!--|-->/g, ' ');
     let at = 0;
     while (at < clean.length) {
@@ -50,7 +53,8 @@ export class StyleSheet {
       const end = closingBrace(clean, brace);
       const body = clean.slice(brace + 1, end);
       if (head.startsWith('@')) {
-        if (!NO_STYLE.test(head)) unread(head);
+        if (depth < DEEPEST_MEDIA && HOLDS.test(head)) this.add(body, unread, depth + 1);
+        else if (!NO_STYLE.test(head)) unread(head);
       } else this.addRule(head, readDeclarations(body), unread);
       at = end + 1;
     }

@@ -152,6 +152,6 @@ describe('files made to hurt', () => {
       return (performance.now() - start) / 1000;
     };
     // Quadratic time would be minutes here.
-    expect(seconds(400_000)).toBeLessThan(8);
+    expect(seconds(400_000)).toBeLessThan(20);
   });
 });

@@ -65,6 +65,7 @@ describe('style sheets', () => {
     ['/*x*/ .a { stroke : red ; } ', `<path ${LINE} class="a"/>`, '#ff0000'],
     ['<![CDATA[ .a{stroke:red} ]]>', `<path ${LINE} class="a"/>`, '#ff0000'],
     ['@font-face{font-family:x;src:url(y)}.a{stroke:red}', `<path ${LINE} class="a"/>`, '#ff0000'],
+    ['@media screen{.a{stroke:red}}@media print{.a{stroke:blue}}', `<path ${LINE} class="a"/>`, '#ff0000'],
     ['.a:hover{stroke:blue}.a{stroke:red}', `<path ${LINE} class="a"/>`, '#ff0000'],
   ])('%s on %s', (css, element, expected) => {
     expect(sheet(css, element)).toEqual([expected]);
@@ -97,7 +98,7 @@ describe('style sheets', () => {
 
   test('rules that are not read are counted, the others hold', () => {
     const drawing = readBody(
-      `<style>g + path{stroke:blue} a:not(b),.c{stroke:red} @media print{.c{stroke:blue}} [q]{font-size:3px}</style>
+      `<style>g + path{stroke:blue} a:not(b),.c{stroke:red} @media (width &gt; 9px){.c{stroke:blue}} [q]{font-size:3px}</style>
        <path ${LINE} class="c"/>`,
     );
     expect(strokeColours(drawing)).toEqual(['#ff0000']);
