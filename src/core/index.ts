@@ -1,6 +1,7 @@
-export { type AuditOptions, type AuditResult, auditLines as audit } from './audit/audit.js';
+export { type AuditResult, auditLines as audit } from './audit/audit.js';
 export type { LineSet } from './audit/lineSet.js';
 export { linesOfDrawing, linesOfProgram } from './audit/lines.js';
+export type { AuditOptions } from './audit/tolerances.js';
 export {
   type ComparedSide,
   type CompareSettings,
@@ -17,11 +18,12 @@ export { parseLengthMm } from './geometry/unit.js';
 export { PEN_ON_Z } from './machine/penOnZ.js';
 export type { MachineProfile } from './machine/profile.js';
 export { checkCertificate } from './matching/certificate.js';
-export { perfectMatching } from './matching/perfectMatching.js';
+export { type PerfectMatching, type Points, perfectMatching } from './matching/perfectMatching.js';
+export type { Certificate, MatchingProblem } from './matching/problem.js';
 export { type Measure, measureProgram } from './measure/measure.js';
 export { type Ordered, orderDrawing as tour, type Written, writeAudited } from './pipeline.js';
 export type { Program } from './program/program.js';
-export { readGcode } from './program/readGcode.js';
+export { type GcodeReading, type GcodeReadOptions, readGcode } from './program/readGcode.js';
 export type { Comparison, Difference } from './report/comparison.js';
 export { comparisonTable } from './report/comparisonTable.js';
 export { makeReport, type Report } from './report/report.js';
@@ -33,4 +35,5 @@ export { reportOf } from './reportOf.js';
 export { DEFAULT_SETTINGS, type Hooks, type Settings, type Step } from './settings.js';
 export { surveyDrawing } from './survey.js';
 export { writeGcode } from './write/gcode.js';
-export { withoutTravel, writeSvg } from './write/svg.js';
+export type { GcodeOptions } from './write/gcodeOptions.js';
+export { type SvgOptions, withoutTravel, writeSvg } from './write/svg.js';
