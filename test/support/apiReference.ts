@@ -58,16 +58,10 @@ function signatures(text: string, overloaded = false): string {
     else if (c === ')' || c === ']' || (c === '>' && text[i - 1] !== '=')) depth--;
     else if (depth > 0) continue;
     else if (c === ';') {
-      const next = /^\s*export (function )/.exec(text.slice(i + 1));
-      const isOverload = next && nameAfter(text.slice(i + 1)) === nameAfter(text);
+      const rest = text.slice(i + 1).trimStart();
+      const isOverload = rest.startsWith('export function ') && nameAfter(rest) === nameAfter(text);
       if (!isOverload) return text.slice(0, i + 1);
-      const rest = signatures(
-        text
-          .slice(i + 1)
-          .trimStart()
-          .replace(/^export /, ''),
-      );
-      return `${text.slice(0, i + 1)}\n${rest}`;
+      return `${text.slice(0, i + 1)}\n${signatures(rest.replace(/^export /, ''), true)}`.trimEnd();
     } else if (c === '{') {
       if (/[:|&<]\s*$/.test(text.slice(0, i))) i = closing(text, i);
       // What implements overloads is not for callers.
