@@ -58,7 +58,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'use-external': (v) => `<use> refers to another file, ${quoted(v.href)}: not fetched${times(v)}`,
   'use-loop': (v) => `<use> refers to itself through ${quoted(v.href)}: refused${times(v)}`,
   'use-too-deep': (v) => `<use> nested more than ${v.limit} deep: refused${times(v)}`,
-  'use-limit': (v) => `more than ${v.limit} copies by <use>: the rest is not drawn`,
+  'use-limit': (v) => `copies by <use> make more than ${v.limit} ${v.of ?? 'copies'}: the rest is not drawn`,
+  'style-limit': (v) => `style rules beyond ${v.limit} steps of matching were left aside`,
   'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
   'shape-error': (v) => `a shape is left out: ${v.attribute}=${quoted(v.found)}${times(v)}`,
 
