@@ -107,7 +107,8 @@ describe('segmentLength: second opinions', () => {
   test('elliptical arcs, down to needles, against the elliptic integral', () => {
     const anExponent = fc.double({ min: -10, max: 0, noNaN: true });
     const anAngle = fc.double({ min: -3, max: 3, noNaN: true });
-    const aSweep = fc.double({ min: 0.01, max: 6.28, noNaN: true });
+    // Shorter ones lose their digits in the difference of two integrals.
+    const aSweep = fc.double({ min: 0.1, max: 6.28, noNaN: true });
     fc.assert(
       fc.property(
         anExponent,
@@ -146,7 +147,7 @@ describe('segmentLength: second opinions', () => {
         const length = lengthOf(curve);
         // The chords are rounded to 1e-13 or so each.
         const chords = chordSum(curve, 2000);
-        expect(length).toBeGreaterThanOrEqual(chords - 1e-9);
+        expect(length).toBeGreaterThanOrEqual(chords * (1 - 1e-10) - 1e-9);
         expect(length).toBeLessThanOrEqual(chords * (1 + 2e-4) + 1e-9);
       }),
       { numRuns: 300 },

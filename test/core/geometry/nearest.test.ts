@@ -34,6 +34,7 @@ function sampled(curve: Curve, x: number, y: number, t0: number, t1: number): nu
 }
 
 describe('nearestOnSegment', () => {
+  // 1e-8 mm is 1e-10 of these curves' size: what rounding leaves where all of P′ and P″ vanishes.
   test('no sampled point of the span is nearer, and the distance is that of its own point', () => {
     const out = new Float64Array(2);
     fc.assert(
@@ -43,7 +44,7 @@ describe('nearestOnSegment', () => {
         expect(t).toBeLessThanOrEqual(Math.max(t0, t1));
         pointAt(build(curve), 0, t, out);
         expect(Math.abs(Math.hypot(out[0] - x, out[1] - y) - distance)).toBeLessThan(1e-12);
-        expect(distance).toBeLessThanOrEqual(sampled(curve, x, y, t0, t1) + 1e-9);
+        expect(distance).toBeLessThanOrEqual(sampled(curve, x, y, t0, t1) + 1e-8);
       }),
       { numRuns: 1500 },
     );
