@@ -38,13 +38,11 @@ export function place(curve: Curve, t: number): [number, number] {
     const sin = Math.sin(curve.theta0 + t * curve.sweep);
     return [cx + ux * cos + vx * sin, cy + uy * cos + vy * sin];
   }
-  let xs = curve.points.filter((_, k) => k % 2 === 0);
-  let ys = curve.points.filter((_, k) => k % 2 === 1);
-  while (xs.length > 1) {
-    xs = xs.slice(1).map((x, k) => (1 - t) * xs[k] + t * x);
-    ys = ys.slice(1).map((y, k) => (1 - t) * ys[k] + t * y);
+  const p = [...curve.points];
+  for (let left = p.length - 2; left > 0; left -= 2) {
+    for (let k = 0; k < left; k++) p[k] = (1 - t) * p[k] + t * p[k + 2];
   }
-  return [xs[0], ys[0]];
+  return [p[0], p[1]];
 }
 
 /** The sum of n chords at even steps of t: never longer than the curve. */

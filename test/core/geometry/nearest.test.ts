@@ -67,6 +67,15 @@ describe('nearestOnSegment', () => {
     expect(nearest(line, 4, 3, 0.8, 0.5)).toEqual({ t: 0.5, distance: Math.sqrt(10) });
   });
 
+  test('a point of the curve where two quarters meet', () => {
+    for (const start of [0, 0.1, 1, -2.5]) {
+      for (let k = 0; k <= 8; k++) {
+        const [x, y] = place(circle(3, 4, 20, start), k / 8);
+        expect(nearest(circle(3, 4, 20, start), x, y).distance).toBeLessThan(1e-12);
+      }
+    }
+  });
+
   test('a circle: the radius less or more', () => {
     fc.assert(
       fc.property(aPlace, aPlace, (x, y) => {
