@@ -45,7 +45,8 @@ describe('samples', () => {
     const machine = runStrictly(gcode.text);
     expect(machine.descents).toBe(after.runs);
     expect(machine.travelMm).toBeCloseTo(after.travelMm, 1);
-    expect(Math.abs(machine.drawnMm / after.drawnMm - 1)).toBeLessThan(0.002);
+    // Chords 0.02 mm off an arc of radius r are shorter by 0.02/(3r): 1 % at the 0.7 mm of the letters.
+    expect(Math.abs(machine.drawnMm - after.drawnMm)).toBeLessThanOrEqual(0.005 * after.drawnMm);
     reached[name] = { runs: after.runs, travelMm: up(after.travelMm), drawnMm: up(after.drawnMm) };
     if (REWRITE) return;
     expect(after.runs).toBeLessThanOrEqual(ceilings[name].runs);
