@@ -7,27 +7,31 @@ import { totalOf } from './total.js';
 /**
  * The greedy matching: again and again the cheapest pair of what is left; of equally cheap pairs the one with
  * the lowest index, then the lowest other index. At worst (4/3)·n^0.585 − 1 times the optimum, n even
- * (Reingold & Tarjan 1981), and never known to be near it. About n·log n for the placed vertices and for each
- * special one; throws RangeError as `exactMatching` does.
+ * (Reingold & Tarjan 1981), and never known to be near it. About n·log n, and n more for each special
+ * vertex; throws RangeError as `exactMatching` does.
  */
 export function greedyMatching(problem: MatchingProblem): Matching {
   largestCost(problem);
   const { n, special } = problem;
   const placed = n - special;
   const points = new FreePoints(problem);
-  const rankings = Array.from({ length: special }, (_, i) => ranking(problem, placed + i));
-  const ranked = new Int32Array(special);
   const mate = new Int32Array(n).fill(-1);
   const heap = new PairHeap();
 
   // The entry (cost, v, partner) of a free vertex v: its cheapest pair, of equal ones with the lowest partner.
+  // Special vertices look among themselves only; the placed ones look at them.
   const cheapest = (v: number): number => {
-    if (v < placed) return points.nearest(v);
-    const list = rankings[v - placed];
-    let at = ranked[v - placed];
-    while (at < list.length && mate[list[at]] >= 0) at++;
-    ranked[v - placed] = at;
-    return at < list.length ? list[at] : -1;
+    let best = v < placed ? points.nearest(v) : -1;
+    let cost = best < 0 ? Number.POSITIVE_INFINITY : points.cost;
+    for (let s = placed; s < n; s++) {
+      if (mate[s] >= 0 || s === v) continue;
+      const other = pairCost(problem, v, s);
+      if (other < cost) {
+        best = s;
+        cost = other;
+      }
+    }
+    return best;
   };
   for (let v = 0; v < n; v++) {
     const w = cheapest(v);
@@ -51,16 +55,4 @@ export function greedyMatching(problem: MatchingProblem): Matching {
     if (b < placed) points.remove(b);
   }
   return { mate, total: totalOf(problem, mate) };
-}
-
-/** All other vertices by their cost with the special vertex s, lowest index first among equals. */
-function ranking(problem: MatchingProblem, s: number): Int32Array {
-  const cost = new Float64Array(problem.n);
-  const others = new Int32Array(problem.n - 1);
-  for (let v = 0, at = 0; v < problem.n; v++) {
-    if (v === s) continue;
-    cost[v] = pairCost(problem, s, v);
-    others[at++] = v;
-  }
-  return others.sort((a, b) => cost[a] - cost[b] || a - b);
 }

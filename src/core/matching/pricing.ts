@@ -6,6 +6,9 @@ import type { IntegerCosts, Layout } from './layout.js';
 
 /** At most this many new edges at a vertex in one round: the repair of a few mends many. */
 const PER_VERTEX = 3;
+/** The same for a pair of crowded places, whose copies stand for one another, and for a special vertex. */
+const PER_PLACES = 30;
+const PER_SPECIAL = 50;
 
 /** What a group of vertices (a place, a box) has in common, to judge pairs of groups. */
 interface Summary {
@@ -100,8 +103,7 @@ class Pricer {
     const common = commonBlossom(nests, blossom[p], blossom[q]);
     const shared = common < 0 ? 0 : nests.zSum[common];
     if (cost + shared >= highest[p] + highest[q]) return;
-    // Between two crowded places a few edges do: their copies stand for one another.
-    let left = PER_VERTEX;
+    let left = PER_PLACES;
     for (let u = first[p]; u < first[p + 1] && left > 0; u++) {
       if (cost + shared >= value[u] + highest[q]) continue;
       for (let v = p === q ? u + 1 : first[q]; v < first[q + 1] && left > 0; v++) {
@@ -111,21 +113,36 @@ class Pricer {
     }
   }
 
+  /** The worst pairs first: where one dual is too high everywhere, mending the worst mends all. */
   special(s: number): void {
-    const { value, added } = this;
-    for (let v = 0; v < s && added[s] < PER_VERTEX; v++) {
-      if (added[v] >= PER_VERTEX) continue;
-      const cost = this.costs.between(v, s);
-      if (cost < value[v] + value[s]) this.offer(v, s, cost);
+    const { value, layout, costs } = this;
+    const { placed, place } = layout;
+    const worst: { v: number; slack: number }[] = [];
+    for (let v = 0; v < s; v++) {
+      const cost = costs.between(v, s);
+      if (cost >= value[v] + value[s]) continue;
+      const slack = this.slack(v, s, cost);
+      if (slack >= 0) continue;
+      // One edge a place is enough: its copies stand for one another.
+      const last = worst.length - 1;
+      if (v < placed && last >= 0 && worst[last].v < placed && place[worst[last].v] === place[v]) {
+        if (slack < worst[last].slack) worst[last] = { v, slack };
+      } else worst.push({ v, slack });
     }
+    worst.sort((a, b) => a.slack - b.slack || a.v - b.v);
+    for (const { v } of worst.slice(0, PER_SPECIAL)) this.edges.add(v, s, costs.between(v, s));
+  }
+
+  private slack(u: number, v: number, cost: number): number {
+    const { nests, value } = this;
+    const common = commonBlossom(nests, nests.inner[u], nests.inner[v]);
+    return cost + (common < 0 ? 0 : nests.zSum[common]) - value[u] - value[v];
   }
 
   private offer(u: number, v: number, cost: number): boolean {
-    const { nests, value, added } = this;
-    const common = commonBlossom(nests, nests.inner[u], nests.inner[v]);
-    if (cost + (common < 0 ? 0 : nests.zSum[common]) >= value[u] + value[v]) return false;
-    added[u]++;
-    added[v]++;
+    if (this.slack(u, v, cost) >= 0) return false;
+    this.added[u]++;
+    this.added[v]++;
     this.edges.add(u, v, cost);
     return true;
   }
