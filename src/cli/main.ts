@@ -5,13 +5,17 @@ import { Ending, EXIT } from './exitCodes.js';
 import { surveyCommand } from './surveyCommand.js';
 import { tourCommand } from './tourCommand.js';
 
+/** A reader that has seen enough (`| head`) is no error of ours. */
+function endQuietlyOnBrokenPipe(error: NodeJS.ErrnoException): void {
+  if (error.code !== 'EPIPE') throw error;
+  process.exit(EXIT.done);
+}
+
 /** Runs the command line; the process ends with the code returned. Never throws on a user's mistake. */
 export async function main(args: readonly string[]): Promise<number> {
-  // A reader that has seen enough (`| head`) is no error of ours.
-  process.stdout.on('error', (error: NodeJS.ErrnoException) => {
-    if (error.code !== 'EPIPE') throw error;
-    process.exit(EXIT.done);
-  });
+  if (!process.stdout.listeners('error').includes(endQuietlyOnBrokenPipe)) {
+    process.stdout.on('error', endQuietlyOnBrokenPipe);
+  }
   let code: number = EXIT.done;
   const program = new Command('fewlift')
     .description(

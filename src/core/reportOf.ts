@@ -3,6 +3,7 @@ import type { Finding } from './finding.js';
 import { segmentLength } from './geometry/length.js';
 import { programBounds } from './measure/bounds.js';
 import { fewestRuns } from './network/fewestRuns.js';
+import { overhang } from './overhang.js';
 import type { Ordered } from './pipeline.js';
 import { makeReport, type Report } from './report/report.js';
 
@@ -66,22 +67,14 @@ function boundOf({ settings, networks, tours, after }: Ordered): Report['bound']
 /** What the network and the program have to say besides the figures. */
 function findingsOf({ drawing, networks, before, after }: Ordered): Finding[] {
   const findings: Finding[] = [];
-  const note = (code: string, values: Finding['values'], severity: Finding['severity'] = 'note') =>
-    findings.push({ code, severity, place: null, values });
+  const note = (code: string, values: Finding['values']) =>
+    findings.push({ code, severity: 'note', place: null, values });
   const repeatedMm = networks.reduce((total, n) => total + n.repeatedMm, 0);
   if (repeatedMm > 0) note('repeats-drawn-once', { lengthMm: repeatedMm });
   const dots = networks.reduce((total, n) => total + n.dotsOnLines, 0);
   if (dots > 0) note('dots-on-lines', { count: dots });
   const { drawn } = programBounds(after.program);
-  if (drawn) {
-    const overhangMm = Math.max(
-      -drawn.minX,
-      -drawn.minY,
-      drawn.maxX - drawing.widthMm,
-      drawn.maxY - drawing.heightMm,
-    );
-    if (overhangMm > 1e-6) note('off-page', { overhangMm }, 'warning');
-  }
+  if (drawn) findings.push(...overhang(drawn, drawing));
   if (after === before) note('order-kept', {});
   return findings;
 }

@@ -1,11 +1,14 @@
 import type { Drawing } from './drawing/drawing.js';
 import { NO_LAYER } from './drawing/drawing.js';
 import { planPens, strokesOfPens } from './drawing/pens.js';
+import { segmentBox } from './geometry/box.js';
 import { segmentLength } from './geometry/length.js';
+import type { Bounds } from './measure/bounds.js';
 import { travelCost } from './metric/metric.js';
 import { buildNetwork } from './network/buildNetwork.js';
 import { fewestRuns } from './network/fewestRuns.js';
 import { findNearMisses, type NearMiss } from './network/nearMisses.js';
+import { overhang } from './overhang.js';
 import { sentence } from './report/sentences.js';
 import type { Survey } from './report/survey.js';
 import { REPEAT_TOLERANCE_MM, type Settings } from './settings.js';
@@ -51,7 +54,6 @@ export function surveyDrawing(drawing: Drawing, settings: Settings, version: str
   const total = (pick: (pen: (typeof pens)[number]) => number) =>
     pens.reduce((sum, pen) => sum + pick(pen), 0);
   const dots = strokes.dot.reduce((sum, dot) => sum + dot, 0);
-  const closed = strokes.closed.reduce((sum, one) => sum + one, 0);
   return {
     schema: 'fewlift-survey/1',
     version,
@@ -62,7 +64,7 @@ export function surveyDrawing(drawing: Drawing, settings: Settings, version: str
       heightMm: drawing.heightMm,
       elements: drawing.elementCount,
       strokes: strokes.count,
-      closed,
+      closed: closedCount(drawing),
       dots,
       drawnMm: total((pen) => pen.drawnMm),
     },
@@ -83,8 +85,36 @@ export function surveyDrawing(drawing: Drawing, settings: Settings, version: str
     },
     pens,
     layers: layerCounts(drawing, layers.length),
-    findings: drawing.findings.map((finding) => ({ ...finding, message: sentence(finding) })),
+    findings: [...drawing.findings, ...overhang(boxOf(drawing), drawing)].map((finding) => ({
+      ...finding,
+      message: sentence(finding),
+    })),
   };
+}
+
+/** Strokes that end where they begin, whether by a closing command or by their points. */
+function closedCount({ strokes: { count, first, dot, segments } }: Drawing): number {
+  let closed = 0;
+  for (let s = 0; s < count; s++) {
+    const a = segments.offset[first[s]];
+    const b = segments.offset[first[s + 1] - 1] + 2;
+    const meets = segments.data[a] === segments.data[b] && segments.data[a + 1] === segments.data[b + 1];
+    if (meets && !dot[s]) closed++;
+  }
+  return closed;
+}
+
+function boxOf({ strokes }: Drawing): Bounds {
+  const box = new Float64Array(4);
+  let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity];
+  for (let i = 0; i < strokes.segments.count; i++) {
+    segmentBox(strokes.segments, i, box);
+    minX = Math.min(minX, box[0]);
+    minY = Math.min(minY, box[1]);
+    maxX = Math.max(maxX, box[2]);
+    maxY = Math.max(maxY, box[3]);
+  }
+  return { minX, minY, maxX, maxY };
 }
 
 function strokeLengths({ strokes }: Drawing): Float64Array {

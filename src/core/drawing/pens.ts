@@ -5,6 +5,8 @@ export type PenRule = 'colour' | 'layer' | 'one';
 export interface Pen {
   readonly name: string;
   readonly colour: string;
+  /** Width of the first stroke that it draws, mm: how the drawing looks, not what the pen does. */
+  readonly widthMm: number;
 }
 
 /** Which pen draws which stroke; pens in the order in which the drawing first needs them. */
@@ -33,7 +35,7 @@ export function planPens(drawing: Drawing, rule: PenRule): PenPlan {
           : rule === 'layer'
             ? (layer?.label ?? layer?.id ?? (key === NO_LAYER ? 'no layer' : `layer ${key + 1}`))
             : 'pen';
-      pens.push({ name, colour });
+      pens.push({ name, colour, widthMm: strokes.widthMm[s] });
     }
     penOfStroke[s] = pen;
   }

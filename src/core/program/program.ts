@@ -13,7 +13,7 @@ export interface Program extends Chains {
   readonly bridge: Uint8Array;
   /** Pen of each run. */
   readonly pen: Uint32Array;
-  readonly pens: readonly { readonly name: string; readonly colour: string }[];
+  readonly pens: readonly { readonly name: string; readonly colour: string; readonly widthMm?: number }[];
   readonly homeX: number;
   readonly homeY: number;
   readonly endAtHome: boolean;

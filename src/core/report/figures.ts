@@ -14,10 +14,13 @@ export function size(value: number): string {
   return String(Math.round(value * 100) / 100);
 }
 
+/** Seconds below a minute; then minutes and seconds; hours and minutes from an hour on. */
 export function duration(seconds: number): string {
-  if (seconds < 100) return `${seconds.toFixed(1)} s`;
-  const whole = Math.round(seconds / 60);
-  return whole < 60 ? `${whole} min` : `${Math.floor(whole / 60)} h ${whole % 60} min`;
+  if (seconds < 59.95) return `${seconds.toFixed(1)} s`;
+  const whole = Math.round(seconds);
+  const two = (n: number) => String(n).padStart(2, '0');
+  if (whole < 3600) return `${Math.floor(whole / 60)}:${two(whole % 60)} min`;
+  return `${Math.floor(whole / 3600)}:${two(Math.floor(whole / 60) % 60)} h`;
 }
 
 export function count(n: number, one: string, many = `${one}s`): string {

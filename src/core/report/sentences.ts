@@ -147,7 +147,9 @@ function quoted(value: string | number | undefined): string {
 
 function number(value: string | number | undefined): string {
   const n = Number(value ?? Number.NaN);
-  return Number.isFinite(n) ? String(Math.round(n * 1000) / 1000) : 'an unknown number of';
+  if (!Number.isFinite(n)) return 'an unknown number of';
+  const steps = Math.abs(n) >= 10 ? 10 : 1000;
+  return String(Math.round(n * steps) / steps);
 }
 
 function some(count: string | number | undefined, one: string): string {

@@ -1,6 +1,9 @@
 import { count, fineMm, mm, sideBySide, size } from './figures.js';
 import type { Report } from './report.js';
 
+/** Gaps below a tenth of a micrometre are rounding, not gaps. */
+const SHOWN_GAP_MM = 1e-4;
+
 /** The report in a few lines for a terminal: before and after, bound and gap, findings, audit. */
 export function reportTable(report: Report): string {
   const { before, after, bound, gap, drawing, network } = report;
@@ -10,7 +13,7 @@ export function reportTable(report: Report): string {
     `  bound   ${boundText(bound, gap)}`,
     `  audit   ${auditText(report)}`,
   ];
-  if (network.bridgedMm > 0) {
+  if (network.snapMaxMm >= SHOWN_GAP_MM) {
     lines.push(
       `  gaps    ${mm(network.bridgedMm)} drawn across gaps, none wider than ${fineMm(network.snapMaxMm)}`,
     );

@@ -12,7 +12,7 @@ export interface SvgOptions {
   readonly description?: string | null;
   /** Whether to show the lifted travel too, in a last group of its own. */
   readonly travel?: boolean;
-  /** Width of every line, default 0.3 mm: how it looks, not what is drawn. */
+  /** Width of the lines of a pen without a width, default 0.3 mm: how it looks, not what is drawn. */
   readonly strokeWidthMm?: number;
   /** Places after the point, default 4, at most 9. */
   readonly decimals?: number;
@@ -76,10 +76,11 @@ class SvgStylus implements CurveStylus {
   }
 
   beginPen(pen: number): void {
-    const { name, colour } = this.program.pens[pen];
+    const { name, colour, widthMm } = this.program.pens[pen];
+    const width = widthMm ? ` stroke-width="${formatDecimal(widthMm, 4)}"` : '';
     const label = xmlText(name);
     this.lines.push(
-      `<g id="pen-${pen + 1}" fewlift:label="${label}" stroke="${strokeOf(colour)}">`,
+      `<g id="pen-${pen + 1}" fewlift:label="${label}" stroke="${strokeOf(colour)}"${width}>`,
       `<title>${label}</title>`,
     );
   }
