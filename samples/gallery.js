@@ -15,11 +15,12 @@ import {
 const samples = new URL('./', import.meta.url);
 const gallery = new URL('./gallery/', import.meta.url);
 mkdirSync(gallery, { recursive: true });
-const SHOWN = process.argv.slice(2);
+/** Those the README shows; others by name on the command line. */
+const SHOWN = process.argv.length > 2 ? process.argv.slice(2) : ['hatched-leaf', 'motif-sheet', 'stippled-moon'];
 
 for (const file of readdirSync(samples).filter((name) => name.endsWith('.svg'))) {
   const name = file.replace(/\.svg$/, '');
-  if (SHOWN.length > 0 && !SHOWN.includes(name)) continue;
+  if (!SHOWN.includes(name)) continue;
   const drawing = readDrawing(readFileSync(new URL(file, samples), 'utf8'), { name });
   const { widthMm, heightMm } = drawing;
   const ordered = tour(drawing, DEFAULT_SETTINGS, PEN_ON_Z);
