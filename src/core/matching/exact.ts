@@ -33,7 +33,7 @@ export interface ExactOptions {
  *
  * `weigh` must be nondecreasing as computed in doubles, and costs finite; otherwise, or where n is odd, a
  * RangeError is thrown. Where `shouldStop` ends the work, the matching is the greedy one, the certificate is
- * valid but weaker, and `optimal` is false. About n·log n in practice; memory about 400 bytes a vertex.
+ * valid but weaker, and `optimal` is false. About n·log n in practice; memory about 1 kB a vertex.
  */
 export function exactMatching(problem: MatchingProblem, options: ExactOptions = {}): CertifiedMatching {
   const largest = largestCost(problem);

@@ -1,9 +1,15 @@
 /** A growing list of undirected edges with their integer costs. */
 export class EdgeList {
-  from = new Int32Array(1024);
-  to = new Int32Array(1024);
-  cost = new Float64Array(1024);
+  from: Int32Array;
+  to: Int32Array;
+  cost: Float64Array;
   count = 0;
+
+  constructor(capacity = 1024) {
+    this.from = new Int32Array(capacity);
+    this.to = new Int32Array(capacity);
+    this.cost = new Float64Array(capacity);
+  }
 
   add(u: number, v: number, cost: number): void {
     if (this.count === this.from.length) this.grow();
@@ -35,41 +41,50 @@ export interface Graph {
   readonly cost: Float64Array;
 }
 
-/** Lists the arcs by vertex, an edge given twice only once. Linear time. */
+/** Lists the arcs by vertex. Puts the edges in the order of their lower ends and drops double ones. Linear time. */
 export function buildGraph(n: number, edges: EdgeList): Graph {
+  tidy(n, edges);
+  const { from, to, cost, count } = edges;
+  const first = new Int32Array(n + 1);
+  for (let i = 0; i < count; i++) {
+    first[from[i] + 1]++;
+    first[to[i] + 1]++;
+  }
+  for (let v = 0; v < n; v++) first[v + 1] += first[v];
+  const tail = new Int32Array(2 * count);
+  const head = new Int32Array(2 * count);
+  const arcCost = new Float64Array(2 * count);
+  const at = first.slice(0, n);
+  for (let i = 0; i < count; i++) {
+    const u = from[i];
+    const v = to[i];
+    const there = at[u]++;
+    const back = at[v]++;
+    tail[there] = u;
+    head[there] = v;
+    arcCost[there] = cost[i];
+    tail[back] = v;
+    head[back] = u;
+    arcCost[back] = cost[i];
+  }
+  return { first, tail, head, cost: arcCost };
+}
+
+function tidy(n: number, edges: EdgeList): void {
   const { from, to, cost, count } = edges;
   const bucket = bucketByFrom(n, from, count);
   const mark = new Int32Array(n).fill(-1);
-  const keep = new Int32Array(count);
-  const first = new Int32Array(n + 1);
-  let kept = 0;
+  const tidied = new EdgeList(from.length);
   for (let i = 0; i < count; i++) {
     const edge = bucket[i];
-    const u = from[edge];
-    const v = to[edge];
-    if (mark[v] === u) continue;
-    mark[v] = u;
-    keep[kept++] = edge;
-    first[u + 1]++;
-    first[v + 1]++;
+    if (mark[to[edge]] === from[edge]) continue;
+    mark[to[edge]] = from[edge];
+    tidied.add(from[edge], to[edge], cost[edge]);
   }
-  for (let v = 0; v < n; v++) first[v + 1] += first[v];
-  const tail = new Int32Array(2 * kept);
-  const head = new Int32Array(2 * kept);
-  const arcCost = new Float64Array(2 * kept);
-  const at = first.slice(0, n);
-  for (let i = 0; i < kept; i++) {
-    const edge = keep[i];
-    const u = from[edge];
-    const v = to[edge];
-    tail[at[u]] = u;
-    head[at[u]] = v;
-    arcCost[at[u]++] = cost[edge];
-    tail[at[v]] = v;
-    head[at[v]] = u;
-    arcCost[at[v]++] = cost[edge];
-  }
-  return { first, tail, head, cost: arcCost };
+  edges.from = tidied.from;
+  edges.to = tidied.to;
+  edges.cost = tidied.cost;
+  edges.count = tidied.count;
 }
 
 function bucketByFrom(n: number, from: Int32Array, count: number): Int32Array {

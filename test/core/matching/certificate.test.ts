@@ -5,7 +5,7 @@ import type { Certificate, CertifiedMatching } from '../../../src/core/matching/
 import { createRandom } from '../../../src/core/structures/random.ts';
 import { plane, pointSets } from '../../support/matchingProblems.ts';
 
-const problem = plane(pointSets.clustered(60, createRandom(12)));
+const problem = plane(pointSets.clustered(40, createRandom(12)));
 const sound = exactMatching(problem);
 
 function withCertificate(change: Partial<Certificate>): CertifiedMatching {

@@ -20,9 +20,9 @@ function expectOptimal(problem: MatchingProblem, optimum: number): void {
 }
 
 describe('against brute force, n to 10', () => {
-  test('1,500 random sets: grids with ties, copies, lines, special vertices, five ways of weighing', () => {
+  test('1,000 random sets: grids with ties, copies, lines, special vertices, five ways of weighing', () => {
     const random = createRandom(1);
-    for (let i = 0; i < 1500; i++) {
+    for (let i = 0; i < 1000; i++) {
       const problem = smallProblem(random, 10);
       expectOptimal(
         problem,
@@ -51,7 +51,7 @@ describe('hard sets of 2,000', () => {
     test(`${name}: the certificate holds, alone and with home`, () => {
       const set = points(2000, createRandom(5));
       const seconds = (distance: number): number => (distance > 0 ? 0.2 + Math.sqrt(distance) : 0);
-      const problems = [plane(set), withHome(set.slice(2), [-0.1, -0.2], 'open', seconds)];
+      const problems = [plane(set), withHome(set.slice(0, 998), [-0.1, -0.2], 'open', seconds)];
       for (const problem of problems) {
         expect(checkCertificate(problem, exactMatching(problem)).reason).toBe(null);
       }
