@@ -78,6 +78,16 @@ test('large enough for special vertices to see only some of the others', () => {
   }
 });
 
+test('lifts first: a row of 1,500 places with two vertices each, one vertex at either end', () => {
+  // Mates on their own place cost nothing, so one connector is left; a way through every place costs 1,501.
+  const row = Array.from({ length: 1500 }, (_, i): [number, number] => [i + 1, 0]);
+  const problem = plane([[0, 0], ...row, ...row, [1501, 0]]);
+  const lift = 2 ** 20;
+  const found = exactMatching({ ...problem, weigh: (distance) => (distance > 0 ? lift + distance : 0) });
+  expect(found.total).toBe(lift + 1501);
+  expect(found.certificate.lowerBound).toBe(lift + 1501);
+});
+
 test('random points: the constant of the random Euclidean matching', () => {
   // Houdayer, Boutet de Monvel & Martin, Eur. Phys. J. B 6, 1998 (from memory): 0.3104·√(nA) without an edge;
   // in a square of 2,000 points the edge brings it to 0.315.

@@ -90,6 +90,18 @@ describe('the forms of the input', () => {
     expect(total - certificate.lowerBound).toBeLessThan(1e-9);
   });
 
+  test('costs uniform in 0 … 1 and independent: the total tends to π²/12', () => {
+    // Mézard & Parisi 1985; proved by Wästlund, "Random matching problems on the complete graph" (2008).
+    let sum = 0;
+    for (let seed = 1; seed <= 4; seed++) {
+      const random = createRandom(seed);
+      const n = 600;
+      const table = Array.from({ length: n * n }, random);
+      sum += perfectMatching(n, (i, j) => table[n * i + j]).total;
+    }
+    expect(Math.abs(sum / 4 / (Math.PI ** 2 / 12) - 1)).toBeLessThan(0.06);
+  });
+
   test('misuse throws', () => {
     expect(() => perfectMatching(3, () => 1)).toThrow(RangeError);
     expect(() => perfectMatching(2, () => Number.POSITIVE_INFINITY)).toThrow(RangeError);
