@@ -8,7 +8,7 @@ const WIDEN = 4;
 const BETWEEN_LOOKS = 64;
 
 export interface Watch {
-  /** Called with the number of vertices seen to be matched for good or not at all. */
+  /** Told after every pass how many sets are still exposed. */
   progress(exposedLeft: number): void;
   stop(): boolean;
 }
