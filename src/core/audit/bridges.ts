@@ -1,5 +1,6 @@
 import { BoxIndex } from './boxIndex.js';
-import { isNear, visitPieces } from './nearness.js';
+import { totalLength } from './intervals.js';
+import { isNear, nearParts, visitPieces } from './nearness.js';
 import type { Side } from './side.js';
 import type { Stretch } from './stretches.js';
 import type { Tolerances } from './tolerances.js';
@@ -7,17 +8,26 @@ import type { Tolerances } from './tolerances.js';
 /** Pieces around a bridge that are tried for a crossing at most. */
 const MOST_PIECES = 64;
 
+/** Straight parts of an unpaired stretch with bridges: two bridges, and what either may have displaced. */
+const MOST_LEGS = 4;
+const MOST_BRIDGES = 2;
+/** Points of a stretch that is looked at: bridges have few. */
+const MOST_POINTS = 64;
+
 /**
  * Tells bridges from lines that were added.
  *
  * Where strokes were snapped together the tool draws straight from a stroke's end to the vertex, and on
  * to the start of the next, each at most the snap distance; a vertex stands on a wanted line, within the
- * snap distance of a stroke's end, or where lines cross. So an unpaired stretch of a run is a bridge if
+ * snap distance of a stroke's end, or where lines cross. Where a bridge runs along a wanted line it may
+ * be paired in the place of the line that was meant, which is then left over beside it. So an unpaired
+ * stretch of a run is taken for bridges if
  *
  * - something is paired before or after it on its run: no run is all bridge;
- * - it is straight, or straight to some point within `matchMm` of a wanted line and straight from there,
- *   neither part longer than the snap distance (plus a match tolerance at each end, where what is paired
- *   leaves off); at the start or end of a run it is straight, and that point is its free end;
+ * - it consists of at most four straight legs, each no longer than the snap distance (plus a match
+ *   tolerance at each end, where what is paired leaves off), that meet within `matchMm` of wanted lines;
+ *   where the run starts or ends, its free end is there as well;
+ * - at most two of the legs are bridges: the others lie within `matchMm` of wanted lines all along;
  * - an end of a wanted stroke, or a crossing of two wanted lines, lies within snap distance and match
  *   tolerance of it. In the midst of neighbours there is nothing to bridge.
  */
@@ -32,21 +42,43 @@ export class BridgeInspector {
   isBridge(stretch: Stretch): boolean {
     const { snapMm, matchMm } = this.tolerances;
     if (stretch.atStart && stretch.atEnd) return false;
-    if (stretch.lengthMm > 2 * (snapMm + 2 * matchMm)) return false;
-    return this.hasVertex(stretch) && (this.isNearEnd(stretch) || this.isNearCrossing(stretch));
+    if (stretch.lengthMm > MOST_LEGS * (snapMm + 2 * matchMm) || stretch.x.length > MOST_POINTS) return false;
+    return this.hasLegs(stretch) && (this.isNearEnd(stretch) || this.isNearCrossing(stretch));
   }
 
-  /** Whether a point of it can be the vertex that both straight parts lead to. */
-  private hasVertex(stretch: Stretch): boolean {
+  /** Whether it falls into legs; the fewest bridges by dynamic programming over its points. */
+  private hasLegs(stretch: Stretch): boolean {
     const { x, y, pen, atStart, atEnd } = stretch;
-    const { snapMm, matchMm } = this.tolerances;
+    const { matchMm } = this.tolerances;
     const last = x.length - 1;
-    for (let k = atEnd ? last : 0; k <= (atStart ? 0 : last); k++) {
-      if (!isStraight(stretch, 0, k, snapMm + 2 * matchMm, matchMm)) continue;
-      if (!isStraight(stretch, k, last, snapMm + 2 * matchMm, matchMm)) continue;
-      if (isNear(x[k], y[k], this.wanted, pen, matchMm)) return true;
+    const joint = x.map((_, k) => isNear(x[k], y[k], this.wanted, pen, matchMm));
+    if ((atStart && !joint[0]) || (atEnd && !joint[last])) return false;
+    // The fewest bridges among the legs that lead to each point, by the number of legs.
+    let fewest = new Float64Array(last + 1).fill(Number.POSITIVE_INFINITY);
+    fewest[0] = 0;
+    for (let legs = 0; legs < MOST_LEGS; legs++) {
+      const next = fewest.slice();
+      for (let i = 0; i < last; i++) {
+        if (!(fewest[i] <= MOST_BRIDGES)) continue;
+        for (let j = i + 1; j <= last; j++) {
+          if (j < last && !joint[j]) continue;
+          if (fewest[i] >= next[j]) continue;
+          const cost = this.costOfLeg(stretch, i, j);
+          if (fewest[i] + cost < next[j]) next[j] = fewest[i] + cost;
+        }
+      }
+      fewest = next;
     }
-    return false;
+    return fewest[last] <= MOST_BRIDGES;
+  }
+
+  /** 1 for a straight leg that is a bridge, 0 for one beside wanted lines, else infinite. */
+  private costOfLeg(stretch: Stretch, i: number, j: number): number {
+    const { snapMm, matchMm, hairMm } = this.tolerances;
+    if (!isStraight(stretch, i, j, snapMm + 2 * matchMm, matchMm)) return Number.POSITIVE_INFINITY;
+    const leg = { x: stretch.x.slice(i, j + 1), y: stretch.y.slice(i, j + 1), pen: stretch.pen };
+    const near = totalLength(nearParts(leg, this.wanted, matchMm));
+    return pathLength(leg.x, leg.y) - near > hairMm ? 1 : 0;
   }
 
   private isNearEnd(stretch: Stretch): boolean {
@@ -130,6 +162,16 @@ function isStraight(stretch: Stretch, i: number, j: number, longest: number, sla
     length += Math.sqrt(ex * ex + ey * ey);
   }
   return length <= longest + slack;
+}
+
+function pathLength(x: readonly number[], y: readonly number[]): number {
+  let length = 0;
+  for (let k = 0; k + 1 < x.length; k++) {
+    const dx = x[k + 1] - x[k];
+    const dy = y[k + 1] - y[k];
+    length += Math.sqrt(dx * dx + dy * dy);
+  }
+  return length;
 }
 
 function distanceToLine(px: number, py: number, ax: number, ay: number, bx: number, by: number): number {

@@ -6,7 +6,7 @@ import type { Stretch } from './stretches.js';
  * The parts of a stretch that lie within `reach` of any line of the same pen on a side, as intervals
  * of the length along it. Exact for the polylines: what is near a piece is convex, so an interval.
  */
-export function nearParts(stretch: Stretch, side: Side, reach: number): Intervals {
+export function nearParts(stretch: Pick<Stretch, 'x' | 'y' | 'pen'>, side: Side, reach: number): Intervals {
   const parts: Intervals = [];
   const hit = { from: 0, to: 0 };
   let along = 0;

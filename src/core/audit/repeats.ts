@@ -5,8 +5,12 @@ import { findOverlap, newOverlap } from './sideBySide.js';
 import { type Stretch, unpairedStretches } from './stretches.js';
 import type { Tolerances } from './tolerances.js';
 
-/** Repeats run at nearly the same direction; lines that cross do not. */
-const LEAST_COSINE = 0.5;
+/**
+ * A line may be excused by one at up to 60° from it: where two lines meet at a narrow angle, the tips
+ * that lie within the tolerance of each other repeat each other, however short they are.
+ */
+const EXCUSE_COSINE = 0.5;
+/** To count as drawn twice, lines must run in nearly the same direction. */
 const PARALLEL_COSINE = 0.98;
 
 /**
@@ -52,7 +56,7 @@ function repeatedParts(side: Side, stretch: Stretch, k: number, tolerances: Tole
     if (b > a) addInterval(parts, a, b, 0);
     return parts.length === 2 && parts[0] <= from && parts[1] >= to;
   };
-  visitPairedBeside(side, stretch.piece[k], stretch.pen, tolerances.repeatMm, LEAST_COSINE, isOther, accept);
+  visitPairedBeside(side, stretch.piece[k], stretch.pen, tolerances.repeatMm, EXCUSE_COSINE, isOther, accept);
   return parts;
 }
 

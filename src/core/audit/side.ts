@@ -84,6 +84,43 @@ export class Side {
     return Math.sqrt(dx * dx + dy * dy);
   }
 
+  /**
+   * The length along the chain between two places on flattened spans of one chain, infinite where it
+   * exceeds `limit`.
+   */
+  lengthBetween(
+    spanA: number,
+    v: number,
+    fractionA: number,
+    spanB: number,
+    w: number,
+    fractionB: number,
+    limit: number,
+  ): number {
+    if (v === w) return Math.abs(fractionB - fractionA) * this.pieceLength(v);
+    if (spanA > spanB || (spanA === spanB && v > w)) {
+      return this.lengthBetween(spanB, w, fractionB, spanA, v, fractionA, limit);
+    }
+    let length = (1 - fractionA) * this.pieceLength(v);
+    let span = spanA;
+    let at = v + 1;
+    while (length <= limit) {
+      if (at >= this.firstVertex[span] + this.pieces[span]) {
+        span++;
+        if (span > spanB) return Number.POSITIVE_INFINITY;
+        at = this.flatten(span);
+        continue;
+      }
+      if (at === w) {
+        length += fractionB * this.pieceLength(w);
+        break;
+      }
+      length += this.pieceLength(at);
+      at++;
+    }
+    return length <= limit ? length : Number.POSITIVE_INFINITY;
+  }
+
   isPieceDone(v: number): boolean {
     return this.pieceDone[v] === 1;
   }

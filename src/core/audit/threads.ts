@@ -22,12 +22,13 @@ export interface ThreadOverlap {
 }
 
 /**
- * A stretch of a drawn chain that follows a stretch of a wanted chain without a break, within the match
- * tolerance and in one direction. The longer it is, and the nearer the drawn corners lie, the more
+ * A stretch of a drawn chain that follows a stretch of a wanted chain without a break on either, within
+ * the match tolerance and in one direction. The longer it is, and the nearer the drawn corners lie, the more
  * likely it is that this stroke was meant: lines that merely cross share short threads.
  */
 export interface Thread {
-  readonly overlaps: ThreadOverlap[];
+  readonly overlaps: readonly ThreadOverlap[];
+  readonly lengthMm: number;
   readonly score: number;
 }
 
@@ -44,46 +45,94 @@ export function findThreads(
 ): { threads: Thread[]; crowded: boolean } {
   const spinner = new Spinner(wanted, drawn, tolerances);
   for (let c = 0; c < drawn.lines.count; c++) spinner.followChain(c);
-  const threads = spinner.threads.map((t) => ({ overlaps: t.overlaps, score: t.score(tolerances.matchMm) }));
+  const threads = spinner.threads.flatMap((t) => withoutFrayedEnds(t, drawn, tolerances));
   threads.sort((a, b) => b.score - a.score);
   return { threads, crowded: spinner.crowded };
 }
 
-class GrowingThread {
-  readonly overlaps: ThreadOverlap[] = [];
-  lengthMm = 0;
-  /** Where it has come to: along the drawn chain, and on the wanted line. */
-  drawnAt = 0;
-  wantedX = 0;
-  wantedY = 0;
-  private cornerOffsets = 0;
-  private corners = 0;
-  private offsets = 0;
-
-  add(overlap: ThreadOverlap, lengthMm: number): void {
-    this.overlaps.push(overlap);
-    this.lengthMm += lengthMm;
-    const from = Math.abs(overlap.offsetFrom);
-    const to = Math.abs(overlap.offsetTo);
-    this.offsets += (from + to) / 2;
-    if (overlap.from0 === 0) {
-      this.cornerOffsets += from;
-      this.corners++;
+/**
+ * The length, less where drawn corners lie off the wanted line: a curve replaced by chords keeps its
+ * corners on the curve it was made from, and off the neighbours.
+ */
+function weighed(overlaps: readonly ThreadOverlap[], drawn: Side, matchMm: number): Thread {
+  let lengthMm = 0;
+  let cornerOffsets = 0;
+  let corners = 0;
+  let offsets = 0;
+  for (const o of overlaps) {
+    lengthMm += (o.to0 - o.from0) * drawn.pieceLength(o.drawnPiece);
+    const from = Math.abs(o.offsetFrom);
+    const to = Math.abs(o.offsetTo);
+    offsets += (from + to) / 2;
+    if (o.from0 === 0) {
+      cornerOffsets += from;
+      corners++;
     }
-    if (overlap.to0 === 1) {
-      this.cornerOffsets += to;
-      this.corners++;
+    if (o.to0 === 1) {
+      cornerOffsets += to;
+      corners++;
     }
   }
+  const offset = corners > 0 ? cornerOffsets / corners : offsets / overlaps.length;
+  return { overlaps, lengthMm, score: lengthMm * (1.05 - offset / matchMm) };
+}
 
-  /**
-   * The length, less where drawn corners lie off the wanted line: a curve replaced by chords keeps its
-   * corners on the curve it was made from, and off the neighbours.
-   */
-  score(matchMm: number): number {
-    const offset = this.corners > 0 ? this.cornerOffsets / this.corners : this.offsets / this.overlaps.length;
-    return this.lengthMm * (1.05 - offset / matchMm);
+/**
+ * Where a drawn line turns off at a small angle, as a bridge does, its thread goes on until it is a match
+ * tolerance away, and would pair the bridge with what comes next on the wanted line. So an end that lies
+ * off the wanted line is cut back to where the thread last lay on it, and is a thread of its own.
+ */
+function withoutFrayedEnds(thread: GrowingThread, drawn: Side, { matchMm, sameMm }: Tolerances): Thread[] {
+  const { overlaps } = thread;
+  let from = 0;
+  while (from < overlaps.length && isOff(overlaps[from], sameMm)) from++;
+  let to = overlaps.length;
+  while (to > from && isOff(overlaps[to - 1], sameMm)) to--;
+  if (from === to) return [weighed(overlaps, drawn, matchMm)];
+  const head = overlaps.slice(0, from);
+  const body = overlaps.slice(from, to);
+  const tail = overlaps.slice(to);
+  if (Math.abs(body[0].offsetFrom) > sameMm) {
+    const [off, on] = cutAt(body[0], placeWithin(body[0], sameMm, true));
+    head.push(off);
+    body[0] = on;
   }
+  const last = body.length - 1;
+  if (Math.abs(body[last].offsetTo) > sameMm) {
+    const [on, off] = cutAt(body[last], placeWithin(body[last], sameMm, false));
+    tail.unshift(off);
+    body[last] = on;
+  }
+  return [head, body, tail].filter((part) => part.length > 0).map((part) => weighed(part, drawn, matchMm));
+}
+
+/** Whether all of an overlap lies off by more than `sameMm`, to one side. */
+function isOff({ offsetFrom: a, offsetTo: b }: ThreadOverlap, sameMm: number): boolean {
+  return (a > sameMm && b > sameMm) || (a < -sameMm && b < -sameMm);
+}
+
+/** The first, or last, share of an overlap where it lies within `sameMm`; it is not off. */
+function placeWithin({ offsetFrom: a, offsetTo: b }: ThreadOverlap, sameMm: number, first: boolean): number {
+  const one = (sameMm - a) / (b - a);
+  const other = (-sameMm - a) / (b - a);
+  return first ? Math.max(0, Math.min(one, other)) : Math.min(1, Math.max(one, other));
+}
+
+function cutAt(o: ThreadOverlap, share: number): [ThreadOverlap, ThreadOverlap] {
+  const at0 = o.from0 + share * (o.to0 - o.from0);
+  const at1 = o.from1 + share * (o.to1 - o.from1);
+  const offset = o.offsetFrom + share * (o.offsetTo - o.offsetFrom);
+  return [
+    { ...o, to0: at0, to1: at1, offsetTo: offset },
+    { ...o, from0: at0, from1: at1, offsetFrom: offset },
+  ];
+}
+
+interface GrowingThread {
+  readonly overlaps: ThreadOverlap[];
+  /** Where it has come to along the drawn chain: the length, and the number of the piece. */
+  drawnAt: number;
+  piece: number;
 }
 
 interface Candidate extends ThreadOverlap {
@@ -95,6 +144,8 @@ interface Candidate extends ThreadOverlap {
 class Spinner {
   readonly threads: GrowingThread[] = [];
   crowded = false;
+  /** Counts the drawn pieces gone along. */
+  private piece = 0;
   private open = new Map<number, GrowingThread[]>();
   private readonly overlap: Overlap = newOverlap();
   private candidates: Candidate[] = [];
@@ -120,6 +171,7 @@ class Spinner {
       const first = drawn.flatten(span);
       for (let v = first; v < first + drawn.pieceCount(span); v++) {
         const length = drawn.pieceLength(v);
+        this.piece++;
         if (!drawn.isPieceDone(v)) this.followPiece(span, v, near, along, length);
         along += length;
       }
@@ -210,13 +262,8 @@ class Spinner {
 
   private extend(found: Candidate, along: number, length: number): void {
     const { wanted, threads } = this;
-    const w = found.wantedPiece;
-    const dx = wanted.x[w + 1] - wanted.x[w];
-    const dy = wanted.y[w + 1] - wanted.y[w];
-    const startX = wanted.x[w] + found.from1 * dx;
-    const startY = wanted.y[w] + found.from1 * dy;
     const start = along + found.from0 * length;
-    const gap = 4 * this.tolerances.matchMm;
+    const gap = this.tolerances.matchMm;
     const key = 2 * wanted.spans.chain[found.wantedSpan] + (found.opposed ? 1 : 0);
     let mates = this.open.get(key);
     if (mates === undefined) {
@@ -227,14 +274,24 @@ class Spinner {
     let least = gap;
     for (let m = mates.length - 1; m >= 0; m--) {
       const mate = mates[m];
-      if (start - mate.drawnAt > gap) {
+      if (this.piece > mate.piece + 1 || start - mate.drawnAt > gap) {
         mates[m] = mates[mates.length - 1];
         mates.pop();
         if (best === mates.length) best = m;
         continue;
       }
+      const last = mate.overlaps[mate.overlaps.length - 1];
       const off =
-        Math.abs(start - mate.drawnAt) + Math.abs(startX - mate.wantedX) + Math.abs(startY - mate.wantedY);
+        Math.abs(start - mate.drawnAt) +
+        wanted.lengthBetween(
+          last.wantedSpan,
+          last.wantedPiece,
+          last.to1,
+          found.wantedSpan,
+          found.wantedPiece,
+          found.from1,
+          gap,
+        );
       if (off < least) {
         best = m;
         least = off;
@@ -243,13 +300,12 @@ class Spinner {
     let thread: GrowingThread;
     if (best >= 0) thread = mates[best];
     else {
-      thread = new GrowingThread();
+      thread = { overlaps: [], drawnAt: 0, piece: 0 };
       threads.push(thread);
       mates.push(thread);
     }
-    thread.add(found, found.lengthMm);
+    thread.overlaps.push(found);
+    thread.piece = this.piece;
     thread.drawnAt = along + found.to0 * length;
-    thread.wantedX = wanted.x[w] + found.to1 * dx;
-    thread.wantedY = wanted.y[w] + found.to1 * dy;
   }
 }
