@@ -1,0 +1,48 @@
+import { describe, expect, test } from 'vitest';
+import { readDrawing } from '../../src/core/index.ts';
+import { atlasAsSvg, bordersOf, readAtlas } from '../support/atlas.ts';
+import { expectSound, inWords, orderAndAudit } from '../support/ordering.ts';
+import { lengthsOf } from '../support/readerAndBrowser.ts';
+
+/**
+ * A world of countries, each a closed outline, so that every shared border stands twice. What is shared,
+ * what hangs together and where borders meet is known from the topology by the number of each border arc,
+ * without comparing any geometry.
+ */
+describe.each([
+  { scale: '110m', mmPerDegree: 1 },
+  { scale: '50m', mmPerDegree: 3 },
+] as const)('countries at 1:$scale, $mmPerDegree mm a degree', ({ scale, mmPerDegree }) => {
+  const atlas = readAtlas(scale);
+  const borders = bordersOf(atlas);
+  const onceMm = borders.once * mmPerDegree;
+  const beyondOnceMm = borders.beyondOnce * mmPerDegree;
+  const drawing = readDrawing(atlasAsSvg(atlas, mmPerDegree));
+
+  test('all outlines are read', () => {
+    const readMm = lengthsOf(drawing).reduce((sum, length) => sum + length, 0);
+    expect(readMm / (onceMm + beyondOnceMm)).toBeCloseTo(1, 5);
+  });
+
+  test('each border is drawn once, in no fewer runs than its ends allow', () => {
+    const found = orderAndAudit(drawing, { effort: 1 });
+    console.log(`${drawing.strokes.count} outlines at 1:${scale}: ${inWords(found)}`);
+    expect(found.networks).toHaveLength(1);
+    const [network] = found.networks;
+    expect(network.repeatedMm / beyondOnceMm).toBeCloseTo(1, 3);
+    expect(network.componentCount).toBe(borders.components);
+    expect(network.oddVertices).toHaveLength(borders.oddPlaces);
+    expectSound(found, borders.fewestRuns);
+    expect((found.after.drawnMm - found.after.bridgedMm) / onceMm).toBeCloseTo(1, 3);
+    for (const { audit } of [found.svg, found.gcode]) expect(audit.twiceMm / onceMm).toBeLessThan(0.001);
+  });
+});
+
+test('asked for the fewest lifts, the world takes as many runs as its ends allow', () => {
+  const atlas = readAtlas('110m');
+  const found = orderAndAudit(readDrawing(atlasAsSvg(atlas, 1)), { effort: 1, minimise: 'lifts' });
+  const { fewestRuns } = bordersOf(atlas);
+  console.log(`fewest lifts: ${inWords(found)}`);
+  expectSound(found, fewestRuns);
+  expect(found.after.runs).toBe(fewestRuns);
+});

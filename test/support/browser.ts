@@ -1,0 +1,91 @@
+import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { pathToFileURL } from 'node:url';
+import { type Browser, chromium } from 'playwright-core';
+import { afterAll, beforeAll, expect, test } from 'vitest';
+
+/**
+ * Debian's Chromium is the outside truth for what a drawing shows. Without it these tests cannot be made
+ * and say so; in CI that is a failure.
+ */
+
+/** Where the browser is that drawings are held against; null where there is none. */
+export const CHROMIUM: string | null = (() => {
+  const path = process.env.FEWLIFT_CHROMIUM || '/usr/bin/chromium';
+  return existsSync(path) ? path : null;
+})();
+
+/** One sub-path as the browser draws it; lengths in px of the page, after all transforms. */
+export interface BrowserStroke {
+  /** Number of the shape in document order, those not drawn counted too. */
+  readonly element: number;
+  readonly tag: string;
+  readonly id: string;
+  readonly lengthPx: number;
+  /** Least x and y, greatest x and y. */
+  readonly boxPx: readonly [number, number, number, number];
+  readonly arcs: boolean;
+  readonly dot: boolean;
+}
+
+export interface BrowserDrawing {
+  readonly strokes: readonly BrowserStroke[];
+  /** How far the middles of the browser's arcs lie off the arcs measured, relative to their size. */
+  readonly arcsDiffer: number;
+  /** Largest relative difference of an element's length in pieces from the browser's own in one. */
+  readonly wholesDiffer: number;
+  /** How many times a `use` was met outside other copies. */
+  readonly copies: number;
+  /** Largest difference, in px, of the box of a `use` from that of the group put in its place. */
+  readonly copiesDiffer: number;
+}
+
+const IN_PAGE = readFileSync(new URL('./strokesInPage.js', import.meta.url), 'utf8');
+
+async function openBrowser(): Promise<Browser> {
+  if (CHROMIUM === null) throw new Error('no browser here');
+  const quiet = ['background-networking', 'component-update', 'sync', 'gpu'].map(
+    (what) => `--disable-${what}`,
+  );
+  return chromium.launch({
+    executablePath: CHROMIUM,
+    args: ['--headless=new', '--no-sandbox', '--no-first-run', ...quiet],
+  });
+}
+
+/** Opens each text as a document of its own, without scripts and network, and reads off what it draws. */
+export async function drawInBrowser(browser: Browser, texts: readonly string[]): Promise<BrowserDrawing[]> {
+  const context = await browser.newContext({ javaScriptEnabled: false, offline: true });
+  const folder = mkdtempSync(join(tmpdir(), 'fewlift-browser-'));
+  try {
+    const page = await context.newPage();
+    const drawings: BrowserDrawing[] = [];
+    for (const [i, text] of texts.entries()) {
+      const file = join(folder, `${i}.svg`);
+      writeFileSync(file, text);
+      await page.goto(pathToFileURL(file).href);
+      drawings.push(await page.evaluate<BrowserDrawing>(IN_PAGE));
+    }
+    return drawings;
+  } finally {
+    await context.close();
+    rmSync(folder, { recursive: true, force: true });
+  }
+}
+
+/** A browser for the tests of a file: opened before the first and closed after the last of them. */
+export function useBrowser(): () => Browser {
+  let browser: Browser | null = null;
+  beforeAll(async () => {
+    if (CHROMIUM !== null) browser = await openBrowser();
+  });
+  afterAll(async () => {
+    await browser?.close();
+  });
+  if (CHROMIUM === null) console.warn('No Chromium here (FEWLIFT_CHROMIUM): no outside check of the reader.');
+  test('in CI the browser is there', () => {
+    expect(CHROMIUM !== null || !process.env.CI, 'install chromium first').toBe(true);
+  });
+  return () => browser!;
+}
