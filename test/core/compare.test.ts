@@ -16,9 +16,10 @@ import { createRandom } from '../../src/core/structures/random.ts';
 const SAMPLES = fileURLToPath(new URL('../../samples/', import.meta.url));
 const names = readdirSync(SAMPLES).filter((name) => name.endsWith('.svg'));
 
-function compare(before: Drawing, after: Drawing): Comparison {
-  const sides = [before, after].map((drawing) => sideOfDrawing(drawing, DEFAULT_SETTINGS));
-  return compareSides(sides[0], sides[1], DEFAULT_SETTINGS, PEN_ON_Z, 'test');
+function compare(before: Drawing, after: Drawing, repeats: 'once' | 'keep' = 'once'): Comparison {
+  const settings = { ...DEFAULT_SETTINGS, repeats };
+  const sides = [before, after].map((drawing) => sideOfDrawing(drawing, settings));
+  return compareSides(sides[0], sides[1], settings, PEN_ON_Z, 'test');
 }
 
 /** The drawing written stroke by stroke, as lines of text of which some are paths. */
@@ -63,18 +64,14 @@ describe('a spoilt copy of a sample is told from the sample', () => {
     const { lines, paths } = writtenStrokes(drawing);
     const whole = readDrawing(lines.join('\n'));
     expect(compare(drawing, whole)).toMatchObject({ same: true, differences: [] });
-    // Strokes that stand there twice may lose one and be the same still: those are passed over.
-    const seen = new Map<string, number>();
-    for (const at of paths) seen.set(lines[at], (seen.get(lines[at]) ?? 0) + 1);
     const random = createRandom(name.length);
     for (const [kind, spoil] of Object.entries(SPOILERS)) {
       for (let k = 0; k < 3; k++) {
         const at = paths[Math.floor(random() * paths.length)];
-        if ((seen.get(lines[at]) ?? 0) > 1) continue;
         const spoilt = spoil(lines, at);
-        const { same, differences } = compare(whole, readDrawing(spoilt.lines.join('\n')));
+        const { same, differences } = compare(whole, readDrawing(spoilt.lines.join('\n')), 'keep');
         expect({ kind, at: lines[at], same }).toEqual({ kind, at: lines[at], same: false });
-        expect(spoilt.codes).toContain(differences[0].code);
+        expect(differences.some(({ code }) => spoilt.codes.includes(code))).toBe(true);
       }
     }
   });

@@ -45,7 +45,7 @@ test('names, title and description come back, however odd', () => {
   const drawing = readDrawing(writeSvg(program, { ...PAGE, title: 'T & <U>', description: 'd "q"' }));
   expect(drawing.title).toBe('T & <U>');
   expect(drawing.description).toBe('d "q"');
-  expect(planPens(drawing, 'layer').pens).toEqual(program.pens);
+  expect(planPens(drawing, 'layer').pens.map(({ name, colour }) => ({ name, colour }))).toEqual(program.pens);
   expect([...drawing.strokes.closed]).toEqual([1, 0, 1, 0]);
 });
 
