@@ -52,7 +52,7 @@ export function inWords({
   const mm = (length: number) => `${length.toFixed(1)} mm`;
   return [
     `${before.runs} → ${after.runs} runs`,
-    `travel ${mm(before.travelMm)} → ${mm(after.travelMm)} ${minimise === 'travel' ? ` (bound ${mm(boundMm)})` : ''}`,
+    `travel ${mm(before.travelMm)} → ${mm(after.travelMm)}${minimise === 'travel' ? ` (bound ${mm(boundMm)})` : ''}`,
     `drawn ${mm(before.drawnMm)} → ${mm(after.drawnMm)} (repeats ${mm(repeatedMm)}, bridges ${mm(after.bridgedMm)})`,
     `${seconds.toFixed(1)} s`,
   ].join(', ');

@@ -63,12 +63,13 @@
    */
   function replaceCopies(root) {
     const before = [...root.querySelectorAll('use')].filter((use) => !use.closest(NEVER_DRAWN));
-    const boxes = before.map((use) => use.getBBox());
+    const boxes = before.map((use) => use.getClientRects().length > 0 && use.getBBox());
     const groups = before.map(replaceCopy);
     let difference = 0;
     groups.forEach((group, i) => {
       const { x, y, width, height } = group.getBBox();
       const box = boxes[i];
+      if (!box) return;
       for (const d of [box.x - x, box.y - y, box.width - width, box.height - height]) {
         difference = Math.max(difference, Math.abs(d));
       }
