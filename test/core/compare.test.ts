@@ -51,10 +51,14 @@ const SPOILERS: Record<string, (lines: string[], at: number) => { lines: string[
     ),
     codes: ['line-moved', 'dot-moved', 'line-missing', 'line-added'],
   }),
+  // A short line from a stroke's start; where the stroke sets out that way too, it lies on it.
   added: (lines, at) => {
     const [x, y] = startOf(lines[at]);
     const extra = `<path d="M${x} ${y}l0.7 0.3"/>`;
-    return { lines: [...lines.slice(0, at), extra, ...lines.slice(at)], codes: ['line-added'] };
+    return {
+      lines: [...lines.slice(0, at), extra, ...lines.slice(at)],
+      codes: ['line-added', 'line-doubled'],
+    };
   },
 };
 
