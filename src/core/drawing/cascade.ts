@@ -29,7 +29,9 @@ export class Cascade {
         log.add('style-sheet-not-read', place, { type });
         continue;
       }
-      this.sheet.add(textOf(element, Number.MAX_SAFE_INTEGER), (rule) =>
+      const media = tree.attributeOf(element, 'media')?.trim() ?? '';
+      const rules = textOf(element, Number.MAX_SAFE_INTEGER);
+      this.sheet.add(media === '' ? rules : `@media ${media}{${rules}}`, (rule) =>
         log.add('style-rule-not-read', place, { rule: rule.replace(/\s+/g, ' ').slice(0, 60) }),
       );
     }

@@ -105,6 +105,12 @@ describe('style sheets', () => {
     expect(findingOf(drawing, 'style-rule-not-read').values).toEqual({ rule: 'g + path', count: 4 });
   });
 
+  test('a sheet for other media does not hold', () => {
+    const sheet = (media: string) => `<style media="${media}">path{stroke:red}</style>`;
+    expect(coloursOf(`${sheet('print')}<path ${LINE} stroke="blue"/>`)).toEqual(['#0000ff']);
+    expect(coloursOf(`${sheet('screen')}<path ${LINE} stroke="blue"/>`)).toEqual(['#ff0000']);
+  });
+
   test('a sheet in another language is not read', () => {
     const drawing = readBody(`<style type="text/less">.a{stroke:red}</style><path class="a" ${LINE}/>`);
     expect(findingOf(drawing, 'style-sheet-not-read').severity).toBe('warning');
