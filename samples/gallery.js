@@ -16,7 +16,8 @@ const samples = new URL('./', import.meta.url);
 const gallery = new URL('./gallery/', import.meta.url);
 mkdirSync(gallery, { recursive: true });
 /** Those the README shows; others by name on the command line. */
-const SHOWN = process.argv.length > 2 ? process.argv.slice(2) : ['hatched-leaf', 'motif-sheet', 'stippled-moon'];
+const SHOWN =
+  process.argv.length > 2 ? process.argv.slice(2) : ['hatched-leaf', 'motif-sheet', 'stippled-moon'];
 
 for (const file of readdirSync(samples).filter((name) => name.endsWith('.svg'))) {
   const name = file.replace(/\.svg$/, '');
