@@ -1,4 +1,7 @@
-import { readFileSync } from 'node:fs';
+import { spawnSync } from 'node:child_process';
+import { readFileSync, writeFileSync } from 'node:fs';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
 import { expect, test } from 'vitest';
 import {
   DEFAULT_SETTINGS,
@@ -20,6 +23,31 @@ test('the command and its output stand by line 20 of the README, as they are', (
   );
   expect(shown.length).toBeGreaterThanOrEqual(8);
   for (const line of shown) expect(out).toContain(line);
+});
+
+test('the example of the library compiles', () => {
+  const code = /```ts\n([\s\S]*?)```/.exec(README)?.[1] ?? '';
+  expect(code).toContain("from 'fewlift'");
+  inFolder((folder) => {
+    const core = fileURLToPath(new URL('../../dist/core/index.js', import.meta.url));
+    const example = `declare const svgText: string;\ndeclare const console: { log(...values: unknown[]): void };\n${code}export {};\n`;
+    writeFileSync(join(folder, 'example.ts'), example.replace("'fewlift'", `'${core}'`));
+    const options = {
+      strict: true,
+      noEmit: true,
+      module: 'nodenext',
+      target: 'es2022',
+      lib: ['es2022'],
+      types: [],
+    };
+    writeFileSync(
+      join(folder, 'tsconfig.json'),
+      JSON.stringify({ compilerOptions: options, files: ['example.ts'] }),
+    );
+    const tsc = fileURLToPath(new URL('../../node_modules/.bin/tsc', import.meta.url));
+    const { status, stdout } = spawnSync(tsc, ['-p', folder], { encoding: 'utf8' });
+    expect({ status, stdout }).toEqual({ status: 0, stdout: '' });
+  });
 });
 
 test('the example of the library does what it says', () => {

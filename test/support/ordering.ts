@@ -1,9 +1,13 @@
 import { expect } from 'vitest';
 import {
+  compareSides,
   DEFAULT_SETTINGS,
   type Drawing,
   PEN_ON_Z,
+  readDrawing,
   type Settings,
+  sideOfDrawing,
+  surveyDrawing,
   tour,
   writeAudited,
 } from '../../src/core/index.ts';
@@ -12,15 +16,19 @@ import {
 export function orderAndAudit(drawing: Drawing, chosen: Partial<Settings> = {}) {
   const began = Date.now();
   const ordered = tour(drawing, { ...DEFAULT_SETTINGS, ...chosen }, PEN_ON_Z);
-  const { networks, tours } = ordered;
+  const { networks, tours, settings } = ordered;
+  const svg = writeAudited(ordered, 'svg');
+  const sides = [drawing, readDrawing(svg.text)].map((side) => sideOfDrawing(side, settings));
   return {
+    survey: surveyDrawing(drawing, settings, 'test'),
+    comparison: compareSides(sides[0], sides[1], settings, PEN_ON_Z, 'test'),
     before: ordered.before.measure,
     after: ordered.after.measure,
     repeatedMm: networks.reduce((sum, network) => sum + network.repeatedMm, 0),
     boundMm: tours.reduce((sum, { bound }) => sum + bound.value, 0),
     minimise: ordered.settings.minimise,
     networks,
-    svg: writeAudited(ordered, 'svg'),
+    svg,
     gcode: writeAudited(ordered, 'gcode'),
     seconds: (Date.now() - began) / 1000,
   };
@@ -35,6 +43,12 @@ export function expectSound(found: OrderedAndAudited, fewestRuns: number): void 
     expect(audit.findings).toEqual([]);
     expect(audit).toMatchObject({ ok: true, missingMm: 0, extraMm: 0 });
   }
+  const { survey, comparison } = found;
+  expect(comparison.differences).toEqual([]);
+  expect(comparison.same).toBe(true);
+  expect(survey.network.repeatedMm).toBeCloseTo(repeatedMm, 6);
+  expect(survey.network.fewestRuns).toBeLessThanOrEqual(after.runs);
+  expect(survey.network.boundMm).toBeLessThanOrEqual(after.travelMm * (1 + 1e-9));
   expect(after.drawnMm).toBeCloseTo(before.drawnMm - repeatedMm + after.bridgedMm, 6);
   expect(after.runs).toBeGreaterThanOrEqual(fewestRuns);
   expect(after.travelMm).toBeLessThan(before.travelMm / 2);
