@@ -59,8 +59,8 @@ export function compareSides(
   profile: MachineProfile,
   version: string,
 ): Comparison {
-  const pens = before.program.pens.map(({ name }) => name);
-  const numberOf = after.program.pens.map(({ name }) => {
+  const pens = uniqueNames(before);
+  const numberOf = uniqueNames(after).map((name) => {
     const known = pens.indexOf(name);
     return known >= 0 ? known : pens.push(name) - 1;
   });
@@ -80,6 +80,17 @@ export function compareSides(
     maxDeviationMm: audit.maxDeviationMm,
     differences: pairMoved(audit.findings, pens),
   };
+}
+
+/** The names of a side's pens; of equal names the second is told apart by its turn. */
+function uniqueNames({ program }: ComparedSide): string[] {
+  const names: string[] = [];
+  for (const { name } of program.pens) {
+    let unique = name;
+    for (let turn = 2; names.includes(unique); turn++) unique = `${name} (${turn})`;
+    names.push(unique);
+  }
+  return names;
 }
 
 function figures({ runs, travelMm, drawnMm, seconds }: Measure) {

@@ -14,6 +14,7 @@ import type { Program } from './program/program.js';
 import { readGcode } from './program/readGcode.js';
 import { type Hooks, REPEAT_TOLERANCE_MM, type Settings } from './settings.js';
 import { findTour } from './tour/findTour.js';
+import { ROUNDING } from './tour/lowerBound.js';
 import type { Tour } from './tour/tour.js';
 import { writeGcode } from './write/gcode.js';
 import { withoutTravel, writeSvg } from './write/svg.js';
@@ -59,7 +60,7 @@ export function orderDrawing(
       homeX,
       homeY,
       end: last ? settings.end : 'home',
-      weigh: weighing(network, home, settings),
+      ...weighing(network, home, settings),
     };
     return findTour(network, task, {
       matching: settings.matching,
@@ -117,8 +118,8 @@ function readBack(text: string, kind: 'svg' | 'gcode'): LineSet {
   return linesOfDrawing(drawing, planPens(drawing, 'layer'));
 }
 
-function weighing(network: Network, home: HomeRule, settings: Settings): Weigh {
-  if (settings.minimise === 'travel') return travelCost;
+function weighing(network: Network, home: HomeRule, settings: Settings): { weigh: Weigh; weighHome: Weigh } {
+  if (settings.minimise === 'travel') return { weigh: travelCost, weighHome: travelCost };
   let reach = 0;
   for (let v = 0; v < network.vertexCount; v++) {
     reach = Math.max(
@@ -126,16 +127,20 @@ function weighing(network: Network, home: HomeRule, settings: Settings): Weigh {
       Math.abs(network.vertexX[v] - home.homeX) + Math.abs(network.vertexY[v] - home.homeY),
     );
   }
-  return liftsFirst(2 * reach, network.edgeCount).weigh;
+  return liftsFirst(2 * reach, network.edgeCount);
 }
 
 /** Whether nothing was left out as drawn already: a line drawn twice may by chance save travel. */
 function drawsAll(network: Network): boolean {
-  return network.repeatedMm === 0 && network.dotsOnLines === 0;
+  return network.repeatedMm === 0 && network.repeatedDots === 0 && network.dotsOnLines === 0;
 }
 
-/** The order found is kept only where it is better, or as good, by what was asked for. */
+/**
+ * The order found is kept only where it is better, or as good, by what was asked for; of two that travel
+ * alike the one with fewer runs.
+ */
 function isWorse(found: Measure, asDrawn: Measure, settings: Settings): boolean {
   if (settings.minimise === 'lifts' && found.runs !== asDrawn.runs) return found.runs > asDrawn.runs;
-  return found.travelMm > asDrawn.travelMm;
+  const alike = Math.abs(found.travelMm - asDrawn.travelMm) <= ROUNDING * (1 + asDrawn.travelMm);
+  return alike ? found.runs > asDrawn.runs : found.travelMm > asDrawn.travelMm;
 }

@@ -16,7 +16,7 @@ export interface Settings {
   readonly homeMm: readonly [number, number] | null;
   readonly end: 'home' | 'anywhere';
   readonly pens: PenRule;
-  /** Kicks for each end of an edge in the improvement of the tour. */
+  /** Kicks for each end of a connector in the improvement of the tour. */
   readonly effort: number;
   readonly bound: 'none' | 'quick';
   readonly seed: number;

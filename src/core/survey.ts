@@ -32,9 +32,12 @@ export function surveyDrawing(drawing: Drawing, settings: Settings, version: str
   const [homeX, homeY] = settings.homeMm ?? [0, drawing.heightMm];
   const lengthMm = strokeLengths(drawing);
   const misses: NearMiss[] = [];
+  let repeatedDots = 0;
   const pens = strokesOfPens(plan).map((ofPen, pen) => {
     const network = buildNetwork(drawing, ofPen, { ...settings, repeatToleranceMm: REPEAT_TOLERANCE_MM });
-    misses.push(...findNearMisses(network, Math.max(NEAR_MISS_SNAPS * settings.snapMm, LEAST_NEAR_MISS_MM)));
+    const reachMm = Math.max(NEAR_MISS_SNAPS * settings.snapMm, LEAST_NEAR_MISS_MM);
+    for (const miss of findNearMisses(network, reachMm)) misses.push(miss);
+    repeatedDots += network.repeatedDots;
     const end = pen === plan.pens.length - 1 ? settings.end : 'home';
     const bound = boundOnly(network, { homeX, homeY, end, weigh: travelCost });
     const ends = lineEnds(drawing, ofPen);
@@ -73,6 +76,7 @@ export function surveyDrawing(drawing: Drawing, settings: Settings, version: str
       components: total((pen) => pen.components),
       oddVertices: total((pen) => pen.oddVertices),
       repeatedMm: total((pen) => pen.repeatedMm),
+      repeatedDots,
       fewestRuns: total((pen) => pen.fewestRuns),
       boundMm: total((pen) => pen.boundMm),
       nearestNeighbourMm: total((pen) => pen.nearestNeighbourMm),

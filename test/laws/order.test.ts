@@ -49,13 +49,13 @@ describe('laws of the whole job', () => {
         expect(after.runs).toBeGreaterThanOrEqual(runs);
         // A line drawn twice may by chance bring the tool back for nothing: once is what was asked for.
         const fair = report.findings.every(
-          ({ code }) => code !== 'repeats-drawn-once' && code !== 'dots-on-lines',
+          ({ code }) => !/^(repeats-drawn-once|dots-on-lines|dots-drawn-once)$/.test(code),
         );
         if (chosen.minimise === 'lifts') {
           expect(after.runs).toBeLessThanOrEqual(before.runs);
           expect(bound.value).toBeLessThanOrEqual(after.runs);
         } else {
-          if (fair) expect(after.travelMm).toBeLessThanOrEqual(before.travelMm);
+          if (fair) expect(after.travelMm).toBeLessThanOrEqual(before.travelMm * (1 + 1e-9) + 1e-9);
           expect(bound.value).toBeLessThanOrEqual(after.travelMm * (1 + 1e-9) + 1e-9);
         }
         if (gap !== null) expect(gap).toBeGreaterThanOrEqual(-1e-9);
@@ -66,15 +66,25 @@ describe('laws of the whole job', () => {
 
   test('the same where ends only nearly meet, and bridges are drawn', () => {
     fc.assert(
-      fc.property(anyDrawing, settings, fc.integer(), (specs, chosen, seed) => {
-        const random = createRandom(seed);
-        const near = (at: number) => at + 0.06 * (random() - 0.5);
-        const jittered = specs.map((spec) => mapped(spec, ([x, y]) => [near(x), near(y)], 1));
-        const { report } = order(drawingOf(jittered, 50, 50), chosen);
-        expect(report.findings.filter((f) => f.severity === 'error')).toEqual([]);
-        expect(report.audit.ok).toBe(true);
-        expect(report.network.snapMaxMm).toBeLessThanOrEqual(SETTINGS.snapMm);
-      }),
+      fc.property(
+        anyDrawing,
+        settings,
+        fc.integer(),
+        fc.constantFrom(0.05, 0.05, 5),
+        (specs, chosen, seed, snapMm) => {
+          const random = createRandom(seed);
+          const near = (at: number) => at + 0.06 * (random() - 0.5);
+          const jittered = specs.map((spec) => mapped(spec, ([x, y]) => [near(x), near(y)], 1));
+          // A snap distance longer than many strokes is a mistake, but must not make anything untrue.
+          const { report } = order(drawingOf(jittered, 50, 50), { ...chosen, snapMm });
+          expect(report.findings.filter((f) => f.severity === 'error')).toEqual([]);
+          expect(report.audit.ok).toBe(true);
+          expect(report.network.snapMaxMm).toBeLessThanOrEqual(snapMm);
+          const { bound, after } = report;
+          const reached = chosen.minimise === 'lifts' ? after.runs : after.travelMm;
+          expect(bound.value).toBeLessThanOrEqual(reached * (1 + 1e-9) + 1e-9);
+        },
+      ),
       { numRuns: 150 },
     );
   });

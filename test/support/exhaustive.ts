@@ -10,6 +10,7 @@ export function leastCost(
   home: readonly [number, number],
   end: 'home' | 'anywhere',
   weigh: (distance: number) => number,
+  weighHome: (distance: number) => number = (d) => (d === 0 ? 0 : weigh(d)),
 ): number {
   const n = network.edgeCount;
   const x = (h: number) => network.vertexX[network.halfEdgeVertex[h]];
@@ -20,7 +21,9 @@ export function leastCost(
   };
   // least[mask * 2n + h]: edges of mask drawn, the last along half-edge h.
   const least = new Float64Array(2 ** n * 2 * n).fill(Number.POSITIVE_INFINITY);
-  for (let h = 0; h < 2 * n; h++) least[(1 << (h >> 1)) * 2 * n + h] = between(home[0], home[1], x(h), y(h));
+  for (let h = 0; h < 2 * n; h++) {
+    least[(1 << (h >> 1)) * 2 * n + h] = weighHome(Math.hypot(home[0] - x(h), home[1] - y(h)));
+  }
   const link = Array.from({ length: 2 * n }, (_, h) =>
     Array.from({ length: 2 * n }, (_, g) => between(x(h ^ 1), y(h ^ 1), x(g), y(g))),
   );
@@ -38,7 +41,7 @@ export function leastCost(
   }
   let best = Number.POSITIVE_INFINITY;
   for (let h = 0; h < 2 * n; h++) {
-    const back = end === 'home' ? between(x(h ^ 1), y(h ^ 1), home[0], home[1]) : 0;
+    const back = end === 'home' ? weighHome(Math.hypot(home[0] - x(h ^ 1), home[1] - y(h ^ 1))) : 0;
     best = Math.min(best, least[(2 ** n - 1) * 2 * n + h] + back);
   }
   return best;

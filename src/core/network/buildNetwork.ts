@@ -76,6 +76,7 @@ export function buildNetwork(drawing: Drawing, strokes: Uint32Array, options: Ne
     repeatedMm,
     snapMaxMm: snapped.snapMaxMm,
     dotsOnLines: dots.onLines,
+    repeatedDots: dots.repeated,
   };
 }
 

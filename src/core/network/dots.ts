@@ -7,8 +7,10 @@ import type { Pieces } from './pieces.js';
 export interface Dots {
   /** Strokes that stay as dots. */
   readonly kept: number[];
-  /** Dots that a line of the same pen passes over within the snap distance: drawn with it. */
+  /** Dots that a line of the same pen passes over, within the repeat tolerance: drawn with it. */
   readonly onLines: number;
+  /** Dots that stand on another and are drawn with that. */
+  readonly repeated: number;
 }
 
 /**
@@ -28,21 +30,21 @@ export function sortDots(
   const offLine: number[] = [];
   let onLines = 0;
   for (let i = 0; i < all.length; i++) {
-    if (isOnLine(x[i], y[i], drawing, pieces, options.snapMm)) onLines++;
+    if (isOnLine(x[i], y[i], drawing, pieces, options.repeatToleranceMm)) onLines++;
     else offLine.push(i);
   }
   const single =
     options.repeats === 'once' ? withoutRepeats(offLine, x, y, options.repeatToleranceMm) : offLine;
-  return { kept: single.map((i) => all[i]), onLines };
+  return { kept: single.map((i) => all[i]), onLines, repeated: offLine.length - single.length };
 }
 
-function isOnLine(x: number, y: number, drawing: Drawing, pieces: Pieces, snapMm: number): boolean {
-  const reach = snapMm + pieces.chordErrorMm;
+function isOnLine(x: number, y: number, drawing: Drawing, pieces: Pieces, toleranceMm: number): boolean {
+  const reach = toleranceMm + pieces.chordErrorMm;
   const found = pieces.index?.search(x - reach, y - reach, x + reach, y + reach) ?? [];
   const { segments } = drawing.strokes;
   return found.some((p) => {
     const near = nearestOnSegment(segments, pieces.segment[p], x, y, pieces.t0[p], pieces.t1[p]);
-    return near.distance <= snapMm;
+    return near.distance <= toleranceMm;
   });
 }
 

@@ -24,12 +24,15 @@ export function findNearMisses(network: Network, reachMm: number): NearMiss[] {
   });
   const index = pointIndex(vertexX, vertexY);
   const misses: NearMiss[] = [];
+  const seen = new Set<number>();
   for (let v = 0; v < vertexCount; v++) {
     if (degree[v] !== 1) continue;
     const near = index.neighbors(vertexX[v], vertexY[v], 1, reachMm, (u) => u !== v && u !== across[v]);
     if (near.length === 0) continue;
     const u = near[0];
-    if (degree[u] === 1 && u < v) continue;
+    const pair = Math.min(u, v) * vertexCount + Math.max(u, v);
+    if (seen.has(pair)) continue;
+    seen.add(pair);
     const dx = vertexX[u] - vertexX[v];
     const dy = vertexY[u] - vertexY[v];
     misses.push({ gapMm: Math.sqrt(dx * dx + dy * dy), x: vertexX[v], y: vertexY[v] });

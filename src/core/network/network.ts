@@ -33,9 +33,12 @@ export interface Network {
   readonly snapMaxMm: number;
   /** Dots left out because a line of the same pen passes over them. */
   readonly dotsOnLines: number;
+  /** Dots left out because they stand on another dot. */
+  readonly repeatedDots: number;
 }
 
-export type JunctionRule = 'ends' | 'touching' | 'crossing';
+/** Crossings are not looked for yet. */
+export type JunctionRule = 'ends' | 'touching';
 
 export interface NetworkOptions {
   /** Ends at most this far apart meet, mm. */

@@ -25,6 +25,8 @@ export function splitWhereJointsPart(marks: Marks, drawing: Drawing, strokes: Ui
     const p = point[v];
     const low = Math.min(side(before[v]), side(after[v]));
     const high = Math.max(side(before[v]), side(after[v]));
+    // A stroke that turns back on itself here draws the way back along the way there.
+    if (low === high && low >= 0) parts[p] = 1;
     if (highSide[p] < 0) {
       lowSide[p] = low;
       highSide[p] = high;

@@ -2,19 +2,19 @@ import type { Drawing } from '../drawing/drawing.js';
 import { nearestOnSegment } from '../geometry/nearest.js';
 import { addSplit, type Marks } from './marks.js';
 import type { Pieces } from './pieces.js';
-import { gatherSites } from './snap.js';
+import { snapMarks } from './snap.js';
 
 /**
  * Adds a split to `marks` wherever a stroke's end lies within `snapMm` of another stroke's interior, or
  * of its own further along: the place of the curve nearest to the end, found on the exact curve.
  *
  * No split is made where the end can meet the other stroke at one of that stroke's own ends: snapping
- * sees to that. Each end point is looked at once, however many strokes end there. One search of the
- * box index per end point; O(n log n) for bounded crowding.
+ * sees to that. Ends that snap together are looked at once. One search of the box index per vertex; O(n log n) for bounded crowding.
  */
 export function splitWhereEndsTouch(marks: Marks, drawing: Drawing, pieces: Pieces, snapMm: number): void {
   if (!pieces.index) return;
-  const { siteX, siteY } = gatherSites(marks);
+  // Ends that will meet in one vertex are looked at once, from there.
+  const { vertexX: siteX, vertexY: siteY } = snapMarks(marks, snapMm);
   const reach = snapMm + pieces.chordErrorMm;
   const splits: { stroke: number; segment: number; t: number }[] = [];
   for (let site = 0; site < siteX.length; site++) {

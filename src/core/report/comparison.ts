@@ -89,6 +89,6 @@ function differenceOf(finding: Finding, pens: readonly string[]): Difference {
     y: Number(y),
     lengthMm: Number(lengthMm),
     movedMm: Number(movedMm),
-    message: sentence(finding),
+    message: sentence({ ...finding, values: { ...finding.values, penName: pens[Number(pen)] ?? '' } }),
   };
 }

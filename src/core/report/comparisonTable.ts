@@ -11,7 +11,20 @@ export function comparisonTable(comparison: Comparison): string {
     ...sideBySide(before, after),
     `  lines   ${verdict(comparison)}`,
     ...differenceLines(comparison.differences),
+    ...(onlyPensDiffer(comparison)
+      ? [
+          '  The same length is missing with one pen and added with another: --pens one looks at the lines alone.',
+        ]
+      : []),
   ].join('\n');
+}
+
+/** Whether as much is added with some pens as is missing with others. */
+function onlyPensDiffer({ differences, missingMm, extraMm }: Comparison): boolean {
+  const pens = (code: string) => new Set(differences.filter((d) => d.code === code).map(({ pen }) => pen));
+  const missing = pens('line-missing');
+  const apart = [...pens('line-added')].every((pen) => !missing.has(pen));
+  return missingMm > 0 && apart && Math.abs(missingMm - extraMm) <= 0.01 * missingMm;
 }
 
 /** A few places of each kind; the rest counted. */

@@ -55,7 +55,7 @@ export function sideBySide(before: Totals, after: Totals): string[] {
 
 /** Rows in columns: the first to the left, the others to the right; every line indented by two. */
 export function columns(rows: readonly (readonly string[])[]): string[] {
-  const width = rows[0].map((_, c) => Math.max(...rows.map((row) => row[c].length)));
+  const width = rows[0].map((_, c) => rows.reduce((most, row) => Math.max(most, row[c].length), 0));
   return rows.map((row) =>
     `  ${row.map((cell, c) => (c === 0 ? cell.padEnd(width[c]) : cell.padStart(width[c]))).join('  ')}`.trimEnd(),
   );

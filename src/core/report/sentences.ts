@@ -113,6 +113,9 @@ const WORDING: Readonly<Record<string, Wording>> = {
   // Network and program.
   'repeats-drawn-once': (v) => `${number(v.lengthMm)} mm were in the drawing more than once: drawn once`,
   'dots-on-lines': (v) => `${some(v.count, 'dot')} on a line of the same pen: drawn with the line`,
+  'dots-drawn-once': (v) => `${some(v.count, 'dot')} stood on another: drawn once`,
+  'much-bridged': (v) =>
+    `${number(v.bridgedMm)} mm of ${number(v.drawnMm)} mm are drawn across gaps: is --snap wider than meant?`,
   'off-page': (v) =>
     `the drawing passes the edge of the page by ${number(v.overhangMm)} mm: check it against the machine's reach`,
   'order-kept': () => 'no better order was found: the drawing keeps its own',
@@ -165,6 +168,6 @@ function place(v: Values): string {
   return `x ${number(v.x)}, y ${number(v.y)}`;
 }
 
-function penOf(v: Values): number {
-  return Number(v.pen ?? 0) + 1;
+function penOf(v: Values): string {
+  return v.penName === undefined ? `${Number(v.pen ?? 0) + 1}` : String(v.penName);
 }

@@ -20,6 +20,7 @@ export interface Survey {
     readonly components: number;
     readonly oddVertices: number;
     readonly repeatedMm: number;
+    readonly repeatedDots: number;
     readonly fewestRuns: number;
     /** No order travels less: the pens' bounds added up. */
     readonly boundMm: number;

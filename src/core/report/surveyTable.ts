@@ -14,7 +14,7 @@ export function surveyTable(survey: Survey): string {
     ['page', `${size(drawing.widthMm)} x ${size(drawing.heightMm)} mm`],
     ['strokes', `${drawing.strokes} (${kinds.join(', ')}) of ${count(drawing.elements, 'element')}`],
     ['drawn', mm(drawing.drawnMm)],
-    ['repeats', network.repeatedMm > 0 ? `${mm(network.repeatedMm)} stand there more than once` : 'none'],
+    ['repeats', repeats(network)],
     ['components', `${network.components}, with ends up to ${network.snapMm} mm apart joined`],
     ['odd vertices', `${network.oddVertices}`],
     ['loose ends', looseEnds(nearMisses)],
@@ -62,4 +62,11 @@ function looseEnds({ count: n, leastMm, greatestMm, places }: Survey['nearMisses
   const gaps = n === 1 ? fineMm(leastMm) : `${fineMm(leastMm)} to ${fineMm(greatestMm)}`;
   const first = places.map(({ x, y }) => `(${size(x)}, ${size(y)})`).join(' ');
   return `${n} nearly meet, gaps of ${gaps}; first at ${first}`;
+}
+
+function repeats({ repeatedMm, repeatedDots }: Survey['network']): string {
+  const parts = [];
+  if (repeatedMm > 0) parts.push(`${mm(repeatedMm)} of lines`);
+  if (repeatedDots > 0) parts.push(count(repeatedDots, 'dot'));
+  return parts.length > 0 ? `${parts.join(' and ')} stand there more than once` : 'none';
 }

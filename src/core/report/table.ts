@@ -13,7 +13,7 @@ export function reportTable(report: Report): string {
     `  bound   ${boundText(bound, gap)}`,
     `  audit   ${auditText(report)}`,
   ];
-  if (network.snapMaxMm >= SHOWN_GAP_MM) {
+  if (network.bridgedMm > 0 && network.snapMaxMm >= SHOWN_GAP_MM) {
     lines.push(
       `  gaps    ${mm(network.bridgedMm)} drawn across gaps, none wider than ${fineMm(network.snapMaxMm)}`,
     );
@@ -37,12 +37,15 @@ export function findingLines(findings: Report['findings']): string[] {
 function boundText(bound: Report['bound'], gap: number | null): string {
   if (bound.method === 'none') return 'not asked for';
   const value = bound.objective === 'lifts' ? count(bound.value, 'run') : mm(bound.value);
-  if (bound.exact) return `${value}: no order can do with less`;
+  if (bound.exact)
+    return `${value}: reached; no order of these lines between their ends and joints needs less`;
   const far = gap === null ? '' : `, at most ${(100 * gap).toFixed(1)} % above the least possible`;
   return `${value}${far}`;
 }
 
-function auditText({ audit }: Report): string {
-  if (audit.ok) return `every line is there once; largest deviation ${fineMm(audit.maxDeviationMm)}`;
+function auditText(report: Report): string {
+  const { audit } = report;
+  const often = report.settings.repeats === 'keep' ? 'as often as in the drawing' : 'once';
+  if (audit.ok) return `every line is there ${often}; largest deviation ${fineMm(audit.maxDeviationMm)}`;
   return `FAILED: ${mm(audit.missingMm)} missing, ${mm(audit.extraMm)} added, ${mm(audit.twiceMm)} drawn again`;
 }

@@ -26,10 +26,10 @@ const NEIGHBOURS = 8;
  */
 export function findTour(network: Network, task: TourTask, options: TourOptions): Tour {
   const graph = withHome(network, task);
-  const pairing = pairWithHome(graph, options.matching);
+  const pairing = pairWithHome(graph, options.matching, options.shouldStop);
   const boundOf = (tree: Int32Array) =>
     options.bound === 'none' ? NO_BOUND : quickBound(graph, pairing, tree);
-  if (network.componentCount === 1) {
+  if (network.componentCount === 1 && options.matching === 'exact') {
     return finished(graph, eulerWalk(graph, pairing.connectors), boundOf(new Int32Array(0)), false);
   }
   const delaunay = delaunayPairs(graph);
@@ -37,7 +37,7 @@ export function findTour(network: Network, task: TourTask, options: TourOptions)
   const near = nearVertices(graph, delaunay, NEIGHBOURS);
   const bound = boundOf(tree);
 
-  const starts = [byTree(graph, tree, options.matching), byJoining(graph, pairing, tree, near)];
+  const starts = [byTree(graph, tree, options), byJoining(graph, pairing, tree, near)];
   // The drawing's own order is there to be beaten: what comes out is never worse.
   let best = asGiven(graph, network);
   let least = connectorsCost(graph, connectorsOf(graph, best));
@@ -75,9 +75,9 @@ export function boundOnly(network: Network, task: TourTask): LowerBound {
 }
 
 /** Spanning tree of the components, home's way in, then a pairing of what is odd. */
-function byTree(graph: TourGraph, tree: Int32Array, rule: MatchingRule): Int32Array {
+function byTree(graph: TourGraph, tree: Int32Array, options: TourOptions): Int32Array {
   const joined = Int32Array.from([...tree, graph.home, nearestToHome(graph)]);
-  return concat(joined, pairGiven(graph, joined, rule).connectors);
+  return concat(joined, pairGiven(graph, joined, options.matching, options.shouldStop).connectors);
 }
 
 /** The pairing first, then what it leaves apart is joined at the least extra cost. */

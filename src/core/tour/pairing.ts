@@ -2,7 +2,7 @@ import { exactMatching } from '../matching/exact.js';
 import { improveByExchange } from '../matching/exchange.js';
 import { greedyMatching } from '../matching/greedy.js';
 import type { CertifiedMatching, Matching, MatchingProblem } from '../matching/problem.js';
-import { connectorCost, distance, nearestToHome, type TourGraph } from './problem.js';
+import { connectorCost, nearestToHome, type TourGraph } from './problem.js';
 
 export type MatchingRule = 'exact' | 'greedy';
 
@@ -23,7 +23,7 @@ export interface Pairing {
  * The cost of an exact pairing is a lower bound on every tour; with one component it is the optimum
  * (minimum-weight perfect matching, Edmonds 1965).
  */
-export function pairWithHome(graph: TourGraph, rule: MatchingRule): Pairing {
+export function pairWithHome(graph: TourGraph, rule: MatchingRule, shouldStop?: () => boolean): Pairing {
   const { home, free, odd } = graph;
   const closed = free < 0;
   const nearest = nearestToHome(graph);
@@ -38,10 +38,10 @@ export function pairWithHome(graph: TourGraph, rule: MatchingRule): Pairing {
     specialCost: (i, j) => {
       if (i >= p && j >= p) return closed ? 2 * wayOut : wayOut;
       const [vertex, end] = i < p ? [i, j] : [j, i];
-      return isFree(end) ? 0 : graph.weigh(distance(graph, odd[vertex], home));
+      return isFree(end) ? 0 : connectorCost(graph, odd[vertex], home);
     },
   };
-  const { matching, certified } = solve(problem, rule);
+  const { matching, certified } = solve(problem, rule, shouldStop);
   const connectors: number[] = [];
   for (let i = 0; i < p; i++) {
     const j = matching.mate[i];
@@ -53,24 +53,29 @@ export function pairWithHome(graph: TourGraph, rule: MatchingRule): Pairing {
 }
 
 /**
- * Pairs the odd vertices of edges and given connectors together; home is a vertex like any other here.
- * With a free end D is odd, and its cost is 0.
+ * Pairs the odd vertices of edges and given connectors together, home and D among them where odd.
  */
-export function pairGiven(graph: TourGraph, given: Int32Array, rule: MatchingRule): Pairing {
+export function pairGiven(
+  graph: TourGraph,
+  given: Int32Array,
+  rule: MatchingRule,
+  shouldStop?: () => boolean,
+): Pairing {
   const degree = new Int32Array(graph.vertexCount);
   for (const v of graph.halfEdgeVertex) degree[v] = degree[v] + 1;
   for (const v of given) degree[v] = degree[v] + 1;
   const odd: number[] = [];
   for (let v = 0; v < graph.vertexCount; v++) if (degree[v] % 2 === 1) odd.push(v);
-  const special = graph.free >= 0 ? 1 : 0;
+  // Home and D have the highest numbers, so they stand last.
+  const special = odd.filter((v) => v >= graph.home).length;
   const problem: MatchingProblem = {
     n: odd.length,
     ...positions(graph, odd),
     weigh: graph.weigh,
     special,
-    specialCost: () => 0,
+    specialCost: (i, j) => connectorCost(graph, odd[i], odd[j]),
   };
-  const { matching, certified } = solve(problem, rule);
+  const { matching, certified } = solve(problem, rule, shouldStop);
   const connectors: number[] = [];
   matching.mate.forEach((j, i) => {
     if (j > i) connectors.push(odd[i], odd[j]);
@@ -91,9 +96,10 @@ function positions(graph: TourGraph, vertices: ArrayLike<number>): { x: Float64A
 function solve(
   problem: MatchingProblem,
   rule: MatchingRule,
+  shouldStop: (() => boolean) | undefined,
 ): { matching: Matching; certified: CertifiedMatching | null } {
   if (rule === 'exact') {
-    const certified = exactMatching(problem);
+    const certified = exactMatching(problem, shouldStop ? { shouldStop } : {});
     return { matching: certified, certified };
   }
   return { matching: improveByExchange(problem, greedyMatching(problem)), certified: null };

@@ -7,6 +7,8 @@ export interface TourTask {
   readonly homeY: number;
   readonly end: 'home' | 'anywhere';
   readonly weigh: Weigh;
+  /** What a leg to or from home costs; as any connector where left out. */
+  readonly weighHome?: Weigh;
 }
 
 /**
@@ -33,6 +35,7 @@ export interface TourGraph {
   /** D, or -1 where the tour returns home. */
   readonly free: number;
   readonly weigh: Weigh;
+  readonly weighHome: Weigh;
 }
 
 export function withHome(network: Network, task: TourTask): TourGraph {
@@ -66,13 +69,15 @@ export function withHome(network: Network, task: TourTask): TourGraph {
     homeEdge: m,
     free,
     weigh: task.weigh,
+    weighHome: task.weighHome ?? task.weigh,
   };
 }
 
 /** What a connector between two vertices costs. */
 export function connectorCost(graph: TourGraph, u: number, v: number): number {
   if (u === v || u === graph.free || v === graph.free) return 0;
-  return graph.weigh(distance(graph, u, v));
+  const weigh = u === graph.home || v === graph.home ? graph.weighHome : graph.weigh;
+  return weigh(distance(graph, u, v));
 }
 
 export function distance(graph: TourGraph, u: number, v: number): number {

@@ -18,6 +18,9 @@ export interface SvgOptions {
   readonly decimals?: number;
 }
 
+/** Widths are for looking at: kept within what can be written and is not taken for invisible. */
+const THINNEST_MM = 0.001;
+const THICKEST_MM = 1000;
 /** How the name of a pen is kept: `label` of its group, in a name space of our own. */
 const NAME_SPACE = 'urn:fewlift:1';
 const TRAVEL_OPENS = '\n<g id="travel" fewlift:label="travel"';
@@ -77,7 +80,9 @@ class SvgStylus implements CurveStylus {
 
   beginPen(pen: number): void {
     const { name, colour, widthMm } = this.program.pens[pen];
-    const width = widthMm ? ` stroke-width="${formatDecimal(widthMm, 4)}"` : '';
+    const width = widthMm
+      ? ` stroke-width="${formatDecimal(Math.min(Math.max(widthMm, THINNEST_MM), THICKEST_MM), 4)}"`
+      : '';
     const label = xmlText(name);
     this.lines.push(
       `<g id="pen-${pen + 1}" fewlift:label="${label}" stroke="${strokeOf(colour)}"${width}>`,

@@ -319,6 +319,20 @@ describe('what is drawn once', () => {
     expect(n.repeatedMm).toBeCloseTo(lengthOf(n), 6);
   });
 
+  test('a stroke that goes back on itself is drawn one way', () => {
+    const n = networkOf([
+      {
+        line: [
+          [10, 10],
+          [90, 10],
+        ],
+        closed: true,
+      },
+    ]);
+    expect([n.edgeCount, n.oddVertices.length]).toEqual([1, 2]);
+    expect(n.repeatedMm).toBeCloseTo(80, 9);
+  });
+
   test('two lines that cross at a joint of both are joined there', () => {
     const n = networkOf([
       {
@@ -363,9 +377,12 @@ describe('dots and small things', () => {
         ],
       },
       { dot: [5, 0.01] },
+      { dot: [5, 0.04] },
+      { dot: [5, 1] },
       { dot: [5, 1] },
     ]);
-    expect([n.edgeCount, n.dotsOnLines]).toEqual([2, 1]);
+    // Within the repeat tolerance, not the snap distance: a dot beside a line is a dot.
+    expect([n.edgeCount, n.dotsOnLines, n.repeatedDots]).toEqual([3, 1, 1]);
   });
 
   test('a closed curve and a line smaller than the snap distance survive', () => {
