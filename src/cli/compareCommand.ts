@@ -14,7 +14,8 @@ import {
 import { version } from '../node/version.js';
 import { Ending, EXIT } from './exitCodes.js';
 import { drawingFrom, readText } from './input.js';
-import { addNetworkOptions, type NetworkFlags, settingsOf } from './sharedOptions.js';
+import { positiveLengthMm } from './optionValues.js';
+import { addLineOptions, type NetworkFlags, settingsOf } from './sharedOptions.js';
 import { outputKind } from './tourJob.js';
 
 const EXAMPLES = `
@@ -36,28 +37,39 @@ export function compareCommand(finish: (code: number) => void): Command {
     )
     .argument('<before>', 'SVG or G-code; - is standard input')
     .argument('<after>', 'SVG or G-code');
-  return addNetworkOptions(command)
+  return addLineOptions(command)
+    .option(
+      '--page-height <length>',
+      'height of the page of G-code whose head does not tell it',
+      positiveLengthMm,
+    )
     .option('--json', 'print JSON instead of the table')
     .addHelpText('after', EXAMPLES)
-    .action((before: string, after: string, flags: NetworkFlags & { json?: boolean }) => {
-      const settings = settingsOf(flags);
-      const comparison = compareSides(
-        sideOf(before, settings),
-        sideOf(after, settings),
-        settings,
-        PEN_ON_Z,
-        version(),
-      );
-      const text = flags.json ? JSON.stringify(comparison, null, 2) : comparisonTable(comparison);
-      process.stdout.write(`${text}\n`);
-      finish(comparison.same ? EXIT.done : EXIT.checkFailed);
-    });
+    .action(
+      (before: string, after: string, flags: NetworkFlags & { json?: boolean; pageHeight?: number }) => {
+        const settings = settingsOf(flags);
+        const comparison = compareSides(
+          sideOf(before, settings, flags.pageHeight),
+          sideOf(after, settings, flags.pageHeight),
+          settings,
+          PEN_ON_Z,
+          version(),
+        );
+        const text = flags.json ? JSON.stringify(comparison, null, 2) : comparisonTable(comparison);
+        process.stdout.write(`${text}\n`);
+        finish(comparison.same ? EXIT.done : EXIT.checkFailed);
+      },
+    );
 }
 
-function sideOf(path: string, settings: CompareSettings): ComparedSide {
+function sideOf(path: string, settings: CompareSettings, pageHeightMm: number | undefined): ComparedSide {
   const text = readText(path);
   if (outputKind(path) !== 'gcode') return sideOfDrawing(drawingFrom(text, path), settings);
-  const { program, findings } = readGcode(text);
+  const { program, findings } = readGcode(text, pageHeightMm === undefined ? {} : { pageHeightMm });
+  for (const finding of program ? findings : []) {
+    const line = finding.place?.line ? ` (line ${finding.place.line})` : '';
+    process.stderr.write(`${finding.severity}: ${basename(path)}: ${sentence(finding)}${line}\n`);
+  }
   if (program) return sideOfProgram(basename(path), program, settings);
   const stop = findings.find(({ severity }) => severity === 'error');
   const line = stop?.place?.line ? ` (line ${stop.place.line})` : '';

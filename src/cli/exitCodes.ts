@@ -18,3 +18,10 @@ export class Ending extends Error {
     super(message);
   }
 }
+
+/** One line for what nobody foresaw, instead of a stack trace; DEBUG shows where it came from. */
+export function unexpected(error: unknown): string {
+  const what = error instanceof Error ? error.message : String(error);
+  const where = process.env.DEBUG && error instanceof Error ? `\n${error.stack}` : '';
+  return `something unforeseen went wrong (${what}); nothing was written${where}`;
+}

@@ -10,10 +10,7 @@ export function readText(path: string): string {
     return decodeText(readBytes(path));
   } catch (error) {
     if (error instanceof NotText) {
-      throw new Ending(
-        EXIT.notRead,
-        `${shownName(path)} is not text in ${error.message}: a drawing is expected, as SVG`,
-      );
+      throw new Ending(EXIT.notRead, `${shownName(path)} ${error.why}`);
     }
     throw new Ending(EXIT.notRead, `${shownName(path)} could not be read: ${reason(error)}`);
   }
@@ -32,11 +29,30 @@ export function drawingFrom(text: string, path: string): Drawing {
   return drawing;
 }
 
+/** What most likely explains that nothing is stroked, the likeliest first. */
+const WHY_NOTHING = [
+  'path-error',
+  'points-error',
+  'coordinate-overflow',
+  'filled-not-stroked',
+  'text-not-drawn',
+  'image-not-drawn',
+  'hidden',
+  'invisible',
+  'viewbox-empty',
+  'style-sheet-not-read',
+  'butt-dots-not-drawn',
+  'use-missing',
+  'use-external',
+];
+
 /** The same, where there must be something to draw. */
 export function strokedDrawingFrom(text: string, path: string): Drawing {
   const drawing = drawingFrom(text, path);
   if (drawing.strokes.count > 0) return drawing;
-  const why = drawing.findings.find((finding) => finding.severity === 'warning');
+  const why = WHY_NOTHING.map((code) => drawing.findings.find((finding) => finding.code === code)).find(
+    Boolean,
+  );
   const nothing = sentence({ code: 'nothing-stroked', severity: 'error', place: null, values: {} });
   throw new Ending(EXIT.notRead, `${shownName(path)}: ${nothing}${why ? `\n  ${sentence(why)}` : ''}`);
 }
@@ -53,6 +69,7 @@ export function reason(error: unknown): string {
     EISDIR: 'it is a directory',
     EACCES: 'permission denied',
     EPERM: 'permission denied',
+    ENAMETOOLONG: 'the name is too long',
     ENOTDIR: 'part of the path is not a directory',
     ENOSPC: 'no space is left',
     EROFS: 'the file system is read-only',

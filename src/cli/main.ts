@@ -1,20 +1,22 @@
 import { Command, CommanderError } from 'commander';
 import { version } from '../node/version.js';
 import { compareCommand } from './compareCommand.js';
-import { Ending, EXIT } from './exitCodes.js';
+import { Ending, EXIT, unexpected } from './exitCodes.js';
 import { surveyCommand } from './surveyCommand.js';
 import { tourCommand } from './tourCommand.js';
 
-/** A reader that has seen enough (`| head`) is no error of ours. */
-function endQuietlyOnBrokenPipe(error: NodeJS.ErrnoException): void {
-  if (error.code !== 'EPIPE') throw error;
-  process.exit(EXIT.done);
+/**
+ * A reader that has seen enough (`| head`) is no error of ours: the job goes on and its code stands. Any
+ * other failure of standard output is a failure to write.
+ */
+function noteStreamError(error: NodeJS.ErrnoException): void {
+  if (error.code !== 'EPIPE') process.exitCode = EXIT.notWritten;
 }
 
 /** Runs the command line; the process ends with the code returned. Never throws on a user's mistake. */
 export async function main(args: readonly string[]): Promise<number> {
-  if (!process.stdout.listeners('error').includes(endQuietlyOnBrokenPipe)) {
-    process.stdout.on('error', endQuietlyOnBrokenPipe);
+  for (const stream of [process.stdout, process.stderr]) {
+    if (!stream.listeners('error').includes(noteStreamError)) stream.on('error', noteStreamError);
   }
   let code: number = EXIT.done;
   const program = new Command('fewlift')
@@ -45,6 +47,7 @@ export async function main(args: readonly string[]): Promise<number> {
     if (error instanceof CommanderError) {
       return error.exitCode === 0 || args.length === 0 ? EXIT.done : EXIT.wrongUsage;
     }
-    throw error;
+    process.stderr.write(`fewlift: ${unexpected(error)}\n`);
+    return EXIT.refused;
   }
 }

@@ -15,12 +15,17 @@ export function positiveLengthMm(text: string): number {
   return value;
 }
 
+const FARTHEST_MM = 1e6;
+
 /** Two lengths, `X,Y`. */
 export function placeMm(text: string): [number, number] {
   const parts = text.split(',').map((part) => parseLengthMm(part.trim()));
   const [x, y] = parts;
   if (parts.length !== 2 || x === null || y === null || x === undefined || y === undefined) {
     throw new InvalidArgumentError('Give two lengths from the top left of the page, such as 0,297.');
+  }
+  if (Math.max(Math.abs(x), Math.abs(y)) > FARTHEST_MM) {
+    throw new InvalidArgumentError('Home cannot be more than a kilometre away.');
   }
   return [x, y];
 }

@@ -6,7 +6,7 @@ import { lengthMm, numberAtLeastZero, placeMm, positiveLengthMm, wholeNumber } f
 export interface NetworkFlags {
   snap: number;
   accuracy: number;
-  junctions: Settings['junctions'];
+  junctions?: Settings['junctions'];
   repeats: Settings['repeats'];
   home?: [number, number];
   end: Settings['end'];
@@ -25,6 +25,13 @@ export interface SearchFlags {
 const d = DEFAULT_SETTINGS;
 
 export function addNetworkOptions(command: Command): Command {
+  return addLineOptions(command).addOption(
+    choice('--junctions <where>', 'where lines join', ['ends', 'touching'], d.junctions),
+  );
+}
+
+/** What two files must agree on to be held against each other. */
+export function addLineOptions(command: Command): Command {
   return command
     .addOption(length('--snap <length>', 'ends this close meet', lengthMm, d.snapMm))
     .addOption(
@@ -35,7 +42,6 @@ export function addNetworkOptions(command: Command): Command {
         d.accuracyMm,
       ),
     )
-    .addOption(choice('--junctions <where>', 'where lines join', ['ends', 'touching'], d.junctions))
     .addOption(choice('--repeats <how>', 'lines that stand more than once', ['once', 'keep'], d.repeats))
     .option(
       '--home <x,y>',
@@ -64,7 +70,7 @@ export function settingsOf(flags: NetworkFlags & Partial<SearchFlags>): Settings
   return {
     snapMm: flags.snap,
     accuracyMm: flags.accuracy,
-    junctions: flags.junctions,
+    junctions: flags.junctions ?? d.junctions,
     repeats: flags.repeats,
     matching: flags.matching ?? d.matching,
     minimise: flags.minimise ?? d.minimise,

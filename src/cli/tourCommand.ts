@@ -1,7 +1,7 @@
 import { mkdirSync } from 'node:fs';
-import { resolve } from 'node:path';
 import { Command } from 'commander';
-import { Ending, EXIT } from './exitCodes.js';
+import { realPath } from '../node/files.js';
+import { Ending, EXIT, unexpected } from './exitCodes.js';
 import { numberAtLeastZero } from './optionValues.js';
 import {
   addNetworkOptions,
@@ -34,6 +34,9 @@ The kind of an output follows its extension: .svg; .gcode .ngc .nc .tap; .json (
 Lengths take a unit (0.1mm, 2in, 4pt); bare numbers are mm.
 Exit codes: 0 done, 2 wrong usage, 3 not read or nothing to draw, 4 refused (nothing written), 5 not written.`;
 
+/** Finer than this the rounding of three decimals would use up the accuracy. */
+const FINEST_GCODE_MM = 0.001;
+
 /** `fewlift tour`: the main job. `finish` receives the exit code. */
 export function tourCommand(finish: (code: number) => void): Command {
   const command = new Command('tour')
@@ -44,7 +47,7 @@ export function tourCommand(finish: (code: number) => void): Command {
     .argument('<drawing...>', 'SVG files; - is standard input')
     .option('-o, --output <file>', 'where to write; may be given several times', collect)
     .option('--out-dir <dir>', 'write each drawing there as SVG, under its own name')
-    .option('--in-place', 'let an output overwrite its input')
+    .option('--in-place', 'write back to the input, or let an output overwrite it')
     .option('--show-travel', 'show the lifted travel in SVG, as a group of its own');
   return addSearchOptions(addNetworkOptions(command))
     .option('--seconds <s>', 'stop improving after this time', numberAtLeastZero)
@@ -70,9 +73,9 @@ function orderAll(drawings: string[], flags: TourFlags): number {
         quiet: flags.quiet ?? false,
       });
     } catch (error) {
-      if (!(error instanceof Ending)) throw error;
-      process.stderr.write(`fewlift: ${error.message}\n`);
-      worst = Math.max(worst, error.code);
+      const known = error instanceof Ending;
+      process.stderr.write(`fewlift: ${known ? error.message : `${input}: ${unexpected(error)}`}\n`);
+      worst = Math.max(worst, known ? error.code : EXIT.refused);
     }
   }
   return worst;
@@ -83,7 +86,16 @@ function planOutputs(drawings: string[], flags: TourFlags): (input: string) => s
   const usage = (message: string) => new Ending(EXIT.wrongUsage, message);
   const { output = [], outDir } = flags;
   if (outDir !== undefined && output.length > 0) throw usage('-o and --out-dir do not go together');
-  if (drawings.length > 1 && outDir === undefined) throw usage('several drawings need --out-dir');
+  if (drawings.length > 1 && outDir === undefined && !flags.inPlace) {
+    throw usage('several drawings need --out-dir or --in-place');
+  }
+  if (drawings.length > 1 && output.length > 0)
+    throw usage('-o takes one drawing; use --out-dir for several');
+  if (outDir === '') throw usage('--out-dir needs the name of a directory');
+  if (flags.inPlace && drawings.includes('-')) throw usage('standard input cannot be written back in place');
+  if (output.some((path) => outputKind(path) === 'gcode') && flags.accuracy < FINEST_GCODE_MM) {
+    throw usage(`G-code has three decimals: --accuracy must be at least ${FINEST_GCODE_MM} mm`);
+  }
   if (drawings.length > 1 && flags.json) throw usage('--json takes one drawing at a time');
   for (const path of output) {
     if (outputKind(path) === null) {
@@ -93,20 +105,21 @@ function planOutputs(drawings: string[], flags: TourFlags): (input: string) => s
     }
   }
   if (flags.json && output.includes('-')) throw usage('--json and a drawing cannot share standard output');
-  if (new Set(output.map((path) => resolve(path))).size < output.length) {
+  if (new Set(output.map(realPath)).size < output.length) {
     throw usage('the same output is named twice');
   }
   const outputsOf = (input: string): string[] => {
     if (outDir !== undefined) return [inDirectory(outDir, input)];
     if (output.length > 0) return output;
+    if (flags.inPlace) return [input];
     return flags.json ? [] : ['-'];
   };
   const targets = drawings
     .flatMap(outputsOf)
     .filter((path) => path !== '-')
-    .map((path) => resolve(path));
+    .map(realPath);
   if (new Set(targets).size < targets.length) throw usage('two drawings would be written to the same file');
-  if (!flags.inPlace && drawings.some((input) => input !== '-' && targets.includes(resolve(input)))) {
+  if (!flags.inPlace && drawings.some((input) => input !== '-' && targets.includes(realPath(input)))) {
     throw usage('an output would overwrite its input; say --in-place if that is meant');
   }
   if (outDir !== undefined) {

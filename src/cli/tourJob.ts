@@ -119,5 +119,5 @@ function tell(report: Report, outputs: string[], gcode: boolean): void {
 
 /** The output of one of several drawings in a directory. */
 export function inDirectory(directory: string, input: string): string {
-  return join(directory, `${basename(input, extname(input))}.svg`);
+  return join(directory, input === '-' ? 'drawing.svg' : `${basename(input, extname(input))}.svg`);
 }

@@ -1,5 +1,9 @@
-/** Bytes that are no text in any encoding a drawing comes in. */
-export class NotText extends Error {}
+/** Bytes that are no text; `why` says it to a person. */
+export class NotText extends Error {
+  constructor(readonly why: string) {
+    super(why);
+  }
+}
 
 /**
  * The text of a file: by its byte order mark, by the encoding its XML declaration names, else UTF-8.
@@ -7,6 +11,7 @@ export class NotText extends Error {}
  */
 export function decodeText(bytes: Uint8Array): string {
   const [a, b] = bytes;
+  if (a === 0x1f && b === 0x8b) throw new NotText('is compressed: unpack it first (gunzip)');
   if (a === 0xff && b === 0xfe) return decode(bytes, 'utf-16le');
   if (a === 0xfe && b === 0xff) return decode(bytes, 'utf-16be');
   const head = String.fromCharCode(...bytes.subarray(0, 200));
@@ -15,9 +20,20 @@ export function decodeText(bytes: Uint8Array): string {
 }
 
 function decode(bytes: Uint8Array, encoding: string): string {
+  const decoder = decoderFor(encoding);
   try {
-    return new TextDecoder(encoding, { fatal: true }).decode(bytes);
+    return decoder.decode(bytes);
   } catch {
-    throw new NotText(encoding);
+    throw new NotText(
+      `is not text in ${encoding}: a drawing is expected, as SVG in UTF-8 or with its encoding named`,
+    );
+  }
+}
+
+function decoderFor(encoding: string) {
+  try {
+    return new TextDecoder(encoding, { fatal: true });
+  } catch {
+    throw new NotText(`names an encoding that is not known, ${encoding.slice(0, 40)}: save it as UTF-8`);
   }
 }

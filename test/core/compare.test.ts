@@ -111,6 +111,14 @@ describe('what compare says', () => {
     ]);
   });
 
+  test('two layers of one name are two pens, and a drawing is the same as itself', () => {
+    const drawing = svg('<g id="cut"><path d="M0 0H10"/></g><g id="cut"><path d="M0 9H10"/></g>');
+    const settings = { ...DEFAULT_SETTINGS, pens: 'layer' as const };
+    const side = sideOfDrawing(drawing, settings);
+    expect(side.program.pens.length).toBe(2);
+    expect(compareSides(side, side, settings, PEN_ON_Z, 'test').same).toBe(true);
+  });
+
   test('order, direction, pieces and pens in another order do not matter', () => {
     const { same } = compare(
       svg('<path d="M0 0H10V10"/><path d="M3 3C3 9 9 9 9 3" stroke="red"/>'),

@@ -1,7 +1,8 @@
-import { mkdirSync, writeFileSync } from 'node:fs';
+import { spawnSync } from 'node:child_process';
+import { closeSync, existsSync, mkdirSync, openSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, test } from 'vitest';
-import { type CliResult, fewlift, inFolder, svgOf } from '../support/runCli.ts';
+import { BIN, type CliResult, fewlift, inFolder, svgOf } from '../support/runCli.ts';
 
 /** One or two lines of message, no stack trace, nothing on standard output. */
 function expectRefusal(result: CliResult, code: number, message: RegExp): void {
@@ -22,6 +23,10 @@ const FILES: [string, string | Buffer, RegExp][] = [
   ['blank.svg', '  \n\n ', /empty|not SVG/],
   ['truncated.svg', svgOf('<g><path d="M0 0L10 10"/><path d="M5 5').slice(0, 150), /cut off.*line 1/],
   ['picture.svg', PNG, /not text/],
+  ['packed.svg', Buffer.from([0x1f, 0x8b, 8, 0, 0]), /compressed/],
+  ['latin.svg', Buffer.from(svgOf('<title>\u00e9</title>'), 'latin1'), /not text in utf-8.*encoding/],
+  ['strange.svg', `<?xml version="1.0" encoding="x-none"?>${svgOf('')}`, /encoding.*x-none/],
+  ['letters.svg', svgOf('<text>Hi</text>', 'width="9mm" height="9mm"'), /nothing.*stroke[\s\S]*1 text/],
   ['page.svg', '<html><body>no drawing</body></html>', /not SVG.*html/],
   ['words.svg', 'a shopping list', /not SVG.*shopping/],
   ['two.svg', `${svgOf('')}${svgOf('')}`, /second root/],
@@ -68,6 +73,12 @@ describe('wrong usage: exit code 2', () => {
     ['a negative length', ['tour', 'a.svg', '--snap', '-1'], /snap.*below 0/],
     ['no length', ['tour', 'a.svg', '--snap', 'wide'], /snap.*length/],
     ['no accuracy', ['tour', 'a.svg', '--accuracy', '0'], /accuracy.*above 0/],
+    [
+      'an accuracy that G-code cannot hold',
+      ['tour', 'a.svg', '--accuracy', '0.0005', '-o', 'x.gcode'],
+      /0\.001 mm/,
+    ],
+    ['a home beyond all reach', ['tour', 'a.svg', '--home', '1e200,0'], /home/],
     ['an unknown option', ['tour', 'a.svg', '--fast'], /unknown option.*--fast/],
     ['an unknown command', ['draw', 'a.svg'], /unknown command.*draw/],
     ['an unknown choice', ['tour', 'a.svg', '--end', 'nowhere'], /end.*home, anywhere/],
@@ -90,6 +101,22 @@ describe('wrong usage: exit code 2', () => {
 });
 
 describe('what cannot be written: exit code 5', () => {
+  test.skipIf(!existsSync('/dev/full'))('standard output is full', () => {
+    inFolder((folder) => {
+      writeFileSync(join(folder, 'a.svg'), svgOf('<path d="M0 0L9 9"/>'));
+      for (const command of ['tour', 'survey']) {
+        const full = openSync('/dev/full', 'w');
+        const { status, stderr } = spawnSync(process.execPath, [BIN, command, 'a.svg'], {
+          cwd: folder,
+          stdio: ['ignore', full, 'pipe'],
+          encoding: 'utf8',
+        });
+        closeSync(full);
+        expect([status, /^\s+at /m.test(stderr)]).toEqual([5, false]);
+      }
+    });
+  });
+
   test('no such folder, or a folder in the way: nothing is written, other outputs neither', () => {
     inFolder((folder, names) => {
       writeFileSync(join(folder, 'a.svg'), svgOf('<path d="M0 0L9 9"/>'));

@@ -1,4 +1,4 @@
-import { readFileSync, writeFileSync } from 'node:fs';
+import { lstatSync, readFileSync, statSync, symlinkSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, test } from 'vitest';
 import type { Report } from '../../src/core/index.ts';
@@ -12,7 +12,7 @@ describe('fewlift tour', () => {
     expect(code).toBe(0);
     expect(out).toMatch(/^<\?xml[\s\S]*<svg[\s\S]*<\/svg>\n$/);
     expect(err).toMatch(/runs\s+8\s+1\s+-87\.5 %/);
-    expect(err).toMatch(/bound .*no order can do with less/);
+    expect(err).toMatch(/bound .*, reached: no order that lifts at ends and joints travels less/);
   });
 
   test('in a pipe, quietly, twice over: the same bytes', () => {
@@ -125,6 +125,44 @@ describe('fewlift tour', () => {
       expect(names()).toEqual(['a.svg']);
       expect(readFileSync(join(folder, 'a.svg'), 'utf8')).toContain('fewlift:label');
     });
+  });
+
+  test('--in-place alone writes back; a link to the input is the input, and keeps its mode', () => {
+    inFolder((folder, names) => {
+      const path = join(folder, 'a.svg');
+      writeFileSync(path, svgOf('<path d="M0 0L9 9"/><path d="M0 0L9 0"/>'), { mode: 0o600 });
+      symlinkSync('a.svg', join(folder, 'link.svg'));
+      const refused = fewlift(['tour', 'link.svg', '-o', 'a.svg'], '', folder);
+      expect([refused.code, refused.err]).toEqual([2, expect.stringMatching(/overwrite its input/)]);
+      expect(fewlift(['tour', 'link.svg', '--in-place', '--quiet'], '', folder)).toMatchObject({
+        code: 0,
+        out: '',
+      });
+      expect(names()).toEqual(['a.svg', 'link.svg']);
+      expect(lstatSync(join(folder, 'link.svg')).isSymbolicLink()).toBe(true);
+      expect(statSync(path).mode & 0o777).toBe(0o600);
+      expect(readFileSync(path, 'utf8')).toContain('fewlift:label');
+    });
+  });
+
+  test('home on a corner: the fewest lifts are one run, and said to be', () => {
+    const { out } = fewlift(
+      ['tour', '-', '--minimise', 'lifts', '--json'],
+      svgOf('<path d="M0 80V20"/><path d="M0 80H80"/>'),
+    );
+    expect(JSON.parse(out)).toMatchObject({
+      after: { runs: 1 },
+      bound: { value: 1, exact: true },
+      gap: 0,
+      stopped: 'proven',
+    });
+  });
+
+  test('odd stroke widths are written so that they can be read', () => {
+    for (const width of ['0.00000001', '1e13']) {
+      const body = `<path d="M9 9L20 9" stroke-width="${width}"/>`;
+      expect(fewlift(['tour', '-', '--quiet'], svgOf(body))).toMatchObject({ code: 0, err: '' });
+    }
   });
 
   test('help and version', () => {

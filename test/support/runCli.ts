@@ -4,7 +4,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
-const BIN = fileURLToPath(new URL('../../bin/fewlift.js', import.meta.url));
+export const BIN = fileURLToPath(new URL('../../bin/fewlift.js', import.meta.url));
 
 export const SAMPLES = fileURLToPath(new URL('../../samples/', import.meta.url));
 

@@ -1,4 +1,5 @@
 import type { Drawing } from '../drawing/drawing.js';
+import { LINE } from '../geometry/segments.js';
 import { addSplit, type Marks } from './marks.js';
 
 /** Joints this close are one point: what is left of rounding after transforms, far below any drawn gap. */
@@ -21,12 +22,13 @@ export function splitWhereJointsPart(marks: Marks, drawing: Drawing, strokes: Ui
   const highSide = new Int32Array(count).fill(-1);
   const parts = new Uint8Array(count);
   const side = (v: number) => (v < 0 ? -1 : point[v]);
+  const isStraight = (v: number) => drawing.strokes.segments.kind[segment[v]] === LINE;
   for (let v = 0; v < count; v++) {
     const p = point[v];
     const low = Math.min(side(before[v]), side(after[v]));
     const high = Math.max(side(before[v]), side(after[v]));
-    // A stroke that turns back on itself here draws the way back along the way there.
-    if (low === high && low >= 0) parts[p] = 1;
+    // A straight stroke that turns back here draws the way back along the way there.
+    if (low === high && low >= 0 && isStraight(before[v]) && isStraight(v)) parts[p] = 1;
     if (highSide[p] < 0) {
       lowSide[p] = low;
       highSide[p] = high;

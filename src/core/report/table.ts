@@ -37,8 +37,8 @@ export function findingLines(findings: Report['findings']): string[] {
 function boundText(bound: Report['bound'], gap: number | null): string {
   if (bound.method === 'none') return 'not asked for';
   const value = bound.objective === 'lifts' ? count(bound.value, 'run') : mm(bound.value);
-  if (bound.exact)
-    return `${value}: reached; no order of these lines between their ends and joints needs less`;
+  if (bound.exact && bound.objective === 'lifts') return `${value}, reached: no order has fewer`;
+  if (bound.exact) return `${value}, reached: no order that lifts at ends and joints travels less`;
   const far = gap === null ? '' : `, at most ${(100 * gap).toFixed(1)} % above the least possible`;
   return `${value}${far}`;
 }
