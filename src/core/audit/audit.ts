@@ -53,14 +53,13 @@ export function auditLines(wanted: LineSet, drawn: LineSet, options: AuditOption
   const tolerances = tolerancesFor(options);
   requireFinite(wanted);
   requireFinite(drawn);
-  const wantedSide = new Side(wanted, tolerances);
-  const drawnSide = new Side(drawn, tolerances);
+  const whole = pairWholeSegments(wanted, drawn, tolerances.sameMm);
+  const wantedSide = new Side(wanted, whole.wanted, tolerances);
+  const drawnSide = new Side(drawn, whole.drawn, tolerances);
   const once = options.repeats === 'once';
 
-  const deviations = [
-    pairWholeSegments(wantedSide, drawnSide, tolerances.sameMm),
-    pairAlongThreads(wantedSide, drawnSide, tolerances),
-  ];
+  const deviations = [0, pairAlongThreads(wantedSide, drawnSide, tolerances)];
+  for (const deviation of whole.drawn) if (deviation > deviations[0]) deviations[0] = deviation;
   const drawnAgain = drawnAgainMm(wantedSide, tolerances);
   if (once) excuseRepeats(wantedSide, drawnSide, tolerances);
 

@@ -110,7 +110,7 @@ export class BridgeInspector {
     const { x, y, pen } = stretch;
     const pieces: number[] = [];
     for (let k = 0; k + 1 < x.length; k++) {
-      visitPieces(wanted, pen, x[k], y[k], x[k + 1], y[k + 1], reach, (v) => {
+      visitPieces(wanted, wanted.index, pen, x[k], y[k], x[k + 1], y[k + 1], reach, (v) => {
         pieces.push(v);
         return pieces.length >= MOST_PIECES;
       });

@@ -17,7 +17,7 @@ export function nearParts(stretch: Pick<Stretch, 'x' | 'y' | 'pen'>, side: Side,
     const by = stretch.y[k + 1];
     const length = Math.sqrt((bx - ax) * (bx - ax) + (by - ay) * (by - ay));
     const here: Intervals = [];
-    visitPieces(side, stretch.pen, ax, ay, bx, by, reach, (v) => {
+    visitPieces(side, side.index, stretch.pen, ax, ay, bx, by, reach, (v) => {
       if (!nearPiece(ax, ay, bx, by, side, v, reach, hit)) return false;
       addInterval(here, along + hit.from * length, along + hit.to * length, 0);
       return here[0] <= along && here[1] >= along + length;
@@ -32,16 +32,22 @@ export function nearParts(stretch: Pick<Stretch, 'x' | 'y' | 'pen'>, side: Side,
 export function isNear(x: number, y: number, side: Side, pen: number, reach: number): boolean {
   const hit = { from: 0, to: 0 };
   let near = false;
-  visitPieces(side, pen, x, y, x, y, reach, (v) => {
+  visitPieces(side, side.index, pen, x, y, x, y, reach, (v) => {
     near = nearPiece(x, y, x, y, side, v, reach, hit);
     return near;
   });
   return near;
 }
 
+/** What can be searched for the spans around a box. */
+export interface SpanIndex {
+  visit(minX: number, minY: number, maxX: number, maxY: number, visit: (span: number) => boolean): void;
+}
+
 /** Calls `visit(piece, span)` for the pieces of a pen around a straight line, until it returns true. */
 export function visitPieces(
   side: Side,
+  index: SpanIndex,
   pen: number,
   ax: number,
   ay: number,
@@ -54,7 +60,10 @@ export function visitPieces(
   const minY = Math.min(ay, by) - reach;
   const maxX = Math.max(ax, bx) + reach;
   const maxY = Math.max(ay, by) + reach;
-  side.index.visit(minX, minY, maxX, maxY, (span) => {
+  const ex = bx - ax;
+  const ey = by - ay;
+  const limit = reach * reach * (ex * ex + ey * ey);
+  index.visit(minX, minY, maxX, maxY, (span) => {
     if (side.penOf(span) !== pen) return false;
     const first = side.flatten(span);
     const last = first + side.pieceCount(span);
@@ -62,6 +71,10 @@ export function visitPieces(
     for (let v = first; v < last; v++) {
       if ((x[v] < minX && x[v + 1] < minX) || (x[v] > maxX && x[v + 1] > maxX)) continue;
       if ((y[v] < minY && y[v + 1] < minY) || (y[v] > maxY && y[v + 1] > maxY)) continue;
+      // All of the piece to one side of the line, beyond reach: the boxes of long lines say little.
+      const s = (x[v] - ax) * ey - (y[v] - ay) * ex;
+      const t = (x[v + 1] - ax) * ey - (y[v + 1] - ay) * ex;
+      if (s > 0 === t > 0 && s * s > limit && t * t > limit) continue;
       if (visit(v, span)) return true;
     }
     return false;

@@ -1,9 +1,10 @@
+import type { OverlapTable } from './overlapTable.js';
 import type { Side } from './side.js';
-import { findThreads, type ThreadOverlap } from './threads.js';
+import { findThreads } from './threads.js';
 import { fringeMm, type Tolerances } from './tolerances.js';
 
-/** Crowds of hundreds of lines on one place are settled over several rounds. */
-const MOST_ROUNDS = 64;
+/** Crowds of hundreds of lines on one place are settled in rounds, as long as each does its share. */
+const LEAST_SHARE = 1 / 32;
 
 /**
  * Pairs what is drawn with what is wanted, point by point along their length: no point is used twice,
@@ -19,70 +20,96 @@ const MOST_ROUNDS = 64;
  */
 export function pairAlongThreads(wanted: Side, drawn: Side, tolerances: Tolerances): number {
   let largest = 0;
-  for (let round = 0; round < MOST_ROUNDS; round++) {
-    const { threads, crowded } = findThreads(wanted, drawn, tolerances);
-    let progress = false;
-    for (const thread of threads) {
-      const matches = freeMatches(wanted, drawn, thread.overlaps);
-      const free = matches.reduce((sum, m) => sum + m.lengthMm, 0);
-      if (free < Math.min(thread.lengthMm / 2, fringeMm(0, tolerances))) continue;
-      for (const match of matches) {
-        const { overlap: o, deviation } = match;
-        drawn.pair(o.drawnSpan, o.drawnPiece, match.from0, match.to0, deviation);
-        wanted.pair(o.wantedSpan, o.wantedPiece, match.from1, match.to1, deviation);
-        progress = true;
-        if (deviation > largest) largest = deviation;
-      }
+  let pairedMm = 0;
+  for (let round = 0; ; round++) {
+    const { table, threads, crowded } = findThreads(wanted, drawn, tolerances, round);
+    const matcher = new Matcher(wanted, drawn, table);
+    let roundMm = 0;
+    for (const { overlaps, lengthMm } of threads) {
+      const freeMm = matcher.gatherFree(overlaps);
+      if (freeMm < Math.min(lengthMm / 2, fringeMm(0, tolerances))) continue;
+      matcher.pairGathered();
+      roundMm += freeMm;
     }
-    if (!crowded || !progress) break;
+    pairedMm += roundMm;
+    largest = Math.max(largest, matcher.deviation);
+    if (!crowded || roundMm <= LEAST_SHARE * pairedMm) return largest;
   }
-  return largest;
 }
 
-/** Opposite parts of an overlap that are free on both sides; from1 < to1. */
-interface Match {
-  readonly overlap: ThreadOverlap;
-  readonly from0: number;
-  readonly to0: number;
-  readonly from1: number;
-  readonly to1: number;
-  readonly lengthMm: number;
-  readonly deviation: number;
-}
+/** Numbers of a match: row, from0, to0, from1, to1, deviation. */
+const FIELDS = 6;
 
-/**
- * What is free along a thread. Overlaps of one thread may share a little of a piece at its corners; so
- * what is found may be paired twice by a hair there, which pairing leaves as it is.
- */
-function freeMatches(wanted: Side, drawn: Side, overlaps: readonly ThreadOverlap[]): Match[] {
-  const matches: Match[] = [];
-  for (const o of overlaps) {
-    const width0 = o.to0 - o.from0;
-    const width1 = o.to1 - o.from1;
-    const opposed = width1 < 0;
-    const slope = o.offsetTo - o.offsetFrom;
-    const free0 = drawn.unpaired(o.drawnSpan, o.drawnPiece, o.from0, o.to0);
-    for (let i = 0; i < free0.length; i += 2) {
-      const a = o.from1 + ((free0[i] - o.from0) / width0) * width1;
-      const b = o.from1 + ((free0[i + 1] - o.from0) / width0) * width1;
-      const free1 = wanted.unpaired(o.wantedSpan, o.wantedPiece, opposed ? b : a, opposed ? a : b);
-      for (let j = 0; j < free1.length; j += 2) {
-        const s = (free1[j] - o.from1) / width1;
-        const t = (free1[j + 1] - o.from1) / width1;
-        const low = Math.max(0, Math.min(s, t));
-        const high = Math.min(1, Math.max(s, t));
-        if (!(high > low)) continue;
-        matches.push({
-          overlap: o,
-          from0: o.from0 + width0 * low,
-          to0: o.from0 + width0 * high,
-          from1: free1[j],
-          to1: free1[j + 1],
-          lengthMm: (high - low) * width0 * drawn.pieceLength(o.drawnPiece),
-          deviation: Math.max(Math.abs(o.offsetFrom + slope * low), Math.abs(o.offsetFrom + slope * high)),
-        });
+class Matcher {
+  /** Largest deviation paired. */
+  deviation = 0;
+  /** Opposite parts that are free on both sides; from1 < to1. */
+  private readonly matches: number[] = [];
+
+  constructor(
+    private readonly wanted: Side,
+    private readonly drawn: Side,
+    private readonly table: OverlapTable,
+  ) {}
+
+  /**
+   * Gathers what is free along a thread; returns its length. Overlaps of one thread may share a little
+   * of a piece at its corners, which pairing leaves as it is.
+   */
+  gatherFree(overlaps: readonly number[]): number {
+    const { table, wanted, drawn } = this;
+    this.matches.length = 0;
+    let freeMm = 0;
+    for (const row of overlaps) {
+      const from0 = table.from0[row];
+      const from1 = table.from1[row];
+      const width0 = table.to0[row] - from0;
+      const width1 = table.to1[row] - from1;
+      const piece0 = table.drawnPiece[row];
+      const piece1 = table.wantedPiece[row];
+      if (drawn.isPieceFree(piece0) && wanted.isPieceFree(piece1)) {
+        const [low, high] = width1 < 0 ? [table.to1[row], from1] : [from1, table.to1[row]];
+        this.addMatch(row, 0, 1, low, high);
+        freeMm += width0 * drawn.pieceLength(piece0);
+        continue;
+      }
+      const free0 = drawn.unpaired(table.drawnSpan[row], piece0, from0, table.to0[row]);
+      for (let i = 0; i < free0.length; i += 2) {
+        const a = from1 + ((free0[i] - from0) / width0) * width1;
+        const b = from1 + ((free0[i + 1] - from0) / width0) * width1;
+        const free1 = wanted.unpaired(table.wantedSpan[row], piece1, Math.min(a, b), Math.max(a, b));
+        for (let j = 0; j < free1.length; j += 2) {
+          const s = (free1[j] - from1) / width1;
+          const t = (free1[j + 1] - from1) / width1;
+          const low = Math.max(0, Math.min(s, t));
+          const high = Math.min(1, Math.max(s, t));
+          if (!(high > low)) continue;
+          this.addMatch(row, low, high, free1[j], free1[j + 1]);
+          freeMm += (high - low) * width0 * drawn.pieceLength(piece0);
+        }
       }
     }
+    return freeMm;
   }
-  return matches;
+
+  pairGathered(): void {
+    const { table, wanted, drawn, matches } = this;
+    for (let m = 0; m < matches.length; m += FIELDS) {
+      const row = matches[m];
+      const deviation = matches[m + 5];
+      drawn.pair(table.drawnSpan[row], table.drawnPiece[row], matches[m + 1], matches[m + 2], deviation);
+      wanted.pair(table.wantedSpan[row], table.wantedPiece[row], matches[m + 3], matches[m + 4], deviation);
+      if (deviation > this.deviation) this.deviation = deviation;
+    }
+  }
+
+  private addMatch(row: number, low: number, high: number, from1: number, to1: number): void {
+    const { table } = this;
+    const from0 = table.from0[row];
+    const width0 = table.to0[row] - from0;
+    const offset = table.offsetFrom[row];
+    const slope = table.offsetTo[row] - offset;
+    const deviation = Math.max(Math.abs(offset + slope * low), Math.abs(offset + slope * high));
+    this.matches.push(row, from0 + width0 * low, from0 + width0 * high, from1, to1, deviation);
+  }
 }

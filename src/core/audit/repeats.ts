@@ -1,5 +1,8 @@
+import { LINE } from '../geometry/segments.js';
+import { BoxIndex } from './boxIndex.js';
 import { addInterval, type Intervals } from './intervals.js';
 import { isNear, visitPieces } from './nearness.js';
+import { deviationOf } from './sameSegment.js';
 import type { Side } from './side.js';
 import { findOverlap, newOverlap } from './sideBySide.js';
 import { type Stretch, unpairedStretches } from './stretches.js';
@@ -23,11 +26,12 @@ export function excuseRepeats(wanted: Side, drawn: Side, tolerances: Tolerances)
   for (let pass = 0; pass < 2; pass++) {
     const stretches = unpairedStretches(wanted, 0);
     if (stretches.length === 0) return;
+    const paired = new PairedSpans(wanted);
     const excuses: { span: number; piece: number; parts: Intervals }[] = [];
     for (const stretch of stretches) {
       for (let k = 0; k < stretch.piece.length; k++) {
         if (pass === 1 && !isDrawnNear(stretch, k, drawn, tolerances)) continue;
-        const parts = repeatedParts(wanted, stretch, k, tolerances);
+        const parts = repeatedParts(paired, stretch, k, tolerances);
         if (parts.length > 0) excuses.push({ span: stretch.span[k], piece: stretch.piece[k], parts });
       }
     }
@@ -47,7 +51,7 @@ function isDrawnNear(stretch: Stretch, k: number, drawn: Side, tolerances: Toler
 }
 
 /** The fractions of part k's piece, within the part, that repeat something paired. */
-function repeatedParts(side: Side, stretch: Stretch, k: number, tolerances: Tolerances): Intervals {
+function repeatedParts(paired: PairedSpans, stretch: Stretch, k: number, tolerances: Tolerances): Intervals {
   const parts: Intervals = [];
   const [from, to] = [stretch.from[k], stretch.to[k]];
   const accept = (low: number, high: number): boolean => {
@@ -56,17 +60,27 @@ function repeatedParts(side: Side, stretch: Stretch, k: number, tolerances: Tole
     if (b > a) addInterval(parts, a, b, 0);
     return parts.length === 2 && parts[0] <= from && parts[1] >= to;
   };
-  visitPairedBeside(side, stretch.piece[k], stretch.pen, tolerances.repeatMm, EXCUSE_COSINE, isOther, accept);
+  visitPairedBeside(
+    paired,
+    stretch.piece[k],
+    stretch.pen,
+    tolerances.repeatMm,
+    EXCUSE_COSINE,
+    isOther,
+    accept,
+  );
   return parts;
 }
 
 /**
  * The length that is drawn again on a place where something is drawn already: paired wanted lines beside
  * others that are paired as well, each pair counted once. Lines that run together for less than ten
- * tolerances merely meet or cross, unless that is the whole of them.
+ * tolerances merely meet or cross, unless that is the whole of them. Of curves that were paired whole,
+ * only those are seen that repeat each other whole.
  */
 export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
   const { spans, lines } = wanted;
+  const paired = new PairedSpans(wanted);
   let sum = 0;
   for (let chain = 0; chain < lines.count; chain++) {
     let together = 0;
@@ -77,7 +91,8 @@ export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
       together = 0;
     };
     for (let span = spans.firstOfChain[chain]; span < spans.firstOfChain[chain + 1]; span++) {
-      if (wanted.touched[span] === 0 || !hasCompany(wanted, span, tolerances.repeatMm)) {
+      const company = wanted.touched[span] === 1 ? companyOf(paired, span, tolerances.repeatMm) : 'none';
+      if (company === 'none') {
         close();
         whole = false;
         continue;
@@ -85,9 +100,8 @@ export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
       const first = wanted.flatten(span);
       for (let v = first; v < first + wanted.pieceCount(span); v++) {
         const length = wanted.pieceLength(v);
-        const parts = againParts(wanted, span, v, lines.pen[chain], tolerances);
-        const full = parts.length === 2 && parts[0] <= 1e-9 && parts[1] >= 1 - 1e-9;
-        if (full) {
+        const parts = company === 'twin' ? [0, 1] : againParts(paired, span, v, lines.pen[chain], tolerances);
+        if (parts.length === 2 && parts[0] <= 1e-9 && parts[1] >= 1 - 1e-9) {
           together += length;
           continue;
         }
@@ -109,24 +123,30 @@ export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
   return sum;
 }
 
-/** Whether the box of a span is touched by any other paired span's but those it simply goes on from. */
-function hasCompany(side: Side, span: number, reach: number): boolean {
+/**
+ * What lies about a paired span: nothing that it could repeat; something to compare it with piece by
+ * piece; or an earlier segment that it repeats whole.
+ */
+function companyOf(paired: PairedSpans, span: number, reach: number): 'none' | 'some' | 'twin' {
+  const { side } = paired;
   const { boxes, chain, segment } = side.spans;
+  const { segments } = side.lines;
+  const own = segment[span];
+  if (segments.kind[own] === LINE) return 'some';
   const pen = side.penOf(span);
   const o = 4 * span;
-  let found = false;
-  side.index.visit(
-    boxes[o] - reach,
-    boxes[o + 1] - reach,
-    boxes[o + 2] + reach,
-    boxes[o + 3] + reach,
-    (w) => {
-      const joined = chain[w] === chain[span] && Math.abs(segment[w] - segment[span]) <= 1;
-      if (w === span || side.touched[w] === 0 || side.penOf(w) !== pen) return false;
-      found = !joined || foldsBack(side, segment[w], segment[span]);
-      return found;
-    },
-  );
+  let found: 'none' | 'some' | 'twin' = 'none';
+  paired.visit(boxes[o] - reach, boxes[o + 1] - reach, boxes[o + 2] + reach, boxes[o + 3] + reach, (w) => {
+    const other = segment[w];
+    if (other === own || side.penOf(w) !== pen) return false;
+    if (side.wholeSegment[own] === 1 && side.wholeSegment[other] === 1 && segments.kind[other] !== LINE) {
+      if (other < own && deviationOf(segments, other, segments, own, reach) <= reach) found = 'twin';
+      return found === 'twin';
+    }
+    const joined = chain[w] === chain[span] && Math.abs(other - own) <= 1;
+    if (!joined || foldsBack(side, other, own)) found = 'some';
+    return false;
+  });
   return found;
 }
 
@@ -142,11 +162,17 @@ function foldsBack(side: Side, i: number, j: number): boolean {
   return dot < 0 && 4 * dot * dot > (ax * ax + ay * ay) * (bx * bx + by * by);
 }
 
-function againParts(side: Side, span: number, v: number, pen: number, tolerances: Tolerances): Intervals {
-  const own = side.pairedParts(span, v, 0, 1);
+function againParts(
+  paired: PairedSpans,
+  span: number,
+  v: number,
+  pen: number,
+  tolerances: Tolerances,
+): Intervals {
+  const own = paired.side.pairedParts(span, v, 0, 1);
   const parts: Intervals = [];
   if (own.length === 0) return parts;
-  visitPairedBeside(side, v, pen, tolerances.repeatMm, PARALLEL_COSINE, isEarlier, (low, high) => {
+  visitPairedBeside(paired, v, pen, tolerances.repeatMm, PARALLEL_COSINE, isEarlier, (low, high) => {
     for (let i = 0; i < own.length; i += 2) {
       const from = Math.max(low, own[i]);
       const to = Math.min(high, own[i + 1]);
@@ -165,9 +191,35 @@ function isEarlier(v: number, w: number): boolean {
   return w < v;
 }
 
+/** The spans of a side of which something is paired, for searching. */
+class PairedSpans {
+  private readonly index: BoxIndex;
+  /** The span of each box; null where all are paired. */
+  private readonly spanOf: number[] | null;
+
+  constructor(readonly side: Side) {
+    const { boxes, count } = side.spans;
+    const spans: number[] = [];
+    for (let span = 0; span < count; span++) if (side.touched[span] === 1) spans.push(span);
+    this.spanOf = spans.length === count ? null : spans;
+    if (this.spanOf === null) {
+      this.index = side.index;
+      return;
+    }
+    const own = new Float64Array(4 * spans.length);
+    for (let k = 0; k < own.length; k++) own[k] = boxes[4 * spans[k >> 2] + (k & 3)];
+    this.index = new BoxIndex(own);
+  }
+
+  visit(minX: number, minY: number, maxX: number, maxY: number, visit: (span: number) => boolean): void {
+    const { spanOf } = this;
+    this.index.visit(minX, minY, maxX, maxY, spanOf === null ? visit : (k) => visit(spanOf[k]));
+  }
+}
+
 /** Calls `accept` with the fractions of piece v beside which other paired pieces run, until it returns true. */
 function visitPairedBeside(
-  side: Side,
+  paired: PairedSpans,
   v: number,
   pen: number,
   reach: number,
@@ -175,23 +227,23 @@ function visitPairedBeside(
   counts: (v: number, w: number) => boolean,
   accept: (from: number, to: number) => boolean,
 ): void {
+  const { side } = paired;
   const o = newOverlap();
   const ax = side.x[v];
   const ay = side.y[v];
   const bx = side.x[v + 1];
   const by = side.y[v + 1];
-  visitPieces(side, pen, ax, ay, bx, by, reach, (w, span) => {
-    if (side.touched[span] === 0 || !counts(v, w)) return false;
+  const beside = (w: number, span: number): boolean => {
+    if (!counts(v, w)) return false;
     const { x, y } = side;
     if (!findOverlap(ax, ay, bx, by, x[w], y[w], x[w + 1], y[w + 1], reach, leastCosine, o)) return false;
-    const low = Math.min(o.from1, o.to1);
-    const high = Math.max(o.from1, o.to1);
-    const paired = side.pairedParts(span, w, low, high);
-    for (let i = 0; i < paired.length; i += 2) {
-      const s = o.from0 + ((paired[i] - o.from1) / (o.to1 - o.from1)) * (o.to0 - o.from0);
-      const t = o.from0 + ((paired[i + 1] - o.from1) / (o.to1 - o.from1)) * (o.to0 - o.from0);
+    const parts = side.pairedParts(span, w, Math.min(o.from1, o.to1), Math.max(o.from1, o.to1));
+    for (let i = 0; i < parts.length; i += 2) {
+      const s = o.from0 + ((parts[i] - o.from1) / (o.to1 - o.from1)) * (o.to0 - o.from0);
+      const t = o.from0 + ((parts[i + 1] - o.from1) / (o.to1 - o.from1)) * (o.to0 - o.from0);
       if (accept(Math.min(s, t), Math.max(s, t))) return true;
     }
     return false;
-  });
+  };
+  visitPieces(side, paired, pen, ax, ay, bx, by, reach, beside);
 }

@@ -8,6 +8,11 @@ import type { Tolerances } from './tolerances.js';
 
 const NOTHING: Intervals = [];
 
+/** How much of a piece is paired. */
+const FREE = 0;
+const PART = 1;
+const DONE = 2;
+
 /**
  * One of the two line sets, ready to be held against the other: its spans, their polylines (made when
  * first asked for), and which parts of them are paired already.
@@ -23,25 +28,36 @@ export class Side {
   readonly whole: Uint8Array;
   /** 1 where any of a span is paired. */
   readonly touched: Uint8Array;
+  /** 1 for each segment that was paired whole, unflattened. */
+  readonly wholeSegment: Uint8Array;
   x = new Float64Array(1024);
   y = new Float64Array(1024);
   private vertices = 0;
-  private pieceDone = new Uint8Array(1024);
+  private pieceState = new Uint8Array(1024);
   private readonly paired = new Map<number, Intervals>();
   private readonly firstVertex: Int32Array;
   private readonly pieces: Uint32Array;
   private readonly piecesLeft: Uint32Array;
   private boxIndex: BoxIndex | null = null;
 
+  /** @param wholeDeviation deviation of each segment that has a partner already, else −1. */
   constructor(
     readonly lines: LineSet,
+    wholeDeviation: Float64Array,
     private readonly tolerances: Tolerances,
   ) {
-    this.spans = cutToSpans(lines, tolerances.flatMm);
-    const { count } = this.spans;
+    this.spans = cutToSpans(lines, wholeDeviation, tolerances.flatMm);
+    const { count, segment } = this.spans;
     this.deviation = new Float64Array(count);
     this.whole = new Uint8Array(count);
     this.touched = new Uint8Array(count);
+    this.wholeSegment = Uint8Array.from(wholeDeviation, (deviation) => (deviation < 0 ? 0 : 1));
+    for (let span = 0; span < count; span++) {
+      const deviation = wholeDeviation[segment[span]];
+      if (deviation < 0) continue;
+      this.deviation[span] = deviation;
+      this.whole[span] = this.touched[span] = 1;
+    }
     this.firstVertex = new Int32Array(count).fill(-1);
     this.pieces = new Uint32Array(count);
     this.piecesLeft = new Uint32Array(count);
@@ -122,35 +138,32 @@ export class Side {
   }
 
   isPieceDone(v: number): boolean {
-    return this.pieceDone[v] === 1;
+    return this.pieceState[v] === DONE;
+  }
+
+  isPieceFree(v: number): boolean {
+    return this.pieceState[v] === FREE;
   }
 
   /** The parts of piece v of a span from fraction `from` to `to` that are not paired yet. */
   unpaired(span: number, v: number, from: number, to: number): Intervals {
-    if (this.whole[span] === 1 || this.pieceDone[v] === 1) return NOTHING;
+    if (this.whole[span] === 1 || this.pieceState[v] === DONE) return NOTHING;
     const list = this.paired.get(v);
     return list === undefined ? [from, to] : gapsIn(list, from, to);
   }
 
   /** The parts of piece v of a span from fraction `from` to `to` that are paired. */
   pairedParts(span: number, v: number, from: number, to: number): Intervals {
-    if (this.whole[span] === 1 || this.pieceDone[v] === 1) return [from, to];
+    if (this.whole[span] === 1 || this.pieceState[v] === DONE) return [from, to];
     const list = this.paired.get(v);
     return list === undefined ? NOTHING : partsIn(list, from, to);
-  }
-
-  /** Marks a span as paired without flattening it. */
-  pairSpan(span: number, deviation: number): void {
-    this.whole[span] = 1;
-    this.touched[span] = 1;
-    if (deviation > this.deviation[span]) this.deviation[span] = deviation;
   }
 
   /** Marks part of a piece as paired. Gaps shorter than a hair close. */
   pair(span: number, v: number, from: number, to: number, deviation: number): void {
     if (deviation > this.deviation[span]) this.deviation[span] = deviation;
     this.touched[span] = 1;
-    if (this.pieceDone[v] === 1) return;
+    if (this.pieceState[v] === DONE) return;
     const slack = this.tolerances.hairMm / this.pieceLength(v);
     const low = from <= slack ? 0 : from;
     const high = to >= 1 - slack ? 1 : to;
@@ -158,13 +171,14 @@ export class Side {
       const list = this.paired.get(v);
       if (list === undefined) {
         this.paired.set(v, [low, high]);
+        this.pieceState[v] = PART;
         return;
       }
       addInterval(list, low, high, slack);
       if (list.length > 2 || list[0] > 0 || list[1] < 1) return;
       this.paired.delete(v);
     }
-    this.pieceDone[v] = 1;
+    this.pieceState[v] = DONE;
     this.piecesLeft[span]--;
     if (this.piecesLeft[span] === 0) this.whole[span] = 1;
   }
@@ -174,7 +188,7 @@ export class Side {
     if (v === this.x.length) {
       this.x = doubled(this.x, new Float64Array(2 * v));
       this.y = doubled(this.y, new Float64Array(2 * v));
-      this.pieceDone = doubled(this.pieceDone, new Uint8Array(2 * v));
+      this.pieceState = doubled(this.pieceState, new Uint8Array(2 * v));
     }
     this.x[v] = x;
     this.y[v] = y;

@@ -50,9 +50,15 @@ export function findOverlap(
 ): boolean {
   let ex = ax1 - ax;
   let ey = ay1 - ay;
+  const squareA = ex * ex + ey * ey;
+  // All of b beyond reach on one side of a's line: most pairs end here.
+  const limit = reach * reach * squareA;
+  const side0 = (bx - ax) * ey - (by - ay) * ex;
+  const side1 = (bx1 - ax) * ey - (by1 - ay) * ex;
+  if (side0 > 0 === side1 > 0 && side0 * side0 > limit && side1 * side1 > limit) return false;
   let fx = bx1 - bx;
   let fy = by1 - by;
-  const lengthA = Math.sqrt(ex * ex + ey * ey);
+  const lengthA = Math.sqrt(squareA);
   const lengthB = Math.sqrt(fx * fx + fy * fy);
   if (!(lengthA > 0 && lengthB > 0)) return false;
   ex /= lengthA;

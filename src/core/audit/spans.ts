@@ -20,16 +20,24 @@ export interface Spans {
   readonly boxes: Float64Array;
 }
 
-/** A segment is cut where it is longer than so many times the mean: this adds a quarter more at most. */
-const LONGEST = 4;
+/**
+ * Cutting long segments adds a quarter more spans at most, or so many per segment and in all: a small
+ * drawing of long curves is worth more cuts.
+ */
+const MORE_SHARE = 1 / 4;
+const MORE_EACH = 4;
+const MORE_IN_ALL = 200_000;
+/** Straight pieces of a curve in one span, about. */
+const PIECES = 8;
 
 /**
  * Cuts the segments of all chains so that no box is much longer than the others: a long diagonal box
- * would answer every search. O(segments).
+ * would answer every search. Curves that have no partner yet (`deviation` below 0) will be flattened,
+ * and are cut to a few pieces each. O(segments).
  */
-export function cutToSpans(lines: LineSet, flatMm: number): Spans {
+export function cutToSpans(lines: LineSet, deviation: Float64Array, flatMm: number): Spans {
   const { segments, first, dot } = lines;
-  const parts = partsOfSegments(lines);
+  const parts = partsOfSegments(lines, deviation, flatMm);
   const firstOfSegment = new Uint32Array(segments.count + 1);
   for (let i = 0; i < segments.count; i++) firstOfSegment[i + 1] = firstOfSegment[i] + parts[i];
   const count = firstOfSegment[segments.count];
@@ -51,7 +59,7 @@ export function cutToSpans(lines: LineSet, flatMm: number): Spans {
         t0[at] = k / parts[i];
         t1[at] = (k + 1) / parts[i];
         spanBox(segments, i, t0[at], t1[at], flatMm, box);
-        boxes.set(box, 4 * at);
+        for (let j = 0; j < 4; j++) boxes[4 * at + j] = box[j];
         at++;
       }
     }
@@ -60,7 +68,7 @@ export function cutToSpans(lines: LineSet, flatMm: number): Spans {
   return { count, segment, t0, t1, chain, firstOfChain, firstOfSegment, boxes };
 }
 
-function partsOfSegments(lines: LineSet): Uint32Array {
+function partsOfSegments(lines: LineSet, deviation: Float64Array, flatMm: number): Uint32Array {
   const { segments, first, dot } = lines;
   const parts = new Uint32Array(segments.count);
   const size = new Float64Array(segments.count);
@@ -75,9 +83,37 @@ function partsOfSegments(lines: LineSet): Uint32Array {
       counted++;
     }
   }
-  const longest = (LONGEST * total) / Math.max(1, counted);
-  for (let i = 0; i < segments.count; i++) parts[i] = size[i] > 0 ? Math.ceil(size[i] / longest) : 0;
+  const more = Math.max(1, counted * MORE_SHARE, Math.min(counted * MORE_EACH, MORE_IN_ALL));
+  const longest = total / more;
+  for (let i = 0; i < segments.count; i++) {
+    if (size[i] === 0) continue;
+    const byLength = isUpright(segments, i) ? 1 : Math.ceil(size[i] / longest);
+    const byPieces = deviation[i] < 0 ? Math.ceil(roughPieces(segments, i, flatMm) / PIECES) : 1;
+    parts[i] = Math.max(byLength, byPieces);
+  }
   return parts;
+}
+
+/** Whether a segment is a line along an axis: its box is as narrow as it is, however long. */
+function isUpright({ kind, offset, data: d }: Segments, i: number): boolean {
+  const o = offset[i];
+  return kind[i] === LINE && (d[o] === d[o + 2] || d[o + 1] === d[o + 3]);
+}
+
+/** About how many pieces a segment is flattened to. */
+function roughPieces(segments: Segments, i: number, flatMm: number): number {
+  const d = segments.data;
+  const o = segments.offset[i];
+  if (segments.kind[i] === LINE) return 1;
+  if (segments.kind[i] === ARC) {
+    const radius = Math.max(Math.abs(d[o + 6]) + Math.abs(d[o + 8]), Math.abs(d[o + 7]) + Math.abs(d[o + 9]));
+    return Math.abs(d[o + 11]) * Math.sqrt(radius / (8 * flatMm)) + 1;
+  }
+  const bend = Math.max(
+    Math.abs(d[o] - 2 * d[o + 4] + d[o + 6]) + Math.abs(d[o + 1] - 2 * d[o + 5] + d[o + 7]),
+    Math.abs(d[o + 4] - 2 * d[o + 6] + d[o + 2]) + Math.abs(d[o + 5] - 2 * d[o + 7] + d[o + 3]),
+  );
+  return Math.sqrt((0.75 * bend) / flatMm) + 1;
 }
 
 /** At least the length, and 0 only where the segment is a single point. */

@@ -1,48 +1,48 @@
-import { pointAt } from '../geometry/evaluate.js';
-import { ARC, LINE, type Segments } from '../geometry/segments.js';
-import type { Side } from './side.js';
+import { LINE, type Segments } from '../geometry/segments.js';
+import type { LineSet } from './lineSet.js';
+import { deviationOf } from './sameSegment.js';
 
 /** Cells of the grid of midpoints, in tolerances: wide enough that most look-ups see one cell. */
 const CELL = 16;
-/** Places between the ends at which arcs are compared. */
-const ARC_SAMPLES = 6;
+
+/** How far each segment deviates from its partner on the other side; −1 where it has none. */
+export interface WholePairs {
+  readonly wanted: Float64Array;
+  readonly drawn: Float64Array;
+}
 
 /**
  * Pairs drawn segments with wanted ones of the same pen that are the same from end to end, in either
  * direction, within `sameMm`; the closest first where several are. Most of a drawing is settled here
- * without being flattened. Returns the largest deviation.
- *
- * Lines and cubics are compared by their control points: no point of one is farther from the point of
- * the other with the same parameter than the farthest pair of control points (convex hull property).
- * Arcs are compared at six places between the ends: the difference of two arcs with nearly the same
- * angles is nearly a + b·cos + c·sin, which three places decide.
+ * without being flattened. Dots and lines of no length are left to others.
  *
  * Segments are hashed by the middle of their ends: O(segments), where few share a middle.
  */
-export function pairWholeSegments(wanted: Side, drawn: Side, sameMm: number): number {
+export function pairWholeSegments(wanted: LineSet, drawn: LineSet, sameMm: number): WholePairs {
   const grid = new MiddleGrid(wanted, sameMm);
-  let largest = 0;
-  const { lines, spans } = drawn;
-  for (let c = 0; c < lines.count; c++) {
-    if (lines.dot[c]) continue;
-    for (let i = lines.first[c]; i < lines.first[c + 1]; i++) {
-      if (spans.firstOfSegment[i] === spans.firstOfSegment[i + 1]) continue;
-      const partner = grid.takeClosest(lines.segments, i, lines.pen[c]);
+  const pairs: WholePairs = {
+    wanted: new Float64Array(wanted.segments.count).fill(-1),
+    drawn: new Float64Array(drawn.segments.count).fill(-1),
+  };
+  for (let c = 0; c < drawn.count; c++) {
+    if (drawn.dot[c]) continue;
+    for (let i = drawn.first[c]; i < drawn.first[c + 1]; i++) {
+      if (isPoint(drawn.segments, i)) continue;
+      const partner = grid.takeClosest(drawn.segments, i, drawn.pen[c]);
       if (partner < 0) continue;
-      pairAll(drawn, i, grid.deviation);
-      pairAll(wanted, partner, grid.deviation);
-      if (grid.deviation > largest) largest = grid.deviation;
+      pairs.wanted[partner] = grid.deviation;
+      pairs.drawn[i] = grid.deviation;
     }
   }
-  return largest;
+  return pairs;
 }
 
-function pairAll(side: Side, segment: number, deviation: number): void {
-  const { firstOfSegment } = side.spans;
-  for (let k = firstOfSegment[segment]; k < firstOfSegment[segment + 1]; k++) side.pairSpan(k, deviation);
+function isPoint({ kind, offset, data: d }: Segments, i: number): boolean {
+  const o = offset[i];
+  return kind[i] === LINE && d[o] === d[o + 2] && d[o + 1] === d[o + 3];
 }
 
-/** The segments of a side in buckets, by the middle of their ends. */
+/** The segments of a line set in buckets, by the middle of their ends. */
 class MiddleGrid {
   /** How far the segment taken last deviates. */
   deviation = 0;
@@ -56,10 +56,9 @@ class MiddleGrid {
   private bestBucket = 0;
 
   constructor(
-    side: Side,
+    lines: LineSet,
     private readonly sameMm: number,
   ) {
-    const { lines, spans } = side;
     this.segments = lines.segments;
     this.cell = CELL * sameMm;
     const { count } = this.segments;
@@ -70,9 +69,10 @@ class MiddleGrid {
     this.pen = new Uint32Array(count);
     const { offset, data: d } = this.segments;
     for (let c = 0; c < lines.count; c++) {
+      if (lines.dot[c]) continue;
       for (let i = lines.first[c]; i < lines.first[c + 1]; i++) {
         this.pen[i] = lines.pen[c];
-        if (spans.firstOfSegment[i] === spans.firstOfSegment[i + 1]) continue;
+        if (isPoint(this.segments, i)) continue;
         const o = offset[i];
         const bucket = this.bucketOf(
           Math.floor((d[o] + d[o + 2]) / 2 / this.cell),
@@ -125,57 +125,4 @@ class MiddleGrid {
     const mixed = Math.imul(ix, 0x9e3779b1) ^ Math.imul(iy, 0x85ebca6b);
     return (mixed ^ (mixed >>> 15)) & (this.head.length - 1);
   }
-}
-
-/** The largest distance of two segments taken as they run or reversed; infinite where it exceeds `limit`. */
-function deviationOf(a: Segments, i: number, b: Segments, j: number, limit: number): number {
-  if (a.kind[i] !== b.kind[j]) return Number.POSITIVE_INFINITY;
-  const forward = deviationAlong(a, i, b, j, false, limit);
-  return forward <= limit ? forward : deviationAlong(a, i, b, j, true, limit);
-}
-
-function deviationAlong(
-  a: Segments,
-  i: number,
-  b: Segments,
-  j: number,
-  reversed: boolean,
-  limit: number,
-): number {
-  const da = a.data;
-  const db = b.data;
-  const oa = a.offset[i];
-  const ob = b.offset[j];
-  let worst = Math.max(
-    distance(da, oa, db, reversed ? ob + 2 : ob),
-    distance(da, oa + 2, db, reversed ? ob : ob + 2),
-  );
-  if (!(worst <= limit)) return Number.POSITIVE_INFINITY;
-  if (a.kind[i] === LINE) return worst;
-  if (a.kind[i] === ARC) return Math.max(worst, arcDeviation(a, i, b, j, reversed));
-  worst = Math.max(
-    worst,
-    distance(da, oa + 4, db, reversed ? ob + 6 : ob + 4),
-    distance(da, oa + 6, db, reversed ? ob + 4 : ob + 6),
-  );
-  return worst <= limit ? worst : Number.POSITIVE_INFINITY;
-}
-
-function arcDeviation(a: Segments, i: number, b: Segments, j: number, reversed: boolean): number {
-  const p = new Float64Array(2);
-  const q = new Float64Array(2);
-  let worst = 0;
-  for (let k = 1; k <= ARC_SAMPLES; k++) {
-    const t = k / (ARC_SAMPLES + 1);
-    pointAt(a, i, t, p);
-    pointAt(b, j, reversed ? 1 - t : t, q);
-    worst = Math.max(worst, distance(p, 0, q, 0));
-  }
-  return worst;
-}
-
-function distance(p: Float64Array, i: number, q: Float64Array, j: number): number {
-  const dx = p[i] - q[j];
-  const dy = p[i + 1] - q[j + 1];
-  return Math.sqrt(dx * dx + dy * dy);
 }
