@@ -3,7 +3,9 @@ import type { Step } from '../core/index.js';
 
 const DOING: Readonly<Record<Step['doing'], string>> = {
   network: 'building the network',
+  pairing: 'pairing odd vertices',
   improve: 'improving the order',
+  audit: 'writing and auditing',
 };
 
 const QUIET_MS = 700;

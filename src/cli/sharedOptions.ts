@@ -78,6 +78,7 @@ export function settingsOf(flags: NetworkFlags & Partial<SearchFlags>): Settings
     end: flags.end,
     pens: flags.pens,
     effort: flags.effort ?? d.effort,
+    seconds: null,
     bound: flags.bound ?? d.bound,
     seed: flags.seed ?? d.seed,
   };

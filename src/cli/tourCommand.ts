@@ -59,7 +59,7 @@ export function tourCommand(finish: (code: number) => void): Command {
 
 function orderAll(drawings: string[], flags: TourFlags): number {
   const outputsOf = planOutputs(drawings, flags);
-  const settings = settingsOf(flags);
+  const settings = { ...settingsOf(flags), seconds: flags.seconds ?? null };
   let worst: number = EXIT.done;
   for (const input of drawings) {
     try {
@@ -67,7 +67,6 @@ function orderAll(drawings: string[], flags: TourFlags): number {
         input,
         outputs: outputsOf(input),
         settings,
-        seconds: flags.seconds ?? null,
         showTravel: flags.showTravel ?? false,
         json: flags.json ?? false,
         quiet: flags.quiet ?? false,

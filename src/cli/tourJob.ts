@@ -23,7 +23,6 @@ export interface TourJob {
   /** Where to write; `-` is standard output. */
   readonly outputs: readonly string[];
   readonly settings: Settings;
-  readonly seconds: number | null;
   readonly showTravel: boolean;
   readonly json: boolean;
   readonly quiet: boolean;
@@ -49,22 +48,23 @@ export function outputKind(path: string): OutputKind | null {
 export function runTourJob(job: TourJob): void {
   const drawing = strokedDrawingFrom(readText(job.input), job.input);
   const progress = new ProgressLine(!job.quiet && process.stderr.isTTY === true);
-  const until = job.seconds === null ? Number.POSITIVE_INFINITY : performance.now() + 1000 * job.seconds;
   const { settings } = job;
+  const until = performance.now() + 1000 * (settings.seconds ?? Number.POSITIVE_INFINITY);
   const profile: MachineProfile = { ...PEN_ON_Z, snapMm: settings.snapMm, accuracyMm: settings.accuracyMm };
   const ordered = tour(drawing, settings, profile, {
     onProgress: (step) => progress.show(step),
     shouldStop: () => performance.now() > until,
   });
-  progress.clear();
 
   const written = new Map<OutputKind, Written>();
   const kinds = job.outputs.map((path) => outputKind(path) ?? 'svg');
   for (const kind of new Set<OutputKind>(['svg', ...kinds])) {
     if (kind !== 'json' && (kind !== 'svg' || kinds.includes('svg') || !kinds.includes('gcode'))) {
+      progress.show({ doing: 'audit', share: written.size / kinds.length, costMm: null });
       written.set(kind, writeAudited(ordered, kind, job.showTravel));
     }
   }
+  progress.clear();
   const audits = [...written.values()].map(({ audit }) => audit);
   const report = reportOf(ordered, audits, version());
   if (!report.audit.ok) throw refusal(report);

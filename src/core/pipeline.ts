@@ -55,6 +55,7 @@ export function orderDrawing(
     return buildNetwork(drawing, strokes, { ...settings, repeatToleranceMm: REPEAT_TOLERANCE_MM });
   });
   const tours = networks.map((network, pen) => {
+    hooks.onProgress?.({ doing: 'pairing', share: pen / networks.length, costMm: null });
     const last = pen === networks.length - 1;
     const task = {
       homeX,

@@ -18,6 +18,8 @@ export interface Settings {
   readonly pens: PenRule;
   /** Kicks for each end of a connector in the improvement of the tour. */
   readonly effort: number;
+  /** Cap on the search in seconds of wall time, null for none; kept by whoever gives `shouldStop`. */
+  readonly seconds: number | null;
   readonly bound: 'none' | 'quick';
   readonly seed: number;
 }
@@ -36,6 +38,7 @@ export const DEFAULT_SETTINGS: Settings = {
   end: 'home',
   pens: 'colour',
   effort: 10,
+  seconds: null,
   bound: 'quick',
   seed: 1,
 };
@@ -49,7 +52,7 @@ export interface Hooks {
 }
 
 export interface Step {
-  readonly doing: 'network' | 'improve';
+  readonly doing: 'network' | 'pairing' | 'improve' | 'audit';
   readonly share: number;
   readonly costMm: number | null;
 }
