@@ -5,10 +5,11 @@ import type { Tolerances } from './tolerances.js';
 
 /** Pieces that differ in direction by more than 60° are not paired. */
 const LEAST_COSINE = 0.5;
-/** Of the overlaps of a drawn piece the longest are kept. */
+/** Overlaps of a drawn piece that are kept, where many wanted lines lie about it. */
 const MOST_OVERLAPS = 48;
-/** So many that cover most of a piece are enough to choose from. */
-const ENOUGH = 256;
+/** Of a crowd of spans first about this many are looked at; so many good overlaps among them will do. */
+const SAMPLE = 128;
+const ENOUGH = 16;
 
 /** Finds where unpaired drawn pieces run beside unpaired wanted ones of the same pen. */
 export class OverlapFinder {
@@ -62,28 +63,50 @@ export class OverlapFinder {
   /** The rows of the overlaps of piece v of that span, in order along it. */
   along(span: number, v: number): number[] {
     const { near, found, table } = this;
-    const c = this.drawn.spans.chain[span];
-    const start = near.length > ENOUGH ? mixed(c, 0, this.round) % near.length : 0;
     found.count = this.good = 0;
-    for (let k = 0; k < near.length && this.good < ENOUGH; k++) {
-      this.compare(span, v, near[(start + k) % near.length]);
+    if (near.length <= 2 * SAMPLE) {
+      for (const w of near) this.compare(span, v, w);
+    } else {
+      const c = this.drawn.spans.chain[span];
+      const share = (SAMPLE / near.length) * 0x100000000;
+      for (const w of near) if (this.rank(c, w) < share) this.compare(span, v, w);
+      if (this.good >= ENOUGH) this.crowded = true;
+      else for (const w of near) if (this.rank(c, w) >= share) this.compare(span, v, w);
     }
     const rows: number[] = [];
-    if (found.count <= MOST_OVERLAPS && this.good < ENOUGH) {
-      for (let i = 0; i < found.count; i++) rows.push(table.addRow(found, i));
-    } else {
-      this.crowded = true;
-      // Chains of equals prefer each other differently, so that not all choose the same few.
-      const weight = new Float64Array(found.count);
-      for (let i = 0; i < found.count; i++) {
-        const other = this.wanted.spans.chain[found.wantedSpan[i]];
-        weight[i] = (found.to0[i] - found.from0[i]) * (1 - mixed(c, other, this.round) / 0x800000000);
-      }
-      const order = Array.from(weight, (_, i) => i).sort((a, b) => weight[b] - weight[a]);
-      for (const i of order.slice(0, MOST_OVERLAPS)) rows.push(table.addRow(found, i));
-    }
+    if (found.count <= MOST_OVERLAPS) for (let i = 0; i < found.count; i++) rows.push(table.addRow(found, i));
+    else this.addBestChains(span, rows);
     if (rows.length > 1) rows.sort((a, b) => table.from0[a] - table.from0[b] || a - b);
     return rows;
+  }
+
+  /** Keeps the overlaps with the wanted chains that run beside the piece the longest. */
+  private addBestChains(span: number, rows: number[]): void {
+    const { found, table, wanted } = this;
+    this.crowded = true;
+    const c = this.drawn.spans.chain[span];
+    const rowsOfChain = new Map<number, number[]>();
+    const shareOfChain = new Map<number, number>();
+    for (let i = 0; i < found.count; i++) {
+      const w = found.wantedSpan[i];
+      const other = wanted.spans.chain[w];
+      const list = rowsOfChain.get(other);
+      if (list === undefined) rowsOfChain.set(other, [i]);
+      else list.push(i);
+      // Chains of equals prefer each other differently, so that not all choose the same few.
+      const share = (found.to0[i] - found.from0[i]) * (1 - this.rank(c, w) / 0x800000000);
+      shareOfChain.set(other, (shareOfChain.get(other) ?? 0) + share);
+    }
+    const chains = [...shareOfChain].sort((a, b) => b[1] - a[1] || a[0] - b[0]);
+    for (const [chain] of chains) {
+      if (rows.length >= MOST_OVERLAPS) break;
+      for (const i of rowsOfChain.get(chain) ?? []) rows.push(table.addRow(found, i));
+    }
+  }
+
+  /** A number in [0, 2³²) as if drawn at random for every pair of chains. */
+  private rank(drawnChain: number, wantedSpan: number): number {
+    return mixed(drawnChain, this.wanted.spans.chain[wantedSpan], this.round);
   }
 
   /** Whether a wanted span of one piece lies beyond reach on one side of drawn piece v. */
@@ -134,7 +157,7 @@ export class OverlapFinder {
   }
 }
 
-/** A number in [0, 2³²) that looks drawn at random for every triple. */
+/** Three numbers stirred into one of 32 bits. */
 function mixed(a: number, b: number, c: number): number {
   let h = Math.imul(a + 1, 0x9e3779b1) ^ Math.imul(b + 1, 0x85ebca6b) ^ Math.imul(c + 1, 0xc2b2ae35);
   h = Math.imul(h ^ (h >>> 16), 0x7feb352d);
