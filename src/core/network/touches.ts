@@ -5,6 +5,12 @@ import type { Pieces } from './pieces.js';
 import { snapMarks } from './snap.js';
 
 /**
+ * An end just at the snap distance is met as an end: otherwise the last bit of rounding would decide, and
+ * the stroke could be split a hair before its own end.
+ */
+const ROUNDING = 1e-9;
+
+/**
  * Adds a split to `marks` wherever a stroke's end lies within `snapMm` of another stroke's interior, or
  * of its own further along: the place of the curve nearest to the end, found on the exact curve.
  *
@@ -67,7 +73,7 @@ function reachesNearEnd(
   const near = (o: number) => {
     const dx = segments.data[o] - x;
     const dy = segments.data[o + 1] - y;
-    return dx * dx + dy * dy <= snapMm * snapMm;
+    return Math.sqrt(dx * dx + dy * dy) <= snapMm * (1 + ROUNDING);
   };
   const holdsStart = pieces.segment[from] === start && pieces.t0[from] === 0;
   const holdsEnd = pieces.segment[to] === last && pieces.t1[to] === 1;

@@ -3,6 +3,7 @@ import type { Drawing } from '../../../src/core/drawing/drawing.ts';
 import { buildNetwork } from '../../../src/core/network/buildNetwork.ts';
 import { fewestRuns } from '../../../src/core/network/fewestRuns.ts';
 import type { Network, NetworkOptions } from '../../../src/core/network/network.ts';
+import { createRandom } from '../../../src/core/structures/random.ts';
 import { drawingOf, type StrokeSpec } from '../../support/drawings.ts';
 
 const OPTIONS: NetworkOptions = {
@@ -132,6 +133,27 @@ describe('junctions', () => {
     ]);
     expect([n.edgeCount, n.componentCount]).toEqual([2, 1]);
     expect(n.oddVertices.length).toBe(2);
+  });
+
+  test('hatching at a pitch of just the snap distance, at any angle, is never split at its own ends', () => {
+    const random = createRandom(8);
+    for (let k = 0; k < 400; k++) {
+      const angle = 6.28 * random();
+      const [c, s] = [Math.cos(angle), Math.sin(angle)];
+      const [x0, y0] = [20 + 10 * random(), 20 + 10 * random()];
+      const hatch = Array.from({ length: 12 }, (_, i): StrokeSpec => {
+        const [x, y] = [x0 - s * 0.05 * i, y0 + c * 0.05 * i];
+        return {
+          line: [
+            [x, y],
+            [x + 8 * c, y + 8 * s],
+          ],
+        };
+      });
+      const n = networkOf(hatch);
+      expect(n.edgeCount).toBe(12);
+      expect(Math.min(...n.edgeLengthMm)).toBeGreaterThan(7.9);
+    }
   });
 
   test('an end that only passes near the start of another snaps to that end and splits nothing', () => {
