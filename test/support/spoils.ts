@@ -1,7 +1,17 @@
 import { pointAt } from '../../src/core/geometry/evaluate.ts';
 import { ARC, CUBIC, LINE } from '../../src/core/geometry/segments.ts';
 import { randomBelow } from '../../src/core/structures/random.ts';
-import { type Chain, isClosed, lineSetOf, moved, polyline, type Segment, spanOf, startOf } from './chains.ts';
+import {
+  type Chain,
+  isClosed,
+  lineSetOf,
+  moved,
+  polyline,
+  reversed,
+  type Segment,
+  spanOf,
+  startOf,
+} from './chains.ts';
 import type { DrawnStroke } from './lineDrawings.ts';
 
 /**
@@ -236,6 +246,42 @@ const drawTravel: Spoil = (strokes, random) => {
   return replaced(strokes, i, joined).filter((s) => s.chain !== b);
 };
 
+/** Out and back from the middle of a stroke, no longer than a bridge. */
+const spur = withChain(
+  ['line', 'hatch'],
+  (chain, random, tau) => {
+    const angle = 6.28 * random();
+    const [head, tail] = [spanOf(chain.segments[0], 0, 0.5), spanOf(chain.segments[0], 0.5, 1)];
+    const [x, y] = tail.data;
+    const [dx, dy] = [3 * tau * Math.cos(angle), 3 * tau * Math.sin(angle)];
+    const out = { kind: LINE, data: [x, y, x + dx, y + dy] };
+    const back = { kind: LINE, data: [x + dx, y + dy, x, y] };
+    return [{ ...chain, segments: [head, out, back, tail, ...chain.segments.slice(1)] }];
+  },
+  (chain) => sizeOf(chain.segments[0]) > 1,
+);
+
+/** A stroke that leaves its way for a little and comes back. */
+const detour = withChain(
+  ['line', 'hatch'],
+  (chain, _, tau) => {
+    const segment = chain.segments[0];
+    const share = (8 * tau) / sizeOf(segment);
+    const [head, tail] = [spanOf(segment, 0, 0.5), spanOf(segment, 0.5 + share, 1)];
+    const [x0, y0, x1, y1] = [head.data[2], head.data[3], tail.data[0], tail.data[1]];
+    const [x, y] = [(x0 + x1 + y1 - y0) / 2, (y0 + y1 + x0 - x1) / 2];
+    const out = { kind: LINE, data: [x0, y0, x, y] };
+    const back = { kind: LINE, data: [x, y, x1, y1] };
+    return [{ ...chain, segments: [head, out, back, tail, ...chain.segments.slice(1)] }];
+  },
+  (chain) => sizeOf(chain.segments[0]) > 1,
+);
+
+/** There and back again in one run. */
+const retrace = withChain(LONG, (chain) => [
+  { ...chain, segments: [...chain.segments, ...reversed(chain).segments] },
+]);
+
 /** A curve replaced by its chord. */
 const straighten: Spoil = (strokes, random, tau) => {
   const i = pick(strokes, random, ['arc', 'cubic'], (c) => c.segments.some((s) => bulgeOf(s) > 2 * tau));
@@ -286,5 +332,8 @@ export const SPOILS: Readonly<Record<string, Spoil>> = {
   strayMark,
   drawTravel,
   straighten,
+  spur,
+  detour,
+  retrace,
   lattice,
 };

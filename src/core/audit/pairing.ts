@@ -1,10 +1,10 @@
 import type { OverlapTable } from './overlapTable.js';
 import type { Side } from './side.js';
 import { findThreads } from './threads.js';
-import { fringeMm, type Tolerances } from './tolerances.js';
+import type { Tolerances } from './tolerances.js';
 
-/** Crowds of hundreds of lines on one place are settled in rounds, as long as each does its share. */
-const LEAST_SHARE = 1 / 32;
+/** Crowds of hundreds of lines on one place are settled in rounds; few are ever needed. */
+const MOST_ROUNDS = 16;
 
 /**
  * Pairs what is drawn with what is wanted, point by point along their length: no point is used twice,
@@ -14,27 +14,26 @@ const LEAST_SHARE = 1 / 32;
  * The best threads go first. Among lines that all lie within the tolerance of each other any order
  * leaves nothing over. Where lines lie closer than two tolerances without all doing so, the length of
  * threads and the place of the corners decide; that is a choice, and could leave over what another
- * choice would not. Of a thread that is mostly used up, crumbs no longer than a fringe are left: they
+ * choice would not. Of a thread that is mostly used up, crumbs no longer than the tolerance are left: they
  * would make a line drawn once too often look as if it were there for a reason. Returns the largest
  * deviation.
  */
 export function pairAlongThreads(wanted: Side, drawn: Side, tolerances: Tolerances): number {
   let largest = 0;
-  let pairedMm = 0;
-  for (let round = 0; ; round++) {
+  for (let round = 0; round < MOST_ROUNDS; round++) {
     const { table, threads, crowded } = findThreads(wanted, drawn, tolerances, round);
     const matcher = new Matcher(wanted, drawn, table);
     let roundMm = 0;
     for (const { overlaps, lengthMm } of threads) {
       const freeMm = matcher.gatherFree(overlaps);
-      if (freeMm < Math.min(lengthMm / 2, fringeMm(0, tolerances))) continue;
+      if (freeMm < Math.min(lengthMm / 2, tolerances.matchMm)) continue;
       matcher.pairGathered();
       roundMm += freeMm;
     }
-    pairedMm += roundMm;
     largest = Math.max(largest, matcher.deviation);
-    if (!crowded || roundMm <= LEAST_SHARE * pairedMm) return largest;
+    if (!crowded || roundMm <= tolerances.hairMm) break;
   }
+  return largest;
 }
 
 /** Numbers of a match: row, from0, to0, from1, to1, deviation. */

@@ -260,6 +260,44 @@ describe('neighbours', () => {
   });
 });
 
+describe('crowds', () => {
+  // Circles about a circle: they touch two envelopes, where dozens run together within the tolerance.
+  const guilloche = Array.from({ length: 60 }, (_, i) => {
+    const angle = (2 * Math.PI * i) / 60;
+    return ellipseArc(50 + 12 * Math.cos(angle), 50 + 12 * Math.sin(angle), 9, 9, angle, 2 * Math.PI, 2);
+  });
+  // Lines through one point, each drawn in two halves.
+  const star = Array.from({ length: 200 }, (_, i) => {
+    const angle = (Math.PI * i) / 200;
+    const [c, s] = [20 * Math.cos(angle), 20 * Math.sin(angle)];
+    return polyline([
+      [50 - c, 50 - s],
+      [50 + c, 50 + s],
+    ]);
+  });
+  const halves = star.flatMap(({ segments: [line] }) => [
+    { pen: 0, segments: [spanOf(line, 0.5, 0)] },
+    { pen: 0, segments: [spanOf(line, 0.5, 1)] },
+  ]);
+
+  test('lines that run together for a while each keep their own', () => {
+    const drawn = guilloche.map((ring) => flattened(ring, 0.019));
+    expect(audit(guilloche, drawn, COARSE)).toMatchObject({ ok: true, missingMm: 0, extraMm: 0 });
+    expect(codes(audit(guilloche, drawn.slice(1), COARSE))).toEqual(['line-missing']);
+    expect(codes(audit(guilloche, [...drawn, drawn[7]], COARSE))).toEqual(['line-doubled']);
+  });
+
+  test('lines through one point', () => {
+    for (const options of [SVG, COARSE]) {
+      expect(audit(star, halves, options)).toMatchObject({ ok: true, missingMm: 0, extraMm: 0 });
+      const result = audit(star, halves.slice(1), options);
+      expect(codes(result)).toEqual(['line-missing']);
+      // Near the hub the neighbours, 0.016 rad away, lie within the repeat tolerance.
+      expect(Math.abs(result.missingMm - 20)).toBeLessThan(options === SVG ? 0.8 : 1.6);
+    }
+  });
+});
+
 describe('repeats', () => {
   const line = polyline([A, B]);
 
