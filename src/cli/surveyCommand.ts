@@ -13,6 +13,9 @@ Examples:
 
 Nothing is written. Exit codes: 0 done, 2 wrong usage, 3 not read or nothing to draw.`;
 
+/** Places listed under each finding. */
+const PLACES_SHOWN = 20;
+
 /** `fewlift survey`: looks into a drawing and writes nothing. */
 export function surveyCommand(finish: (code: number) => void): Command {
   const command = new Command('survey')
@@ -29,7 +32,7 @@ export function surveyCommand(finish: (code: number) => void): Command {
       const survey = surveyDrawing(drawing, settingsOf(flags), version());
       const text = flags.json
         ? JSON.stringify(survey, null, 2)
-        : [surveyTable(survey), ...findingLines(survey.findings)].join('\n');
+        : [surveyTable(survey), ...findingLines(survey.findings, PLACES_SHOWN)].join('\n');
       process.stdout.write(`${text}\n`);
       finish(EXIT.done);
     });

@@ -17,5 +17,7 @@ export interface Finding {
   readonly code: string;
   readonly severity: Severity;
   readonly place: Place | null;
+  /** Where it was met, the first place among them, up to some hundreds; left out where that is all. */
+  readonly places?: readonly Place[];
   readonly values: Readonly<Record<string, string | number>>;
 }

@@ -64,7 +64,7 @@ describe('what cannot be read: exit code 3', () => {
     const { code, out, err } = fewlift(['tour', '-'], svgOf('<path id="p" d="M10 10L20 10L1e400 30"/>'));
     expect(code).toBe(0);
     expect(out).toContain('20 10');
-    expect(err).toMatch(/path data is wrong at character \d+.*line 1, id p/);
+    expect(err).toMatch(/path data is wrong at character \d+.*line 1, column 117, <path> id p/);
   });
 });
 

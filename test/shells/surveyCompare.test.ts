@@ -19,7 +19,7 @@ describe('fewlift survey', () => {
   test('names what is not drawn', () => {
     const { code, out } = fewlift(['survey', '-'], svgOf('<path d="M0 0H9"/><text id="t">Hello</text>'));
     expect(code).toBe(0);
-    expect(out).toMatch(/warning: 1 text not drawn, first: "Hello".*line 1, id t/);
+    expect(out).toMatch(/warning: 1 text not drawn, first: "Hello".*line 1, column 135, <text> id t/);
   });
 
   test('--json, and the same refusals as tour', () => {

@@ -3,6 +3,7 @@ import type { Drawing, Strokes } from './drawing.js';
 import { FindingLog, Unreadable } from './findingLog.js';
 import { LineIndex } from './lineIndex.js';
 import type { PageSize } from './pageSize.js';
+import { DEFAULT_READING, type ReadingRules } from './readingRules.js';
 import { childText } from './references.js';
 import { rootContext } from './rootContext.js';
 import { Session } from './session.js';
@@ -10,11 +11,9 @@ import { StrokeSink } from './strokeSink.js';
 import { readTree } from './svgTree.js';
 import { walk } from './walk.js';
 
-export interface ReadOptions {
+export interface ReadOptions extends Partial<ReadingRules> {
   /** What the drawing is called in reports; a file name, most often. */
   readonly name?: string;
-  /** How many user units of the drawing make an inch; 96 by CSS, 90 or 72 in some older editors. */
-  readonly pxPerInch?: number;
 }
 
 /**
@@ -27,13 +26,14 @@ export interface ReadOptions {
  */
 export function readDrawing(text: string, options: ReadOptions = {}): Drawing {
   const name = options.name ?? '';
-  const { pxPerInch } = options;
-  if (pxPerInch !== undefined && !(pxPerInch > 0 && Number.isFinite(pxPerInch))) {
+  const rules: ReadingRules = { ...DEFAULT_READING, ...options };
+  const { pxPerInch } = rules;
+  if (pxPerInch !== null && !(pxPerInch > 0 && Number.isFinite(pxPerInch))) {
     throw new RangeError(`pxPerInch must be a positive number, not ${pxPerInch}`);
   }
   const log = new FindingLog();
   try {
-    return read(text, name, pxPerInch, log);
+    return read(text, name, rules, log);
   } catch (error) {
     if (error instanceof Unreadable) return emptyDrawing(name, log, error);
     // Memory is the one thing a text can be too large for, and engines say so with a RangeError.
@@ -42,10 +42,10 @@ export function readDrawing(text: string, options: ReadOptions = {}): Drawing {
   }
 }
 
-function read(text: string, name: string, pxPerInch: number | undefined, log: FindingLog): Drawing {
+function read(text: string, name: string, rules: ReadingRules, log: FindingLog): Drawing {
   const tree = readTree(text, new LineIndex(text), log);
-  const session = new Session(tree, log);
-  const { page, inside } = rootContext(session, pxPerInch);
+  const session = new Session(tree, log, rules);
+  const { page, inside } = rootContext(session);
   if (inside) walk(session, tree.root, inside);
   const strokes = session.sink.finish();
   const { widthMm, heightMm } = page.guess === 'extent' ? extentOf(strokes, page) : page;

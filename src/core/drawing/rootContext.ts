@@ -15,15 +15,16 @@ export interface Root {
   readonly inside: Context | null;
 }
 
-/** The root's size, units and style. `pxPerInch` is undefined where nobody has said. */
-export function rootContext(session: Session, pxPerInch: number | undefined): Root {
+/** The root's size, units and style. */
+export function rootContext(session: Session): Root {
+  const { pxPerInch } = session.rules;
   const { root } = session.tree;
   const units = pxPerInch ?? CSS_PX_PER_INCH;
   const unitMm = 25.4 / units;
   const specified = session.cascade.specifiedOn(root);
   const viewBox = viewBoxOf(session, root);
   const page = pageSize(specified.get('width') ?? null, specified.get('height') ?? null, viewBox, units);
-  if (page.physical && !viewBox && pxPerInch === undefined) {
+  if (page.physical && !viewBox && pxPerInch === null) {
     session.report('user-unit-assumed', root, { pxPerInch: units });
   }
   const outside: Context = {

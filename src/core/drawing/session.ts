@@ -7,6 +7,7 @@ import type { ReadingCode } from './findingKinds.js';
 import type { FindingLog } from './findingLog.js';
 import type { LengthContext } from './length.js';
 import { PathReader } from './pathReader.js';
+import type { ReadingRules } from './readingRules.js';
 import { StrokeSink } from './strokeSink.js';
 import type { SvgElement, SvgTree } from './svgTree.js';
 
@@ -46,6 +47,7 @@ export class Session {
   constructor(
     readonly tree: SvgTree,
     readonly log: FindingLog,
+    readonly rules: ReadingRules,
   ) {
     this.cascade = new Cascade(tree, log);
     this.placeNumbers = new Uint32Array(tree.elementCount);

@@ -68,6 +68,7 @@ export interface Report {
     readonly code: string;
     readonly severity: Severity;
     readonly place: Place | null;
+    readonly places?: readonly Place[];
     readonly values: Readonly<Record<string, string | number>>;
     readonly message: string;
   }[];
@@ -116,6 +117,7 @@ export function makeReport(facts: ReportFacts): Report {
       code: finding.code,
       severity: finding.severity,
       place: finding.place,
+      ...(finding.places ? { places: finding.places } : {}),
       values: finding.values,
       message: sentence(finding),
     })),

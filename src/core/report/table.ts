@@ -1,3 +1,4 @@
+import type { Place } from '../finding.js';
 import { count, fineMm, mm, sideBySide, size } from './figures.js';
 import type { Report } from './report.js';
 
@@ -26,12 +27,20 @@ export function reportTable(report: Report): string {
   return lines.join('\n');
 }
 
-/** One line for each finding. */
-export function findingLines(findings: Report['findings']): string[] {
-  return findings.map(({ severity, message, place }) => {
-    const where = place?.line ? ` (line ${place.line}${place.id ? `, id ${place.id}` : ''})` : '';
-    return `${severity}: ${message}${where}`;
+/** One line for each finding; `places` further lines, at most, say where else it was met. */
+export function findingLines(findings: Report['findings'], places = 0): string[] {
+  return findings.flatMap(({ severity, message, place, places: all = [] }) => {
+    const where = place?.line ? ` (${placeText(place)})` : '';
+    const others = places > 0 ? all.slice(1) : [];
+    const lines = others.slice(0, places).map((other) => `    also ${placeText(other)}`);
+    if (others.length > places) lines.push(`    and ${others.length - places} more; --json lists them`);
+    return [`${severity}: ${message}${where}`, ...lines];
   });
+}
+
+function placeText({ element, id, line, column }: Place): string {
+  const what = element === null ? '' : `, <${element}>${id === null ? '' : ` id ${id}`}`;
+  return `line ${line}, column ${column}${what}`;
 }
 
 function boundText(bound: Report['bound'], gap: number | null): string {
