@@ -2,7 +2,7 @@ import { auditLines } from './audit/audit.js';
 import type { LineSet } from './audit/lineSet.js';
 import { linesOfDrawing, linesOfProgram } from './audit/lines.js';
 import type { Drawing } from './drawing/drawing.js';
-import { type PenRule, planPens, strokesOfPens } from './drawing/pens.js';
+import { type PenRule, planPens, solidPenName, strokesOfPens } from './drawing/pens.js';
 import type { MachineProfile } from './machine/profile.js';
 import { type Measure, measureProgram } from './measure/measure.js';
 import { programAsDrawn } from './program/fromTours.js';
@@ -59,14 +59,21 @@ export function compareSides(
   profile: MachineProfile,
   version: string,
 ): Comparison {
-  const pens = uniqueNames(before);
-  const numberOf = uniqueNames(after).map((name) => {
-    const known = pens.indexOf(name);
-    return known >= 0 ? known : pens.push(name) - 1;
+  const pens: string[] = [];
+  const numbered = (side: ComparedSide): LineSet => {
+    if (settings.pens === 'one') return side.lines;
+    const numberOf = uniqueNames(side).map((unique) => {
+      // Once dashes are drawn as lines of their own, nothing tells them from solid lines of that colour.
+      const name = settings.pens === 'colour' ? solidPenName(unique) : unique;
+      const known = pens.indexOf(name);
+      return known >= 0 ? known : pens.push(name) - 1;
+    });
+    return { ...side.lines, pen: side.lines.pen.map((p) => numberOf[p]) };
+  };
+  const audit = auditLines(numbered(before), numbered(after), {
+    ...settings,
+    repeatToleranceMm: REPEAT_TOLERANCE_MM,
   });
-  const drawn =
-    settings.pens === 'one' ? after.lines : { ...after.lines, pen: after.lines.pen.map((p) => numberOf[p]) };
-  const audit = auditLines(before.lines, drawn, { ...settings, repeatToleranceMm: REPEAT_TOLERANCE_MM });
   return {
     schema: 'fewlift-comparison/1',
     version,

@@ -47,6 +47,7 @@ export function drawingOf(specs: readonly StrokeSpec[], widthMm = 100, heightMm 
       first: Uint32Array.from(first),
       closed: Uint8Array.from(column.closed),
       dot: Uint8Array.from(column.dot),
+      dashed: new Uint8Array(count),
       colour: Uint32Array.from(column.colour),
       layer: new Uint32Array(count).fill(NO_LAYER),
       element: Uint32Array.from({ length: count }, (_, i) => i),

@@ -16,7 +16,9 @@ export interface Style {
   readonly visible: boolean;
   /** Caps are round or square, so that a sub-path of zero length is a dot. */
   readonly dots: boolean;
-  readonly dashed: boolean;
+  /** Lengths of dashes and gaps by turns, user units, an even number; null where the line is solid. */
+  readonly dashes: readonly number[] | null;
+  readonly dashOffset: number;
   /** One bit each for markers at the start, middle and end. */
   readonly markers: number;
   readonly fontSize: number;
@@ -33,7 +35,8 @@ export const INITIAL_STYLE: Style = {
   fillOpacity: 1,
   visible: true,
   dots: false,
-  dashed: false,
+  dashes: null,
+  dashOffset: 0,
   markers: 0,
   fontSize: 16,
 };
@@ -81,6 +84,7 @@ const INITIAL_VALUES: Readonly<Record<string, string>> = {
   'fill-opacity': '1',
   'stroke-linecap': 'butt',
   'stroke-dasharray': 'none',
+  'stroke-dashoffset': '0',
   visibility: 'visible',
   marker: 'none',
   'marker-start': 'none',
@@ -157,8 +161,18 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
   ],
   [
     'stroke-dasharray',
-    (style, value) => {
-      style.dashed = readDashed(value) ?? style.dashed;
+    (style, value, _parent, context) => {
+      const dashes = readDashes(value, context, style.fontSize);
+      if (dashes === undefined) context.reportLength('stroke-dasharray', value);
+      else style.dashes = dashes;
+    },
+  ],
+  [
+    'stroke-dashoffset',
+    (style, value, _parent, context) => {
+      const length = readLength(value);
+      if (length) style.dashOffset = toUserUnits(length, 'other', context, style.fontSize);
+      else context.reportLength('stroke-dashoffset', value);
     },
   ],
   [
@@ -182,14 +196,19 @@ export function readOpacity(value: string): number | null {
   return Math.min(1, Math.max(0, length.unit === '%' ? length.value / 100 : length.value));
 }
 
-/** Whether a dash array makes dashes: a sum of 0 is a solid line (SVG 2, "stroke-dasharray"). */
-function readDashed(value: string): boolean | null {
-  if (value.toLowerCase() === 'none') return false;
+/**
+ * The lengths of a dash array, twice over where their number is odd; null where they make no dashes: a sum
+ * of 0 is a solid line (SVG 2, "stroke-dasharray"). undefined where the value is wrong.
+ */
+function readDashes(value: string, context: LengthContext, fontSize: number): number[] | null | undefined {
+  if (value.toLowerCase() === 'none') return null;
+  const lengths: number[] = [];
   let sum = 0;
-  for (const word of value.split(/[\s,]+/)) {
+  for (const word of value.split(/\s*,\s*|\s+/)) {
     const length = readLength(word);
-    if (!length || length.value < 0) return null;
-    sum += length.value;
+    if (!length || length.value < 0) return undefined;
+    sum += lengths[lengths.push(toUserUnits(length, 'other', context, fontSize)) - 1];
   }
-  return sum > 0;
+  if (!(sum > 0)) return null;
+  return lengths.length % 2 === 0 ? lengths : [...lengths, ...lengths];
 }

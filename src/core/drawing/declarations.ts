@@ -7,7 +7,7 @@ export interface Declaration {
 
 /** Properties that reading looks at; others are passed over. */
 export const PROPERTIES: ReadonlySet<string> = new Set([
-  ...['stroke', 'stroke-width', 'stroke-linecap', 'stroke-opacity', 'stroke-dasharray'],
+  ...['stroke', 'stroke-width', 'stroke-linecap', 'stroke-opacity', 'stroke-dasharray', 'stroke-dashoffset'],
   ...['fill', 'fill-opacity', 'color', 'display', 'visibility', 'opacity', 'font-size', 'vector-effect'],
   ...['marker', 'marker-start', 'marker-mid', 'marker-end', 'clip-path', 'mask', 'filter'],
   ...['transform', 'transform-origin', 'x', 'y', 'width', 'height', 'cx', 'cy', 'r', 'rx', 'ry'],

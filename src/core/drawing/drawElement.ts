@@ -1,8 +1,9 @@
 import { type Affine, determinant } from '../geometry/affine.js';
 import { readOpacity, type Style } from './computedStyle.js';
+import { dashesOf } from './dashesOf.js';
 import { type Axis, readLength, toUserUnits } from './length.js';
+import type { Paint } from './paint.js';
 import { type Context, type Session, shown } from './session.js';
-import type { StrokeProperties } from './strokeSink.js';
 import type { SvgElement } from './svgTree.js';
 import { tracePath } from './tracePath.js';
 import { type ShapeInput, traceShape } from './traceShape.js';
@@ -14,6 +15,16 @@ const WITH_MARKERS: ReadonlySet<string> = new Set(['path', 'line', 'polyline', '
 
 type Specified = ReadonlyMap<string, string>;
 
+/** A shape in its place: what is said of it, computed and inherited. */
+interface Shape {
+  readonly session: Session;
+  readonly element: SvgElement;
+  readonly specified: Specified;
+  readonly style: Style;
+  readonly map: Affine;
+  readonly context: Context;
+}
+
 /** Draws one shape, or says why not: every shape ends as strokes or in a finding. */
 export function drawElement(
   session: Session,
@@ -24,56 +35,42 @@ export function drawElement(
   context: Context,
 ): void {
   session.elementCount++;
-  const colour = strokeColour(style);
-  const fillVisible = element.name !== 'line' && isFillVisible(style);
+  const shape: Shape = { session, element, specified, style, map, context };
+  const colour = colourOf(style.stroke, style);
+  const fill = element.name === 'line' || style.fillOpacity === 0 ? null : colourOf(style.fill, style);
   if (!style.visible || readOpacity(specified.get('opacity') ?? '') === 0) {
     session.report('invisible', element);
-  } else if (colour === null) {
-    if (fillVisible) measureOutline(session, element, specified, style, map, context);
-    else session.report('invisible', element);
-  } else if (colour === '' || style.strokeWidth === 0 || style.strokeOpacity === 0) {
+  } else if (colour === null && fill && session.rules.fills === 'outline' && isInvertible(map)) {
+    if (drawLines(shape, fill) > 0) session.report('fill-drawn-as-outline', element);
+  } else if (colour === null && fill) {
+    measureOutline(shape);
+  } else if (!colour || style.strokeWidth === 0 || style.strokeOpacity === 0) {
     session.report('invisible', element);
   } else if (!isInvertible(map)) {
     session.report('flattened-to-nothing', element);
-  } else {
-    const nonScaling = specified.get('vector-effect')?.trim() === 'non-scaling-stroke';
-    const drawn = trace(session, element, specified, style, map, context, {
-      colour: session.colourNumber(colour),
-      layer: context.layer,
-      element: session.placeNumber(element),
-      widthMm: strokeWidthMm(style, nonScaling ? null : map, context),
-      dots: style.dots,
-    });
-    if (drawn === 0) return;
-    if (style.dashed) session.report('dashes-drawn-solid', element);
+  } else if (drawLines(shape, colour) > 0) {
+    if (style.dashes && session.rules.dashes === 'solid') session.report('dashes-drawn-solid', element);
     if (style.markers !== 0 && WITH_MARKERS.has(element.name)) session.report('markers-not-drawn', element);
     if (style.stroke.kind === 'server') {
       session.report('paint-server-drawn-as-line', element, { paint: shown(colour) });
     }
     if (colour === '#ffffff') session.report('white-strokes', element);
-    if (fillVisible) session.report('fill-ignored', element);
+    if (fill && session.sink.hasArea) session.report('fill-ignored', element);
   }
 }
 
-/** null where there is no stroke, '' where it is transparent. */
-function strokeColour(style: Style): string | null {
-  const { stroke } = style;
-  switch (stroke.kind) {
+/** null where nothing is painted, '' where the paint is transparent. */
+function colourOf(paint: Paint, style: Style): string | null {
+  switch (paint.kind) {
     case 'none':
       return null;
     case 'current':
       return style.colourVisible ? style.colour : '';
     case 'server':
-      return stroke.id;
+      return paint.id;
     case 'colour':
-      return stroke.visible ? stroke.hex : '';
+      return paint.visible ? paint.hex : '';
   }
-}
-
-function isFillVisible(style: Style): boolean {
-  const { fill } = style;
-  if (fill.kind === 'none' || style.fillOpacity === 0) return false;
-  return fill.kind === 'current' ? style.colourVisible : fill.kind === 'server' || fill.visible;
 }
 
 /** A map without an inverse displays nothing (CSS Transforms Module Level 1, §8). */
@@ -89,62 +86,66 @@ function strokeWidthMm(style: Style, map: Affine | null, context: Context): numb
   return Number.isFinite(width) ? width : 0;
 }
 
-function measureOutline(
-  session: Session,
-  element: SvgElement,
-  specified: Specified,
-  style: Style,
-  map: Affine,
-  context: Context,
-): void {
-  session.report('filled-not-stroked', element);
-  const outlineMm = trace(session, element, specified, style, map, context, null);
-  session.log.sum('filled-not-stroked', 'outlineMm', outlineMm);
-}
-
-/** Draws; returns the number of strokes, or the length in mm where `properties` is null. */
-function trace(
-  session: Session,
-  element: SvgElement,
-  specified: Specified,
-  style: Style,
-  map: Affine,
-  context: Context,
-  properties: StrokeProperties | null,
-): number {
+/** Returns the number of strokes drawn. */
+function drawLines(shape: Shape, colour: string): number {
+  const { session, element, specified, style, map, context } = shape;
   const { sink } = session;
+  const nonScaling = specified.get('vector-effect')?.trim() === 'non-scaling-stroke';
+  const lengthUnder = (by: Affine): number => {
+    sink.begin(by, null);
+    trace(shape, false);
+    return sink.end().outlineMm;
+  };
+  const pathLength = specified.get('pathLength');
+  const properties = {
+    colour: session.colourNumber(colour),
+    layer: context.layer,
+    element: session.placeNumber(element),
+    widthMm: strokeWidthMm(style, nonScaling ? null : map, context),
+    dots: style.dots,
+    dashed: style.dashes !== null,
+    dash: dashesOf(session, style, pathLength, nonScaling, context, lengthUnder, map),
+  };
   sink.begin(map, properties);
-  let reported = false;
-  if (element.name === 'path') {
-    const data = specified.get('d') ?? '';
-    const offset = session.paths.read(data);
-    if (offset >= 0) {
-      session.report('path-error', element, { offset, found: shown(data.slice(offset, offset + 12)) });
-      reported = true;
-    }
-    tracePath(session.paths.commands, sink);
-  } else {
-    const input = shapeInput(session, element, specified, style, context);
-    traceShape(element.name, input, sink);
-    reported = input.reported();
-  }
+  const reported = trace(shape, true);
   const drawn = sink.end();
-  if (!properties) return drawn.outlineMm;
   if (drawn.buttDots > 0) session.report('butt-dots-not-drawn', element, {}, drawn.buttDots);
   if (drawn.overflows > 0) session.report('coordinate-overflow', element, {}, drawn.overflows);
+  if (drawn.undashed > 0) session.report('too-many-dashes', element, {}, drawn.undashed);
   if (drawn.strokes + drawn.buttDots + drawn.overflows === 0 && !reported) {
     session.report('nothing-to-draw', element);
   }
   return drawn.strokes;
 }
 
-function shapeInput(
-  session: Session,
-  element: SvgElement,
-  specified: Specified,
-  style: Style,
-  context: Context,
-): ShapeInput & { reported(): boolean } {
+function measureOutline(shape: Shape): void {
+  const { session, element, map } = shape;
+  session.report('filled-not-stroked', element);
+  session.sink.begin(map, null);
+  trace(shape, true);
+  session.log.sum('filled-not-stroked', 'outlineMm', session.sink.end().outlineMm);
+}
+
+/** Sends the shape to the sink; `tells` is false where its errors have been or will be told elsewhere. */
+function trace(shape: Shape, tells: boolean): boolean {
+  const { session, element, specified } = shape;
+  const { sink } = session;
+  if (element.name !== 'path') {
+    const input = shapeInput(shape, tells);
+    traceShape(element.name, input, sink);
+    return input.reported();
+  }
+  const data = specified.get('d') ?? '';
+  const offset = session.paths.read(data);
+  if (offset >= 0 && tells) {
+    session.report('path-error', element, { offset, found: shown(data.slice(offset, offset + 12)) });
+  }
+  tracePath(session.paths.commands, sink);
+  return offset >= 0;
+}
+
+function shapeInput(shape: Shape, tells: boolean): ShapeInput & { reported(): boolean } {
+  const { session, element, specified, style, context } = shape;
   let reported = false;
   return {
     reported: () => reported,
@@ -152,7 +153,7 @@ function shapeInput(
     text: (name) => specified.get(name) ?? null,
     report: (code, values) => {
       reported = true;
-      session.report(code, element, values);
+      if (tells) session.report(code, element, values);
     },
   };
 }

@@ -33,6 +33,8 @@ export interface Drawing {
 export interface Strokes extends Chains {
   readonly closed: Uint8Array;
   readonly dot: Uint8Array;
+  /** The line is dashed in the drawing, so that it may mean something else than a solid one. */
+  readonly dashed: Uint8Array;
   readonly colour: Uint32Array;
   /** Index into `layers`, or NO_LAYER. */
   readonly layer: Uint32Array;

@@ -61,7 +61,9 @@ export const READING_FINDINGS = {
   'clip-not-applied': 'warning', // clip
   'mask-not-applied': 'warning', // mask
   'filter-not-applied': 'note', // filter
-  'dashes-drawn-solid': 'warning',
+  'dashes-drawn-solid': 'note',
+  'too-many-dashes': 'warning', // count: lines drawn solid for it
+  'fill-drawn-as-outline': 'note',
   'paint-server-drawn-as-line': 'note', // paint
   'fill-ignored': 'note',
   'white-strokes': 'note',

@@ -15,14 +15,21 @@ export interface PenPlan {
   readonly penOfStroke: Uint32Array;
 }
 
-/** Shares the strokes out among pens by colour, by layer, or gives all to one. O(strokes). */
+/** Dashed lines often mean something else than solid ones, a fold for instance, so their pen is another. */
+const DASHED = ' dashed';
+
+/**
+ * Shares the strokes out among pens by colour, by layer, or gives all to one; by colour, dashed lines are
+ * kept apart from solid ones. O(strokes).
+ */
 export function planPens(drawing: Drawing, rule: PenRule): PenPlan {
   const { strokes, colours, layers } = drawing;
   const pens: Pen[] = [];
   const penOfKey = new Map<number, number>();
   const penOfStroke = new Uint32Array(strokes.count);
   for (let s = 0; s < strokes.count; s++) {
-    const key = rule === 'colour' ? strokes.colour[s] : rule === 'layer' ? strokes.layer[s] : 0;
+    const key =
+      rule === 'colour' ? 2 * strokes.colour[s] + strokes.dashed[s] : rule === 'layer' ? strokes.layer[s] : 0;
     let pen = penOfKey.get(key);
     if (pen === undefined) {
       pen = pens.length;
@@ -31,7 +38,7 @@ export function planPens(drawing: Drawing, rule: PenRule): PenPlan {
       const layer = key === NO_LAYER ? undefined : layers[key];
       const name =
         rule === 'colour'
-          ? colour
+          ? `${colour}${strokes.dashed[s] ? DASHED : ''}`
           : rule === 'layer'
             ? (layer?.label ?? layer?.id ?? (key === NO_LAYER ? 'no layer' : `layer ${key + 1}`))
             : 'pen';
@@ -40,6 +47,11 @@ export function planPens(drawing: Drawing, rule: PenRule): PenPlan {
     penOfStroke[s] = pen;
   }
   return { pens, penOfStroke };
+}
+
+/** The name of the pen that draws the solid lines of the same colour. */
+export function solidPenName(name: string): string {
+  return name.endsWith(DASHED) ? name.slice(0, -DASHED.length) : name;
 }
 
 /** The strokes of each pen, in document order. */

@@ -1,10 +1,12 @@
-import type { Affine } from '../geometry/affine.js';
+import { type Affine, IDENTITY } from '../geometry/affine.js';
 import type { ArcCentre } from '../geometry/arc.js';
+import { cutDashes, type DashPattern } from '../geometry/dashes.js';
 import { segmentLength } from '../geometry/length.js';
-import { SegmentBuilder } from '../geometry/segments.js';
+import { LINE, SegmentBuilder, type Segments } from '../geometry/segments.js';
+import { appendTransformed } from '../geometry/transform.js';
 import { Column } from './column.js';
 import type { Strokes } from './drawing.js';
-import { SubPath } from './subPath.js';
+import { isDrawable, SubPath } from './subPath.js';
 
 /** What draws a path: points in the element's user units. */
 export interface PathSink {
@@ -24,6 +26,16 @@ export interface StrokeProperties {
   readonly widthMm: number;
   /** Sub-paths of zero length are dots: the caps are round or square. */
   readonly dots: boolean;
+  /** The line is dashed in the drawing, whether or not it is drawn so. */
+  readonly dashed: boolean;
+  /** null where it is drawn in one piece. */
+  readonly dash: Dash | null;
+}
+
+export interface Dash {
+  /** In the element's user units, or in mm where the stroke does not scale. */
+  readonly pattern: DashPattern;
+  readonly inMm: boolean;
 }
 
 /** What became of one element. */
@@ -33,14 +45,21 @@ export interface Drawn {
   buttDots: number;
   /** Sub-paths with a number that is not finite or too far out. */
   overflows: number;
+  /** Sub-paths that would have been cut into more dashes than a drawing may have. */
+  undashed: number;
   /** Length of what was measured instead of drawn. */
   outlineMm: number;
 }
+
+/** Dashes in one drawing, about as many as would be worth drawing. */
+const MOST_DASHES = 2_000_000;
 
 /** Gathers the strokes of a drawing: one per sub-path, in the order in which they come. */
 export class StrokeSink implements PathSink {
   /** Segments drawn or measured so far. */
   segmentsSeen = 0;
+  /** Something of the element has an inside: a curve, or more than one line in a row. */
+  hasArea = false;
   private readonly builder = new SegmentBuilder();
   private readonly sub = new SubPath();
   private readonly first = new Column();
@@ -49,15 +68,25 @@ export class StrokeSink implements PathSink {
   private readonly element = new Column();
   private readonly closed = new Column();
   private readonly dot = new Column();
+  private readonly dashed = new Column();
   private readonly widthMm: number[] = [];
   private properties: StrokeProperties | null = null;
-  private drawn: Drawn = { strokes: 0, buttDots: 0, overflows: 0, outlineMm: 0 };
+  private dash: Dash | null = null;
+  private mapOfDashes: Affine | null = null;
+  /** Dashes cut so far. */
+  private dashes = 0;
+  private drawn: Drawn = nothingDrawn();
 
   /** Begins an element; with `properties` null its paths are measured, not drawn. */
   begin(map: Affine, properties: StrokeProperties | null): void {
-    this.sub.setMap(map);
+    const dash = properties?.dash ?? null;
+    this.dash = dash;
+    // A pattern in user units is laid along the line there, and the dashes are mapped then.
+    this.mapOfDashes = dash && !dash.inMm ? map : null;
+    this.sub.setMap(this.mapOfDashes ? IDENTITY : map);
     this.properties = properties;
-    this.drawn = { strokes: 0, buttDots: 0, overflows: 0, outlineMm: 0 };
+    this.hasArea = false;
+    this.drawn = nothingDrawn();
   }
 
   end(): Drawn {
@@ -98,6 +127,7 @@ export class StrokeSink implements PathSink {
       first,
       closed: Uint8Array.from(this.closed.values.subarray(0, count)),
       dot: Uint8Array.from(this.dot.values.subarray(0, count)),
+      dashed: Uint8Array.from(this.dashed.values.subarray(0, count)),
       colour: this.colour.values.slice(0, count),
       layer: this.layer.values.slice(0, count),
       element: this.element.values.slice(0, count),
@@ -109,24 +139,65 @@ export class StrokeSink implements PathSink {
     const { sub, drawn } = this;
     if (!sub.started) return;
     this.segmentsSeen += sub.count;
+    if (sub.count > 1 || (sub.count === 1 && sub.view().kind[0] !== LINE)) this.hasArea = true;
     if (!sub.drew) {
       // A lone moveto draws nothing, dots included (SVG 2, "Zero length path segments").
-    } else if (!sub.isDrawable()) drawn.overflows++;
+    } else if (!isDrawable(sub.view(), sub.startX, sub.startY)) drawn.overflows++;
     else if (!this.properties) this.measure();
-    else if (sub.count > 0) this.append(this.properties, false);
-    else if (this.properties.dots) this.append(this.properties, true);
+    else if (sub.count > 0) this.line(this.properties);
+    else if (this.properties.dots) this.lone(this.properties);
     else drawn.buttDots++;
     sub.clear();
   }
 
-  private append(properties: StrokeProperties, dot: boolean): void {
-    const { sub, builder } = this;
+  private line(properties: StrokeProperties): void {
+    const { sub, dash, drawn } = this;
+    const dashes = dash && cutDashes(sub.view(), sub.closed, dash.pattern, MOST_DASHES - this.dashes);
+    if (dash && !dashes) drawn.undashed++;
+    if (!dashes || dashes.whole) {
+      this.stroke(properties, this.mapped(sub.view(), 0, sub.count), sub.closed, false);
+      return;
+    }
+    const { first, dot, segments } = dashes;
+    this.dashes += dot.length;
+    this.segmentsSeen += dashes.segments.count;
+    for (let k = 0; k < dot.length; k++) {
+      if (dot[k] && !properties.dots) continue;
+      this.stroke(properties, this.mapped(segments, first[k], first[k + 1]), false, dot[k]);
+    }
+  }
+
+  /** A sub-path of zero length. */
+  private lone(properties: StrokeProperties): void {
+    const { startX: x, startY: y } = this.sub;
+    const point = new SegmentBuilder();
+    point.line(x, y, x, y);
+    this.stroke(properties, this.mapped(point.finish(), 0, 1), false, true);
+  }
+
+  private mapped(segments: Segments, from: number, to: number): Segments {
+    if (!this.mapOfDashes && from === 0 && to === segments.count) return segments;
+    const builder = new SegmentBuilder();
+    appendTransformed(builder, segments, from, to, this.mapOfDashes ?? IDENTITY);
+    return builder.finish();
+  }
+
+  private stroke(properties: StrokeProperties, segments: Segments, closed: boolean, dot: boolean): void {
+    if (this.mapOfDashes && !isDrawable(segments, 0, 0)) {
+      this.drawn.overflows++;
+      return;
+    }
+    this.append(properties, segments, closed, dot);
+  }
+
+  private append(properties: StrokeProperties, segments: Segments, closed: boolean, dot: boolean): void {
+    const { builder } = this;
     this.drawn.strokes++;
     this.first.push(builder.count);
-    if (dot) builder.line(sub.startX, sub.startY, sub.startX, sub.startY);
-    else sub.appendTo(builder);
-    this.closed.push(sub.closed && !dot ? 1 : 0);
+    builder.append(segments);
+    this.closed.push(closed ? 1 : 0);
     this.dot.push(dot ? 1 : 0);
+    this.dashed.push(properties.dashed ? 1 : 0);
     this.colour.push(properties.colour);
     this.layer.push(properties.layer);
     this.element.push(properties.element);
@@ -137,4 +208,8 @@ export class StrokeSink implements PathSink {
     const segments = this.sub.view();
     for (let i = 0; i < segments.count; i++) this.drawn.outlineMm += segmentLength(segments, i);
   }
+}
+
+function nothingDrawn(): Drawn {
+  return { strokes: 0, buttDots: 0, overflows: 0, undashed: 0, outlineMm: 0 };
 }

@@ -1,6 +1,6 @@
 import { type Affine, applyX, applyY } from '../geometry/affine.js';
 import type { ArcCentre } from '../geometry/arc.js';
-import { ARC, CUBIC, LINE, SEGMENT_SIZE, type SegmentBuilder, type Segments } from '../geometry/segments.js';
+import { ARC, CUBIC, LINE, SEGMENT_SIZE, type Segments } from '../geometry/segments.js';
 
 /** Coordinates beyond this (1000 km) are taken for an overflow: nothing after reading could use them. */
 const FURTHEST_MM = 1e9;
@@ -110,37 +110,6 @@ export class SubPath {
     this.y = startY;
   }
 
-  /** Every number is finite, every point on this side of the limit. */
-  isDrawable(): boolean {
-    if (!(Math.abs(this.startX) <= FURTHEST_MM && Math.abs(this.startY) <= FURTHEST_MM)) return false;
-    for (let i = 0; i < this.count; i++) {
-      const o = this.offset[i];
-      const isArc = this.kind[i] === ARC;
-      const points = o + (isArc ? 4 : SEGMENT_SIZE[this.kind[i]]!);
-      for (let k = o; k < points; k++) if (!(Math.abs(this.data[k]) <= FURTHEST_MM)) return false;
-      if (isArc) for (let k = points; k < o + 12; k++) if (!Number.isFinite(this.data[k])) return false;
-    }
-    return true;
-  }
-
-  appendTo(builder: SegmentBuilder): void {
-    const d = this.data;
-    for (let i = 0; i < this.count; i++) {
-      const o = this.offset[i];
-      const kind = this.kind[i];
-      const x0 = d[o];
-      const y0 = d[o + 1];
-      const x1 = d[o + 2];
-      const y1 = d[o + 3];
-      if (kind === LINE) builder.line(x0, y0, x1, y1);
-      else if (kind === CUBIC) builder.cubic(x0, y0, d[o + 4], d[o + 5], d[o + 6], d[o + 7], x1, y1);
-      else {
-        const [cx, cy, ux, uy] = [d[o + 4], d[o + 5], d[o + 6], d[o + 7]];
-        builder.arc(x0, y0, x1, y1, cx, cy, ux, uy, d[o + 8], d[o + 9], d[o + 10], d[o + 11]);
-      }
-    }
-  }
-
   /** The segments in place, until the next change. */
   view(): Segments {
     return { count: this.count, kind: this.kind, offset: this.offset, data: this.data };
@@ -168,6 +137,19 @@ export class SubPath {
     this.used = o + SEGMENT_SIZE[kind];
     return o;
   }
+}
+
+/** Every number is finite, every point on this side of the limit. */
+export function isDrawable({ count, kind, offset, data }: Segments, startX: number, startY: number): boolean {
+  if (!(Math.abs(startX) <= FURTHEST_MM && Math.abs(startY) <= FURTHEST_MM)) return false;
+  for (let i = 0; i < count; i++) {
+    const o = offset[i];
+    const isArc = kind[i] === ARC;
+    const points = o + (isArc ? 4 : SEGMENT_SIZE[kind[i]]);
+    for (let k = o; k < points; k++) if (!(Math.abs(data[k]) <= FURTHEST_MM)) return false;
+    if (isArc) for (let k = points; k < o + 12; k++) if (!Number.isFinite(data[k])) return false;
+  }
+  return true;
 }
 
 function same(x0: number, y0: number, x1: number, y1: number): boolean {

@@ -95,6 +95,17 @@ export class SegmentBuilder {
     this.used = o + 12;
   }
 
+  /** Appends segments as they are; O(their numbers). */
+  append({ count, kind, offset, data }: Segments): void {
+    for (let i = 0; i < count; i++) {
+      const from = offset[i];
+      const size = SEGMENT_SIZE[kind[i]];
+      const o = this.begin(kind[i], data[from], data[from + 1], data[from + 2], data[from + 3]);
+      for (let k = 4; k < size; k++) this.data[o + k] = data[from + k];
+      this.used = o + size;
+    }
+  }
+
   /** The columns so far, copied to their exact size; the builder may go on. */
   finish(): Segments {
     return {

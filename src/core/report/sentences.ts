@@ -52,7 +52,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'colour-not-read': (v) => `a colour was not understood${times(v)}, first: ${quoted(v.found)}`,
   'size-guessed': (v) =>
     `the drawing does not say how large it is: taken as ${number(v.widthMm)} x ${number(v.heightMm)} mm; check the size before drawing`,
-  'user-unit-assumed': (v) => `sizes without a unit were read at ${v.pxPerInch} per inch`,
+  'user-unit-assumed': (v) =>
+    `the page has a physical size and no viewBox, so lengths without a unit were read at ${v.pxPerInch} per inch; some older editors meant 90: check a known length, and say --px-per-inch 90 if it is off by 6.7 %`,
   'coordinate-overflow': (v) => `${some(v.count, 'stroke')} left out: coordinates beyond any number`,
   'use-missing': (v) => `<use> refers to ${quoted(v.href)}, which is not there${times(v)}`,
   'use-external': (v) => `<use> refers to another file, ${quoted(v.href)}: not fetched${times(v)}`,
@@ -65,7 +66,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
 
   // Reading: not drawn, or drawn otherwise than on a screen.
   'filled-not-stroked': (v) =>
-    `${some(v.count, 'shape')} filled but not stroked, not drawn: ${number(v.outlineMm)} mm of outline; give them a stroke to have them drawn`,
+    `${some(v.count, 'shape')} filled but not stroked, not drawn: ${number(v.outlineMm)} mm of outline; --fills outline draws it`,
   'text-not-drawn': (v) =>
     `${some(v.count, 'text')} not drawn, first: ${quoted(v.text)}; turn text into paths, or use single-line lettering`,
   'image-not-drawn': (v) => `${some(v.count, 'image')} not drawn`,
@@ -75,6 +76,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'mask-not-applied': (v) => `${some(v.count, 'mask')} not applied: what it hides is drawn whole`,
   'filter-not-applied': (v) => `${some(v.count, 'filter')} not applied`,
   'dashes-drawn-solid': (v) => `${some(v.count, 'dashed line')} drawn solid`,
+  'too-many-dashes': (v) => `${some(v.count, 'line')} with more dashes than can be drawn: drawn solid`,
+  'fill-drawn-as-outline': (v) => `${some(v.count, 'filled shape')} drawn as their outline`,
   'paint-server-drawn-as-line': (v) =>
     `${some(v.count, 'line')} stroked with ${v.paint}: drawn as plain lines`,
   'fill-ignored': (v) =>
