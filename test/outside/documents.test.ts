@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { readDrawing } from '../../src/core/index.ts';
 import { CHROMIUM, drawInBrowser, useBrowser } from '../support/browser.ts';
 import { anyDocument } from '../support/randomDocuments.ts';
-import { disagreement } from '../support/readerAndBrowser.ts';
+import { disagreement, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /** Groups, viewports, copies, conditions, styles and shapes put together by chance, read as Chromium shows them. */
 const COUNT = 50;
@@ -15,7 +15,7 @@ describe.runIf(CHROMIUM !== null)('documents put together by chance', () => {
     const texts = fc.sample(anyDocument, { numRuns: COUNT, seed: 11 });
     const outside = await drawInBrowser(browser(), texts);
     const wrong = texts.flatMap((text, i) => {
-      const difference = disagreement(readDrawing(text), outside[i].strokes, ALLOWED);
+      const difference = disagreement(readDrawing(text, WHOLE_LINES), outside[i].strokes, ALLOWED);
       return difference ? [[text, difference]] : [];
     });
     const total = (of: (drawing: (typeof outside)[number]) => number) =>

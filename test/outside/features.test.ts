@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { readDrawing } from '../../src/core/index.ts';
 import { type BrowserDrawing, CHROMIUM, drawInBrowser, useBrowser } from '../support/browser.ts';
 import { BROWSER_CASES, SAID_OTHERWISE } from '../support/browserCases.ts';
-import { disagreement } from '../support/readerAndBrowser.ts';
+import { disagreement, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /**
  * One small drawing for each thing that a drawing may hold: either we read it as Chromium shows it, or a
@@ -30,9 +30,9 @@ describe.runIf(CHROMIUM !== null)('each thing by itself', () => {
 });
 
 function howItDiffers(name: string, outside: BrowserDrawing): string | null {
-  return disagreement(readDrawing(BROWSER_CASES[name]), outside.strokes, ALLOWED);
+  return disagreement(readDrawing(BROWSER_CASES[name], WHOLE_LINES), outside.strokes, ALLOWED);
 }
 
 function codesOf(name: string): string[] {
-  return readDrawing(BROWSER_CASES[name]).findings.map(({ code }) => code);
+  return readDrawing(BROWSER_CASES[name], WHOLE_LINES).findings.map(({ code }) => code);
 }

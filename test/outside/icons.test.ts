@@ -4,7 +4,7 @@ import { fewestRuns } from '../../src/core/network/fewestRuns.ts';
 import { type BrowserStroke, CHROMIUM, drawInBrowser, useBrowser } from '../support/browser.ts';
 import { cellOf, cellPx, readIcons, sheetAsTheyAre, sheetTransformed, spread } from '../support/icons.ts';
 import { expectSound, inWords, orderAndAudit } from '../support/ordering.ts';
-import { type Differences, differences, MM_PER_PX } from '../support/readerAndBrowser.ts';
+import { type Differences, differences, MM_PER_PX, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /**
  * Our reading of stroke icons (npm package lucide-static 1.62.0, ISC licence) against Chromium's: how many
@@ -26,11 +26,11 @@ describe.runIf(CHROMIUM !== null)('icons read as a browser shows them', () => {
     const perCell: BrowserStroke[][] = asTheyAre.map(() => []);
     for (const stroke of outside.strokes) perCell[cellOf(stroke.boxPx, COLUMNS)].push(stroke);
     const files = asTheyAre.map(({ name, text }, i) => {
-      const drawing = readDrawing(text);
+      const drawing = readDrawing(text, WHOLE_LINES);
       expect(drawing.strokes.count, name).toBe(perCell[i].length);
       return differences(drawing, perCell[i], cellPx(i, COLUMNS));
     });
-    const sheet = differences(readDrawing(text), outside.strokes);
+    const sheet = differences(readDrawing(text, WHOLE_LINES), outside.strokes);
     for (const found of [...files, sheet]) expectAgreement(found);
     console.log(`${asTheyAre.length} icon files: ${figures(files)}; on one sheet: ${figures([sheet])}`);
   });
@@ -41,7 +41,7 @@ describe.runIf(CHROMIUM !== null)('icons read as a browser shows them', () => {
     expect(outside.copies).toBe(transformed.length / 5);
     expect(outside.copiesDiffer).toBeLessThan(1e-3);
     expect(outside.wholesDiffer).toBeLessThan(1e-3);
-    const found = differences(readDrawing(text), outside.strokes);
+    const found = differences(readDrawing(text, WHOLE_LINES), outside.strokes);
     expectAgreement(found);
     console.log(`${transformed.length} icons transformed: ${figures([found])}`);
   });

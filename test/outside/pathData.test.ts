@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { readDrawing } from '../../src/core/index.ts';
 import { type BrowserStroke, CHROMIUM, drawInBrowser, useBrowser } from '../support/browser.ts';
 import { pathText, pathTextWithSlip } from '../support/pathTexts.ts';
-import { disagreement } from '../support/readerAndBrowser.ts';
+import { disagreement, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /** Random path data, sound and with one character wrong, read as Chromium reads it. */
 const COUNT = 1000;
@@ -23,7 +23,7 @@ describe.runIf(CHROMIUM !== null)('path data', () => {
     for (const stroke of outside.strokes) perPath[stroke.element].push(stroke);
     let withError = 0;
     const wrong = paths.flatMap((path, i) => {
-      const drawing = readDrawing(drawingOf([path]));
+      const drawing = readDrawing(drawingOf([path]), WHOLE_LINES);
       if (drawing.findings.some(({ code }) => code === 'path-error')) withError++;
       const difference = disagreement(drawing, perPath[i], ALLOWED);
       return difference ? [[path, difference]] : [];

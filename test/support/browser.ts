@@ -1,7 +1,4 @@
-import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
-import { tmpdir } from 'node:os';
-import { join } from 'node:path';
-import { pathToFileURL } from 'node:url';
+import { existsSync, readFileSync } from 'node:fs';
 import { type Browser, chromium } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 
@@ -55,29 +52,26 @@ async function openBrowser(): Promise<Browser> {
 }
 
 /**
- * Opens each text as a document of its own, in a frame, without scripts and network, and reads off what it
- * draws. Many frames in one page cost a third of as many pages.
+ * Puts the texts one after the other in the place of the root of one SVG document, without scripts and
+ * network, and reads off what each draws. That gives the same figures as opening each as a document of its
+ * own, at a third of the time.
  */
 export async function drawInBrowser(browser: Browser, texts: readonly string[]): Promise<BrowserDrawing[]> {
-  const context = await browser.newContext({ javaScriptEnabled: false, offline: true });
-  const folder = mkdtempSync(join(tmpdir(), 'fewlift-browser-'));
-  const urlOf = (name: string) => pathToFileURL(join(folder, name)).href;
+  const viewport = { width: 1000, height: 1000 };
+  const context = await browser.newContext({ javaScriptEnabled: false, offline: true, viewport });
   try {
-    for (const [i, text] of texts.entries()) writeFileSync(join(folder, `${i}.svg`), text);
-    const frames = texts.map((_, i) => `<iframe src="${i}.svg" width="1000" height="1000"></iframe>`);
-    writeFileSync(join(folder, 'all.html'), `<!doctype html>${frames.join('')}`);
     const page = await context.newPage();
-    await page.goto(urlOf('all.html'));
-    const drawings: BrowserDrawing[] = [];
-    for (const i of texts.keys()) {
-      const frame = page.frame({ url: urlOf(`${i}.svg`) });
-      if (!frame) throw new Error(`document ${i} was not opened`);
-      drawings.push(await frame.evaluate<BrowserDrawing>(IN_PAGE));
-    }
-    return drawings;
+    await page.goto('data:image/svg+xml,<svg xmlns="http://www.w3.org/2000/svg"/>');
+    const draw = `(text) => {
+      const parsed = new DOMParser().parseFromString(text, 'image/svg+xml');
+      const error = parsed.querySelector('parsererror');
+      if (error) throw new Error(error.textContent + text);
+      document.replaceChild(document.adoptNode(parsed.documentElement), document.documentElement);
+      return (${IN_PAGE.trimEnd().replace(/;$/, '')});
+    }`;
+    return await page.evaluate<BrowserDrawing[]>(`${JSON.stringify(texts)}.map(${draw})`);
   } finally {
     await context.close();
-    rmSync(folder, { recursive: true, force: true });
   }
 }
 

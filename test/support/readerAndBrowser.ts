@@ -1,10 +1,14 @@
 import type { Drawing } from '../../src/core/drawing/drawing.ts';
+import type { ReadingRules } from '../../src/core/drawing/readingRules.ts';
 import { segmentBox } from '../../src/core/geometry/box.ts';
 import { segmentLength } from '../../src/core/geometry/length.ts';
 import type { BrowserStroke } from './browser.ts';
 
 /** CSS Values and Units, "Absolute lengths": 1 in = 25.4 mm = 96 px. */
 export const MM_PER_PX = 25.4 / 96;
+
+/** The browser is asked for whole outlines: lines neither dashed nor cut at edges. Pictures judge those. */
+export const WHOLE_LINES: Partial<ReadingRules> = { dashes: 'solid', clips: 'ignore', pageEdge: 'ignore' };
 
 /** Lengths smaller than this are compared as if they were this long: positions are floats in browsers. */
 const SHORTEST_PX = 0.1;
