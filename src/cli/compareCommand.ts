@@ -15,6 +15,7 @@ import { version } from '../node/version.js';
 import { Ending, EXIT } from './exitCodes.js';
 import { drawingFrom, readText } from './input.js';
 import { positiveLengthMm } from './optionValues.js';
+import { addReadingOptions, type ReadingFlags, readingOf } from './readingOptions.js';
 import { addLineOptions, type NetworkFlags, settingsOf } from './sharedOptions.js';
 import { outputKind } from './tourJob.js';
 
@@ -37,7 +38,7 @@ export function compareCommand(finish: (code: number) => void): Command {
     )
     .argument('<before>', 'SVG or G-code; - is standard input')
     .argument('<after>', 'SVG or G-code');
-  return addLineOptions(command)
+  return addReadingOptions(addLineOptions(command))
     .option(
       '--page-height <length>',
       'height of the page of G-code whose head does not tell it',
@@ -46,11 +47,15 @@ export function compareCommand(finish: (code: number) => void): Command {
     .option('--json', 'print JSON instead of the table')
     .addHelpText('after', EXAMPLES)
     .action(
-      (before: string, after: string, flags: NetworkFlags & { json?: boolean; pageHeight?: number }) => {
+      (
+        before: string,
+        after: string,
+        flags: NetworkFlags & ReadingFlags & { json?: boolean; pageHeight?: number },
+      ) => {
         const settings = settingsOf(flags);
         const comparison = compareSides(
-          sideOf(before, settings, flags.pageHeight),
-          sideOf(after, settings, flags.pageHeight),
+          sideOf(before, settings, flags),
+          sideOf(after, settings, flags),
           settings,
           PEN_ON_Z,
           version(),
@@ -62,9 +67,14 @@ export function compareCommand(finish: (code: number) => void): Command {
     );
 }
 
-function sideOf(path: string, settings: CompareSettings, pageHeightMm: number | undefined): ComparedSide {
+function sideOf(
+  path: string,
+  settings: CompareSettings,
+  flags: ReadingFlags & { pageHeight?: number },
+): ComparedSide {
   const text = readText(path);
-  if (outputKind(path) !== 'gcode') return sideOfDrawing(drawingFrom(text, path), settings);
+  if (outputKind(path) !== 'gcode') return sideOfDrawing(drawingFrom(text, path, readingOf(flags)), settings);
+  const pageHeightMm = flags.pageHeight;
   const { program, findings } = readGcode(text, pageHeightMm === undefined ? {} : { pageHeightMm });
   for (const finding of program ? findings : []) {
     const line = finding.place?.line ? ` (line ${finding.place.line})` : '';

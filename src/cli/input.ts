@@ -1,5 +1,13 @@
 import { basename } from 'node:path';
-import { type Drawing, readDrawing, sentence, withoutTravel } from '../core/index.js';
+import {
+  choosePens,
+  type Drawing,
+  type ReadingRules,
+  readDrawing,
+  type Settings,
+  sentence,
+  withoutTravel,
+} from '../core/index.js';
 import { decodeText, NotText } from '../node/decodeText.js';
 import { readBytes } from '../node/files.js';
 import { Ending, EXIT } from './exitCodes.js';
@@ -17,9 +25,9 @@ export function readText(path: string): string {
 }
 
 /** The drawing in a text; throws an Ending where it cannot be read. The travel that we draw is no line of it. */
-export function drawingFrom(text: string, path: string): Drawing {
+export function drawingFrom(text: string, path: string, rules: Partial<ReadingRules>): Drawing {
   const name = path === '-' ? 'drawing' : basename(path);
-  const drawing = readDrawing(withoutTravel(text), { name });
+  const drawing = readDrawing(withoutTravel(text), { ...rules, name });
   const stop = drawing.findings.find((finding) => finding.severity === 'error');
   if (stop) {
     const { line, column } = stop.place ?? { line: null, column: null };
@@ -47,9 +55,19 @@ const WHY_NOTHING = [
 ];
 
 /** The same, where there must be something to draw. */
-export function strokedDrawingFrom(text: string, path: string): Drawing {
-  const drawing = drawingFrom(text, path);
-  if (drawing.strokes.count > 0) return drawing;
+export function strokedDrawingFrom(
+  text: string,
+  path: string,
+  rules: Partial<ReadingRules>,
+  settings: Settings,
+): Drawing {
+  const drawing = drawingFrom(text, path, rules);
+  if (drawing.strokes.count > 0) {
+    const chosen = choosePens(drawing, settings.pens, settings);
+    if (chosen.strokes.count > 0) return drawing;
+    const why = chosen.findings.slice(drawing.findings.length).map((finding) => `\n  ${sentence(finding)}`);
+    throw new Ending(EXIT.notRead, `${shownName(path)}: no pen is left to draw${why.join('')}`);
+  }
   const why = WHY_NOTHING.map((code) => drawing.findings.find((finding) => finding.code === code)).find(
     Boolean,
   );

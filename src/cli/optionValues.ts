@@ -42,3 +42,24 @@ export function numberAtLeastZero(text: string): number {
   }
   return value;
 }
+
+export function positiveNumber(text: string): number {
+  const value = numberAtLeastZero(text);
+  if (value === 0) throw new InvalidArgumentError('It must be above 0.');
+  return value;
+}
+
+/** Names parted by commas; the option may be given again; write `\\,` for a comma in a name. */
+export function names(text: string, before: string[] = []): string[] {
+  const all = text.split(/(?<!\\),/).map((name) => name.replaceAll('\\,', ',').trim());
+  if (all.includes('')) throw new InvalidArgumentError('Give names parted by commas, such as red,#0000ff.');
+  return [...before, ...all];
+}
+
+/** `OLD=NEW`. */
+export function pairOfNames(text: string, before: [string, string][] = []): [string, string][] {
+  const at = text.lastIndexOf('=');
+  const [old, name] = [text.slice(0, at).trim(), text.slice(at + 1).trim()];
+  if (at < 0 || old === '' || name === '') throw new InvalidArgumentError('Give it as OLD=NEW.');
+  return [...before, [old, name]];
+}

@@ -1,6 +1,14 @@
 import { type Command, Option } from 'commander';
 import { DEFAULT_SETTINGS, type Settings } from '../core/index.js';
-import { lengthMm, numberAtLeastZero, placeMm, positiveLengthMm, wholeNumber } from './optionValues.js';
+import {
+  lengthMm,
+  names,
+  numberAtLeastZero,
+  pairOfNames,
+  placeMm,
+  positiveLengthMm,
+  wholeNumber,
+} from './optionValues.js';
 
 /** Options that say how the lines of a drawing hang together; every command that builds a network has them. */
 export interface NetworkFlags {
@@ -11,6 +19,11 @@ export interface NetworkFlags {
   home?: [number, number];
   end: Settings['end'];
   pens: Settings['pens'];
+  onlyPens?: string[];
+  skipPens?: string[];
+  penOrder?: string[];
+  renamePen?: [string, string][];
+  penWidth?: number;
 }
 
 /** Options that say how the tour is sought. */
@@ -49,7 +62,16 @@ export function addLineOptions(command: Command): Command {
       placeMm,
     )
     .addOption(choice('--end <where>', 'where the tool ends', ['home', 'anywhere'], d.end))
-    .addOption(choice('--pens <rule>', 'what makes a pen', ['colour', 'layer', 'one'], d.pens));
+    .addOption(choice('--pens <rule>', 'what makes a pen', ['colour', 'layer', 'one'], d.pens))
+    .option('--only-pens <names>', 'draw these pens only: names or colours, parted by commas', names)
+    .option('--skip-pens <names>', 'leave these pens out', names)
+    .option('--pen-order <names>', 'these pens first, in this order', names)
+    .option('--rename-pen <old=new>', 'give a pen another name; may be given several times', pairOfNames)
+    .option(
+      '--pen-width <length>',
+      "width of the tool's line: says which strokes are wider",
+      positiveLengthMm,
+    );
 }
 
 export function addSearchOptions(command: Command): Command {
@@ -77,6 +99,11 @@ export function settingsOf(flags: NetworkFlags & Partial<SearchFlags>): Settings
     homeMm: flags.home ?? null,
     end: flags.end,
     pens: flags.pens,
+    onlyPens: flags.onlyPens ?? [],
+    skipPens: flags.skipPens ?? [],
+    penOrder: flags.penOrder ?? [],
+    penNames: flags.renamePen ?? [],
+    penWidthMm: flags.penWidth ?? null,
     effort: flags.effort ?? d.effort,
     seconds: null,
     bound: flags.bound ?? d.bound,

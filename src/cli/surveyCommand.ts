@@ -3,6 +3,7 @@ import { findingLines, surveyDrawing, surveyTable } from '../core/index.js';
 import { version } from '../node/version.js';
 import { EXIT } from './exitCodes.js';
 import { readText, strokedDrawingFrom } from './input.js';
+import { addReadingOptions, type ReadingFlags, readingOf } from './readingOptions.js';
 import { addNetworkOptions, type NetworkFlags, settingsOf } from './sharedOptions.js';
 
 const EXAMPLES = `
@@ -24,12 +25,13 @@ export function surveyCommand(finish: (code: number) => void): Command {
       'Shows what is in an SVG line drawing: page, strokes, pens, layers, components, odd vertices, ends that nearly meet, lines that stand there twice, whatever is not drawn, the fewest runs and the least travel possible.',
     )
     .argument('<drawing>', 'an SVG file; - is standard input');
-  return addNetworkOptions(command)
+  return addReadingOptions(addNetworkOptions(command))
     .option('--json', 'print JSON instead of the table')
     .addHelpText('after', EXAMPLES)
-    .action((path: string, flags: NetworkFlags & { json?: boolean }) => {
-      const drawing = strokedDrawingFrom(readText(path), path);
-      const survey = surveyDrawing(drawing, settingsOf(flags), version());
+    .action((path: string, flags: NetworkFlags & ReadingFlags & { json?: boolean }) => {
+      const settings = settingsOf(flags);
+      const drawing = strokedDrawingFrom(readText(path), path, readingOf(flags), settings);
+      const survey = surveyDrawing(drawing, settings, version());
       const text = flags.json
         ? JSON.stringify(survey, null, 2)
         : [surveyTable(survey), ...findingLines(survey.findings, PLACES_SHOWN)].join('\n');

@@ -3,6 +3,7 @@ import { Command } from 'commander';
 import { realPath } from '../node/files.js';
 import { Ending, EXIT, unexpected } from './exitCodes.js';
 import { numberAtLeastZero } from './optionValues.js';
+import { addReadingOptions, type ReadingFlags, readingOf } from './readingOptions.js';
 import {
   addNetworkOptions,
   addSearchOptions,
@@ -12,7 +13,7 @@ import {
 } from './sharedOptions.js';
 import { inDirectory, outputKind, runTourJob } from './tourJob.js';
 
-interface TourFlags extends NetworkFlags, SearchFlags {
+interface TourFlags extends NetworkFlags, ReadingFlags, SearchFlags {
   output?: string[];
   outDir?: string;
   inPlace?: boolean;
@@ -49,7 +50,7 @@ export function tourCommand(finish: (code: number) => void): Command {
     .option('--out-dir <dir>', 'write each drawing there as SVG, under its own name')
     .option('--in-place', 'write back to the input, or let an output overwrite it')
     .option('--show-travel', 'show the lifted travel in SVG, as a group of its own');
-  return addSearchOptions(addNetworkOptions(command))
+  return addSearchOptions(addReadingOptions(addNetworkOptions(command)))
     .option('--seconds <s>', 'stop improving after this time', numberAtLeastZero)
     .option('--json', 'print the report as JSON instead of the table')
     .option('--quiet', 'print no table and no progress')
@@ -67,6 +68,7 @@ function orderAll(drawings: string[], flags: TourFlags): number {
         input,
         outputs: outputsOf(input),
         settings,
+        reading: readingOf(flags),
         showTravel: flags.showTravel ?? false,
         json: flags.json ?? false,
         quiet: flags.quiet ?? false,

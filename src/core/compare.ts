@@ -3,6 +3,7 @@ import type { LineSet } from './audit/lineSet.js';
 import { linesOfDrawing, linesOfProgram } from './audit/lines.js';
 import type { Drawing } from './drawing/drawing.js';
 import { type PenRule, planPens, solidPenName, strokesOfPens } from './drawing/pens.js';
+import { choosePens, type PenWishes } from './drawing/penWishes.js';
 import type { MachineProfile } from './machine/profile.js';
 import { type Measure, measureProgram } from './measure/measure.js';
 import { programAsDrawn } from './program/fromTours.js';
@@ -10,7 +11,7 @@ import type { Program } from './program/program.js';
 import { type Comparison, pairMoved } from './report/comparison.js';
 import { REPEAT_TOLERANCE_MM } from './settings.js';
 
-export interface CompareSettings {
+export interface CompareSettings extends PenWishes {
   /** How far lines may deviate and still be the same, mm. */
   readonly accuracyMm: number;
   /** Gaps up to this may have been drawn across, mm. */
@@ -30,8 +31,9 @@ export interface ComparedSide {
 }
 
 /** A drawing as it stands, for comparison. */
-export function sideOfDrawing(drawing: Drawing, settings: CompareSettings): ComparedSide {
-  const plan = planPens(drawing, settings.pens);
+export function sideOfDrawing(whole: Drawing, settings: CompareSettings): ComparedSide {
+  const drawing = choosePens(whole, settings.pens, settings);
+  const plan = planPens(drawing, settings.pens, settings);
   const [homeX, homeY] = settings.homeMm ?? [0, drawing.heightMm];
   const home = { homeX, homeY, endAtHome: settings.end === 'home' };
   return {

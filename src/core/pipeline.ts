@@ -3,6 +3,7 @@ import type { LineSet } from './audit/lineSet.js';
 import { linesOfDrawing, linesOfProgram } from './audit/lines.js';
 import type { Drawing } from './drawing/drawing.js';
 import { type PenPlan, planPens, strokesOfPens } from './drawing/pens.js';
+import { choosePens } from './drawing/penWishes.js';
 import { readDrawing } from './drawing/readDrawing.js';
 import type { MachineProfile } from './machine/profile.js';
 import { type Measure, measureProgram } from './measure/measure.js';
@@ -36,16 +37,17 @@ export interface Ordered {
 
 /**
  * The whole job but for writing: drawing → network → matching → tour → program → measure, each pen for
- * itself. The drawing must have a stroke; throws RangeError otherwise.
+ * itself. Pens must leave a stroke to draw; throws RangeError otherwise.
  */
 export function orderDrawing(
-  drawing: Drawing,
+  whole: Drawing,
   settings: Settings,
   profile: MachineProfile,
   hooks: Hooks = {},
 ): Ordered {
+  const drawing = choosePens(whole, settings.pens, settings);
   if (drawing.strokes.count === 0) throw new RangeError('the drawing has no stroke');
-  const plan = planPens(drawing, settings.pens);
+  const plan = planPens(drawing, settings.pens, settings);
   const strokesOfPen = strokesOfPens(plan);
   const [homeX, homeY] = settings.homeMm ?? [0, drawing.heightMm];
   const home: HomeRule = { homeX, homeY, endAtHome: settings.end === 'home' };

@@ -7,6 +7,7 @@ import { overhang } from './overhang.js';
 import type { Ordered } from './pipeline.js';
 import { makeReport, type Report } from './report/report.js';
 import { ROUNDING } from './tour/lowerBound.js';
+import { wideStrokes } from './wideStrokes.js';
 
 /** Gaps may make up this share of what is drawn before it looks like a mistake. */
 const MUCH_BRIDGED = 0.02;
@@ -22,6 +23,7 @@ export function reportOf(ordered: Ordered, audits: readonly AuditResult[], versi
   return makeReport({
     version,
     settings: {
+      ...drawing.reading,
       ...settings,
       homeMm: [before.program.homeX, before.program.homeY],
       machine: profile.name,
@@ -72,7 +74,7 @@ function boundOf({ settings, networks, tours, before, after }: Ordered): Report[
 }
 
 /** What the network and the program have to say besides the figures. */
-function findingsOf({ drawing, networks, before, after }: Ordered): Finding[] {
+function findingsOf({ drawing, settings, networks, before, after }: Ordered): Finding[] {
   const findings: Finding[] = [];
   const note = (code: string, values: Finding['values']) =>
     findings.push({ code, severity: 'note', place: null, values });
@@ -88,6 +90,7 @@ function findingsOf({ drawing, networks, before, after }: Ordered): Finding[] {
   }
   const { drawn } = programBounds(after.program);
   if (drawn) findings.push(...overhang(drawn, drawing));
+  findings.push(...wideStrokes(drawing, settings.penWidthMm));
   if (after === before) note('order-kept', {});
   return findings;
 }

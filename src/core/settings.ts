@@ -1,10 +1,11 @@
 import type { PenRule } from './drawing/pens.js';
+import { NO_PEN_WISHES, type PenWishes } from './drawing/penWishes.js';
 import type { Objective } from './metric/metric.js';
 import type { JunctionRule } from './network/network.js';
 import type { MatchingRule } from './tour/pairing.js';
 
 /** Everything that decides the result. Lengths in mm, the place of home in page mm from the top left. */
-export interface Settings {
+export interface Settings extends PenWishes {
   readonly snapMm: number;
   /** Largest chord error where curves are written or searched as lines. */
   readonly accuracyMm: number;
@@ -16,6 +17,8 @@ export interface Settings {
   readonly homeMm: readonly [number, number] | null;
   readonly end: 'home' | 'anywhere';
   readonly pens: PenRule;
+  /** Width of the tool's line, to tell wider strokes by; null where nobody has said. */
+  readonly penWidthMm: number | null;
   /** Kicks for each end of a connector in the improvement of the tour. */
   readonly effort: number;
   /** Cap on the search in seconds of wall time, null for none; kept by whoever gives `shouldStop`. */
@@ -37,6 +40,8 @@ export const DEFAULT_SETTINGS: Settings = {
   homeMm: null,
   end: 'home',
   pens: 'colour',
+  ...NO_PEN_WISHES,
+  penWidthMm: null,
   effort: 10,
   seconds: null,
   bound: 'quick',

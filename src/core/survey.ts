@@ -1,6 +1,7 @@
 import type { Drawing } from './drawing/drawing.js';
 import { NO_LAYER } from './drawing/drawing.js';
 import { planPens, strokesOfPens } from './drawing/pens.js';
+import { choosePens } from './drawing/penWishes.js';
 import { segmentBox } from './geometry/box.js';
 import { segmentLength } from './geometry/length.js';
 import type { Bounds } from './measure/bounds.js';
@@ -14,6 +15,7 @@ import type { Survey } from './report/survey.js';
 import { REPEAT_TOLERANCE_MM, type Settings } from './settings.js';
 import { boundOnly } from './tour/findTour.js';
 import { nearestNeighbourTravel } from './tour/nearestNeighbour.js';
+import { wideStrokes } from './wideStrokes.js';
 
 /** Loose ends this many snap distances from another end are shown as nearly meeting. */
 const NEAR_MISS_SNAPS = 10;
@@ -26,9 +28,10 @@ const PLACES_SHOWN = 5;
  * What is in a drawing, before anything is ordered: sizes, pens, layers, the network and how few runs and
  * how little travel it allows. Costs a reading, the networks and an exact pairing.
  */
-export function surveyDrawing(drawing: Drawing, settings: Settings, version: string): Survey {
+export function surveyDrawing(whole: Drawing, settings: Settings, version: string): Survey {
+  const drawing = choosePens(whole, settings.pens, settings);
   const { strokes, layers } = drawing;
-  const plan = planPens(drawing, settings.pens);
+  const plan = planPens(drawing, settings.pens, settings);
   const [homeX, homeY] = settings.homeMm ?? [0, drawing.heightMm];
   const lengthMm = strokeLengths(drawing);
   const misses: NearMiss[] = [];
@@ -89,7 +92,11 @@ export function surveyDrawing(drawing: Drawing, settings: Settings, version: str
     },
     pens,
     layers: layerCounts(drawing, layers.length),
-    findings: [...drawing.findings, ...overhang(boxOf(drawing), drawing)].map((finding) => ({
+    findings: [
+      ...drawing.findings,
+      ...overhang(boxOf(drawing), drawing),
+      ...wideStrokes(drawing, settings.penWidthMm),
+    ].map((finding) => ({
       ...finding,
       message: sentence(finding),
     })),

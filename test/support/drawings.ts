@@ -1,5 +1,6 @@
 import type { Drawing } from '../../src/core/drawing/drawing.ts';
 import { NO_LAYER } from '../../src/core/drawing/drawing.ts';
+import { DEFAULT_READING } from '../../src/core/drawing/readingRules.ts';
 import { SegmentBuilder } from '../../src/core/geometry/segments.ts';
 
 /** One stroke for a made-up drawing; points in mm. */
@@ -57,6 +58,7 @@ export function drawingOf(specs: readonly StrokeSpec[], widthMm = 100, heightMm 
     layers: [],
     places: specs.map(() => ({ element: 'path', id: null, line: null, column: null })),
     findings: [],
+    reading: DEFAULT_READING,
   };
 }
 

@@ -1,5 +1,6 @@
 import type { Finding, Place } from '../finding.js';
 import type { Chains } from '../geometry/segments.js';
+import type { ReadingRules } from './readingRules.js';
 
 /**
  * A line drawing after reading. You may rely on:
@@ -27,6 +28,8 @@ export interface Drawing {
   /** Where each drawn element stands in the text; `element` of a stroke is an index here. */
   readonly places: readonly Place[];
   readonly findings: readonly Finding[];
+  /** What was asked of the reading. */
+  readonly reading: ReadingRules;
 }
 
 /** One column per property; stroke i owns segments `first[i]` up to `first[i + 1]`. */

@@ -3,7 +3,7 @@ import type { Drawing, Strokes } from './drawing.js';
 import { FindingLog, Unreadable } from './findingLog.js';
 import { LineIndex } from './lineIndex.js';
 import type { PageSize } from './pageSize.js';
-import { DEFAULT_READING, type ReadingRules } from './readingRules.js';
+import { type ReadingRules, rulesFrom } from './readingRules.js';
 import { childText } from './references.js';
 import { rootContext } from './rootContext.js';
 import { Session } from './session.js';
@@ -26,18 +26,14 @@ export interface ReadOptions extends Partial<ReadingRules> {
  */
 export function readDrawing(text: string, options: ReadOptions = {}): Drawing {
   const name = options.name ?? '';
-  const rules: ReadingRules = { ...DEFAULT_READING, ...options };
-  const { pxPerInch } = rules;
-  if (pxPerInch !== null && !(pxPerInch > 0 && Number.isFinite(pxPerInch))) {
-    throw new RangeError(`pxPerInch must be a positive number, not ${pxPerInch}`);
-  }
+  const rules = rulesFrom(options);
   const log = new FindingLog();
   try {
     return read(text, name, rules, log);
   } catch (error) {
-    if (error instanceof Unreadable) return emptyDrawing(name, log, error);
+    if (error instanceof Unreadable) return emptyDrawing(name, rules, log, error);
     // Memory is the one thing a text can be too large for, and engines say so with a RangeError.
-    if (error instanceof RangeError) return emptyDrawing(name, log, new Unreadable('too-large', null));
+    if (error instanceof RangeError) return emptyDrawing(name, rules, log, new Unreadable('too-large', null));
     throw error;
   }
 }
@@ -62,6 +58,7 @@ function read(text: string, name: string, rules: ReadingRules, log: FindingLog):
     layers: session.layers,
     places: session.places,
     findings: log.list(),
+    reading: rules,
   };
 }
 
@@ -81,7 +78,7 @@ function extentOf(strokes: Strokes, page: PageSize): { widthMm: number; heightMm
   };
 }
 
-function emptyDrawing(name: string, log: FindingLog, error: Unreadable): Drawing {
+function emptyDrawing(name: string, rules: ReadingRules, log: FindingLog, error: Unreadable): Drawing {
   return {
     name,
     title: null,
@@ -94,5 +91,6 @@ function emptyDrawing(name: string, log: FindingLog, error: Unreadable): Drawing
     layers: [],
     places: [],
     findings: [error.finding(), ...log.list()],
+    reading: rules,
   };
 }

@@ -22,3 +22,18 @@ export const DEFAULT_READING: ReadingRules = {
   pageEdge: 'cut',
   fills: 'skip',
 };
+
+/** The defaults where nothing is asked. Throws RangeError where `pxPerInch` is not a positive finite number. */
+export function rulesFrom(asked: Partial<ReadingRules>): ReadingRules {
+  const pxPerInch = asked.pxPerInch ?? DEFAULT_READING.pxPerInch;
+  if (pxPerInch !== null && !(pxPerInch > 0 && Number.isFinite(pxPerInch))) {
+    throw new RangeError(`pxPerInch must be a positive number, not ${pxPerInch}`);
+  }
+  return {
+    pxPerInch,
+    dashes: asked.dashes ?? DEFAULT_READING.dashes,
+    clips: asked.clips ?? DEFAULT_READING.clips,
+    pageEdge: asked.pageEdge ?? DEFAULT_READING.pageEdge,
+    fills: asked.fills ?? DEFAULT_READING.fills,
+  };
+}

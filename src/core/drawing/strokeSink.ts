@@ -178,7 +178,8 @@ export class StrokeSink implements PathSink {
   private mapped(segments: Segments, from: number, to: number): Segments {
     if (!this.mapOfDashes && from === 0 && to === segments.count) return segments;
     const builder = new SegmentBuilder();
-    appendTransformed(builder, segments, from, to, this.mapOfDashes ?? IDENTITY);
+    if (this.mapOfDashes) appendTransformed(builder, segments, from, to, this.mapOfDashes);
+    else builder.append(segments, from, to);
     return builder.finish();
   }
 

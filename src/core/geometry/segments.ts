@@ -95,13 +95,13 @@ export class SegmentBuilder {
     this.used = o + 12;
   }
 
-  /** Appends segments as they are; O(their numbers). */
-  append({ count, kind, offset, data }: Segments): void {
-    for (let i = 0; i < count; i++) {
-      const from = offset[i];
+  /** Appends segments `from` up to, not including, `to` as they are. O(segments). */
+  append({ count, kind, offset, data }: Segments, from = 0, to = count): void {
+    for (let i = from; i < to; i++) {
+      const at = offset[i];
       const size = SEGMENT_SIZE[kind[i]];
-      const o = this.begin(kind[i], data[from], data[from + 1], data[from + 2], data[from + 3]);
-      for (let k = 4; k < size; k++) this.data[o + k] = data[from + k];
+      const o = this.begin(kind[i], data[at], data[at + 1], data[at + 2], data[at + 3]);
+      for (let k = 4; k < size; k++) this.data[o + k] = data[at + k];
       this.used = o + size;
     }
   }

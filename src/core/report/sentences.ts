@@ -30,6 +30,11 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'too-large': () => 'the drawing is larger than can be held in memory',
   'nothing-stroked': () => 'nothing in the drawing has a stroke: there is nothing to draw',
 
+  'wider-than-pen': (v) =>
+    `${some(v.count, 'stroke')} wider than ${v.penMm} mm, up to ${number(v.widestMm)} mm: each is drawn as one line along its middle; a mill would mill such a track away`,
+  'pens-left-out': (v) => `pens left out as asked: ${v.pens} (${some(v.count, 'stroke')})`,
+  'pen-not-there': (v) => `no pen is called ${quoted(v.pen)}; the drawing has ${v.pens}`,
+
   // Reading: read, but not quite as it stands.
   'unknown-entity': (v) => `the entity ${quoted(v.entity)} is not declared${times(v)}`,
   'entity-with-markup': (v) => `the entity ${quoted(v.entity)} holds markup and was left out${times(v)}`,

@@ -1,0 +1,33 @@
+import type { Command } from 'commander';
+import { DEFAULT_READING, type ReadingRules } from '../core/index.js';
+import { positiveNumber } from './optionValues.js';
+import { choice } from './sharedOptions.js';
+
+/** Options that say how a drawing is to be taken; every command that reads one has them. */
+export interface ReadingFlags {
+  pxPerInch?: number;
+  dashes: ReadingRules['dashes'];
+  clips: ReadingRules['clips'];
+  pageEdge: ReadingRules['pageEdge'];
+  fills: ReadingRules['fills'];
+}
+
+const d = DEFAULT_READING;
+
+export function addReadingOptions(command: Command): Command {
+  return command
+    .option(
+      '--px-per-inch <n>',
+      'user units to the inch, 90 or 72 for some older editors (default: 96)',
+      positiveNumber,
+    )
+    .addOption(choice('--dashes <how>', 'dashed lines as their dashes or whole', ['cut', 'solid'], d.dashes))
+    .addOption(choice('--clips <how>', 'lines end at clip paths or go on', ['cut', 'ignore'], d.clips))
+    .addOption(choice('--page-edge <how>', 'lines end at the page or go on', ['cut', 'ignore'], d.pageEdge))
+    .addOption(choice('--fills <how>', 'shapes filled but not stroked', ['skip', 'outline'], d.fills));
+}
+
+export function readingOf(flags: ReadingFlags): Partial<ReadingRules> {
+  const { dashes, clips, pageEdge, fills } = flags;
+  return { pxPerInch: flags.pxPerInch ?? null, dashes, clips, pageEdge, fills };
+}
