@@ -1,8 +1,9 @@
 import { describe, expect, test } from 'vitest';
 import { readDrawing } from '../../src/core/index.ts';
 import { atlasAsSvg, bordersOf, readAtlas } from '../support/atlas.ts';
+import { CHROMIUM, drawInBrowser, useBrowser } from '../support/browser.ts';
 import { expectSound, inWords, orderAndAudit } from '../support/ordering.ts';
-import { lengthsOf } from '../support/readerAndBrowser.ts';
+import { differences, lengthsOf, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /**
  * A world of countries, each a closed outline, so that every shared border stands twice. What is shared,
@@ -45,4 +46,25 @@ test('asked for the fewest lifts, the world takes as many runs as its ends allow
   console.log(`fewest lifts: ${inWords(found)}`);
   expectSound(found, fewestRuns);
   expect(found.after.runs).toBe(fewestRuns);
+});
+
+const browser = useBrowser();
+
+describe.runIf(CHROMIUM !== null)('outlines read as a browser shows them', () => {
+  test.each([
+    { scale: '110m', mmPerDegree: 25.4 / 24 },
+    { scale: '50m', mmPerDegree: 25.4 / 6 },
+  ] as const)('at 1:$scale', async ({ scale, mmPerDegree }) => {
+    // The browser tells places to six digits, so it is given no more of them.
+    const text = atlasAsSvg(readAtlas(scale), mmPerDegree, 3);
+    const [outside] = await drawInBrowser(browser(), [text]);
+    const found = differences(readDrawing(text, WHOLE_LINES), outside.strokes);
+    const { strokes, plain, boxMm, worst } = found;
+    console.log(
+      `${strokes} outlines at 1:${scale}, lengths differ by ${plain.toExponential(1)} at most, boxes by ${boxMm.toExponential(1)} mm`,
+    );
+    expect(strokes).toBeGreaterThan(200);
+    expect(plain, worst).toBeLessThan(1e-5);
+    expect(boxMm, worst).toBeLessThan(1e-3);
+  });
 });

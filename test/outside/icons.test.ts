@@ -2,37 +2,46 @@ import { describe, expect, test } from 'vitest';
 import { readDrawing } from '../../src/core/index.ts';
 import { fewestRuns } from '../../src/core/network/fewestRuns.ts';
 import { type BrowserStroke, CHROMIUM, drawInBrowser, useBrowser } from '../support/browser.ts';
-import { cellOf, cellPx, readIcons, sheetAsTheyAre, sheetTransformed, spread } from '../support/icons.ts';
+import {
+  cellOf,
+  cellPx,
+  ICON_SETS,
+  readIcons,
+  sheetAsTheyAre,
+  sheetTransformed,
+  spread,
+} from '../support/icons.ts';
 import { expectSound, inWords, orderAndAudit } from '../support/ordering.ts';
 import { type Differences, differences, MM_PER_PX, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /**
- * Our reading of stroke icons (npm package lucide-static 1.62.0, ISC licence) against Chromium's: how many
- * sub-paths, how long each is, where it lies. The browser's getTotalLength is right to 1e-6 on lines and
+ * Our reading of stroke icons (npm packages lucide-static 1.62.0, ISC licence, parts of it MIT; heroicons
+ * 2.2.0 and iconoir 7.12.1, both MIT) against Chromium's: how many sub-paths, how long each is, where it lies. The browser's getTotalLength is right to 1e-6 on lines and
  * Bezier curves once they are enlarged, and 1.4e-4 too long on arcs, which it draws as cubics; arcs are
  * therefore integrated from the `d` it has parsed, and held against its own to that accuracy.
  */
 const COLUMNS = 40;
-const asTheyAre = spread(readIcons(), 500);
 const transformed = spread(readIcons(), 200);
 const browser = useBrowser();
 
 describe.runIf(CHROMIUM !== null)('icons read as a browser shows them', () => {
-  test('each file by itself, and all on one sheet', async () => {
-    const text = sheetAsTheyAre(asTheyAre, COLUMNS);
+  test.each(Object.entries(ICON_SETS))('%s: each file by itself, and all on one sheet', async (set, from) => {
+    const icons = spread(readIcons(set as keyof typeof ICON_SETS), 320);
+    const text = sheetAsTheyAre(icons, COLUMNS);
     const [outside] = await drawInBrowser(browser(), [text]);
     expect(outside.arcsDiffer).toBeLessThan(5e-4);
     expect(outside.wholesDiffer).toBeLessThan(1e-3);
-    const perCell: BrowserStroke[][] = asTheyAre.map(() => []);
+    const perCell: BrowserStroke[][] = icons.map(() => []);
     for (const stroke of outside.strokes) perCell[cellOf(stroke.boxPx, COLUMNS)].push(stroke);
-    const files = asTheyAre.map(({ name, text }, i) => {
+    const files = icons.map(({ name, text }, i) => {
       const drawing = readDrawing(text, WHOLE_LINES);
       expect(drawing.strokes.count, name).toBe(perCell[i].length);
       return differences(drawing, perCell[i], cellPx(i, COLUMNS));
     });
     const sheet = differences(readDrawing(text, WHOLE_LINES), outside.strokes);
     for (const found of [...files, sheet]) expectAgreement(found);
-    console.log(`${asTheyAre.length} icon files: ${figures(files)}; on one sheet: ${figures([sheet])}`);
+    const figuresOfBoth = `each: ${figures(files)}; on one sheet: ${figures([sheet])}`;
+    console.log(`${icons.length} files of ${from.package} (${from.licence}), ${figuresOfBoth}`);
   });
 
   test('turned, mirrored, stretched, skewed, fitted into viewports and copied', async () => {

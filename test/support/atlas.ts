@@ -22,8 +22,11 @@ export function readAtlas(scale: '110m' | '50m'): Atlas {
   return { ...atlas, objects: { countries: { ...countries, geometries } } };
 }
 
-/** Every country a path of closed polygons, so that shared borders stand twice; one degree is `mmPerDegree`. */
-export function atlasAsSvg(atlas: Atlas, mmPerDegree: number): string {
+/**
+ * Every country a path of closed polygons, so that shared borders stand twice; one degree is `mmPerDegree`.
+ * Equirectangular: longitude and latitude as they are; four decimals are finer than the file's own grid.
+ */
+export function atlasAsSvg(atlas: Atlas, mmPerDegree: number, decimals = 4): string {
   const [width, height] = [360 * mmPerDegree, 180 * mmPerDegree];
   const paths = feature(atlas, atlas.objects.countries).features.map(({ geometry }) => {
     const { type, coordinates } = geometry as GeoJSON.Polygon | GeoJSON.MultiPolygon;
@@ -32,17 +35,12 @@ export function atlasAsSvg(atlas: Atlas, mmPerDegree: number): string {
       (ring) =>
         `M${ring
           .slice(0, -1)
-          .map(([lon, lat]) => place(lon, lat))
+          .map(([longitude, latitude]) => `${longitude.toFixed(decimals)},${(-latitude).toFixed(decimals)}`)
           .join('L')}Z`,
     );
     return `<path d="${data.join('')}"/>`;
   });
   return `<svg xmlns="http://www.w3.org/2000/svg" width="${width}mm" height="${height}mm" viewBox="-180 -90 360 180" fill="none" stroke="#000" stroke-width=".1">\n${paths.join('\n')}\n</svg>\n`;
-}
-
-/** Equirectangular: longitude and latitude as they are; four places are finer than the file's own grid. */
-function place(longitude: number, latitude: number): string {
-  return `${longitude.toFixed(4)},${(-latitude).toFixed(4)}`;
 }
 
 export interface Borders {

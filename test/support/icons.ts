@@ -1,28 +1,37 @@
 import { readdirSync, readFileSync } from 'node:fs';
-import { createRequire } from 'node:module';
-import { dirname, join } from 'node:path';
+import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
 
 /**
- * Stroke icons of the npm package lucide-static 1.62.0 (ISC licence, parts of it MIT), drawn by many hands
- * on a grid of 24 px: a development dependency only.
+ * Open sets of stroke icons in the npm registry, drawn by many hands on a grid of 24 px: development
+ * dependencies only. Icons are chosen by plain rule, and no check names one.
  */
-const FOLDER = join(dirname(createRequire(import.meta.url).resolve('lucide-static/package.json')), 'icons');
+export const ICON_SETS = {
+  lucide: { package: 'lucide-static 1.62.0', licence: 'ISC, parts of it MIT', folder: 'icons' },
+  heroicons: { package: 'heroicons 2.2.0', licence: 'MIT', folder: '24/outline' },
+  iconoir: { package: 'iconoir 7.12.1', licence: 'MIT', folder: 'icons/regular' },
+} as const;
 const CELL_PX = 40;
 
 export interface Icon {
   readonly name: string;
-  /** The file as it is. */
+  /** The file as it is, with its size where it does not say: a grid of 24 px. */
   readonly text: string;
   /** What stands inside its root element. */
   readonly body: string;
 }
 
-export function readIcons(): Icon[] {
-  return readdirSync(FOLDER)
+export function readIcons(set: keyof typeof ICON_SETS = 'lucide'): Icon[] {
+  const { package: named, folder } = ICON_SETS[set];
+  const path = fileURLToPath(new URL(`../../node_modules/${named.split(' ')[0]}/${folder}`, import.meta.url));
+  return readdirSync(path)
     .filter((file) => file.endsWith('.svg'))
     .sort()
     .map((file) => {
-      const text = readFileSync(join(FOLDER, file), 'utf8');
+      const read = readFileSync(join(path, file), 'utf8');
+      const text = /<svg[^>]*\swidth=/.test(read)
+        ? read
+        : read.replace('<svg', '<svg width="24" height="24"');
       const body = text.slice(text.indexOf('>', text.indexOf('<svg')) + 1, text.lastIndexOf('</svg>'));
       return { name: file.slice(0, -'.svg'.length), text, body };
     });
