@@ -6,6 +6,7 @@ import { sortDots } from './dots.js';
 import { addEntries } from './entries.js';
 import { strokeEnds } from './marks.js';
 import type { Network, NetworkOptions } from './network.js';
+import { splitWhereLinesOverlap } from './overlaps.js';
 import { cutIntoPieces } from './pieces.js';
 import { findRepeats } from './repeats.js';
 import { splitWhereJointsPart } from './sharedJoints.js';
@@ -28,6 +29,9 @@ export function buildNetwork(drawing: Drawing, strokes: Uint32Array, options: Ne
   if (options.junctions !== 'ends') {
     splitWhereEndsTouch(marks, drawing, pieces, options.snapMm);
     splitWhereJointsPart(marks, drawing, strokes);
+    if (options.repeats === 'once') {
+      splitWhereLinesOverlap(marks, drawing, pieces, options.repeatToleranceMm, options.snapMm);
+    }
   }
   const snapped = snapMarks(marks, options.snapMm);
   const spans = cutAtMarks(marks, snapped, drawing, strokes, options.snapMm);
