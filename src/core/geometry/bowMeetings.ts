@@ -135,9 +135,9 @@ function oneWay(
   }
 }
 
-/** Where f changes its sign between low and high, by halving. */
+/** Where f changes its sign between low and high, by halving; one of the two may be 0. */
 function rootOf(f: (x: number) => number, low: number, high: number): number {
-  const rising = f(low) < 0;
+  const rising = f(low) < 0 || f(high) > 0;
   for (let k = 0; k < HALVINGS; k++) {
     const mid = (low + high) / 2;
     if (mid <= low || mid >= high) break;

@@ -57,12 +57,12 @@ export function curveMeetings(
   const cross = (p: CurvePiece, q: CurvePiece, s: number, t: number): void => {
     solver.toCrossing(s, t);
     if (isMeeting() && own(p, solver.s) && own(q, solver.t)) visit(solver.s, solver.t);
-    else visit(s, t);
+    else if (solver.gapAt(s, t) <= margin) visit(s, t);
   };
   const touch = (p: CurvePiece, q: CurvePiece, s: number, t: number): void => {
     const isBetter = solver.toContact(s, t) && solver.gap <= margin && own(p, solver.s) && own(q, solver.t);
     if (isBetter) visit(solver.s, solver.t);
-    else visit(s, t);
+    else if (solver.gapAt(s, t) <= margin) visit(s, t);
   };
   const bows = (p: CurvePiece, q: CurvePiece): boolean =>
     bowMeetings(

@@ -97,11 +97,16 @@ export class MeetingSolver {
     }
     this.s = s;
     this.t = t;
-    this.points(s, t);
-    const rx = p[0] - q[0];
-    const ry = p[1] - q[1];
-    this.gap = Math.sqrt(rx * rx + ry * ry);
+    this.gap = this.gapAt(s, t);
     return settled;
+  }
+
+  /** The distance between the two points. */
+  gapAt(s: number, t: number): number {
+    this.points(s, t);
+    const rx = this.p[0] - this.q[0];
+    const ry = this.p[1] - this.q[1];
+    return Math.sqrt(rx * rx + ry * ry);
   }
 
   private points(s: number, t: number): void {
