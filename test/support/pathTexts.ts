@@ -51,9 +51,7 @@ export const pathText: fc.Arbitrary<string> = fc
 
 /** Forms on which browsers and the grammar of SVG 2 part, or numbers too large for a float. */
 const DISPUTED: readonly RegExp[] = [
-  /\d\.(?!\d)/, // `5.` is a number in SVG 1.1 only; browsers refuse it
   /e(?!-1(?!\d))/, // what is left of `7e-`: a number 7 or none
-  /,\s*[A-Za-z]/, // a comma before a command: browsers pass over it
 ];
 
 /** The same with one character put in, taken out or changed. */

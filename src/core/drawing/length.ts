@@ -1,4 +1,5 @@
 import { type LengthUnit, toMm, UNITS_PER_INCH } from '../geometry/unit.js';
+import { evaluate, isMath, type Quantity } from './calc.js';
 
 /** Which side of the viewport a percentage is taken of (SVG 2, "Units"). */
 export type Axis = 'x' | 'y' | 'other';
@@ -9,28 +10,46 @@ export interface LengthContext {
   readonly viewportWidth: number;
   readonly viewportHeight: number;
   readonly pxPerInch: number;
+  /** What `rem` stands for, user units; 16 where the root says nothing. */
+  readonly rootFontSize?: number | undefined;
 }
 
 /** A number with a unit as written; `%`, `em`, `ex`, `ch` and `rem` are relative to something. */
 export interface WrittenLength {
   readonly value: number;
-  readonly unit: LengthUnit | '%' | 'em' | 'ex' | 'ch' | 'rem' | '';
+  readonly unit: LengthUnit | '%' | 'em' | 'ex' | 'ch' | 'rem' | '' | 'calc';
+  /** Of unit `calc`, whose value is 0 here: what is to be worked out. */
+  readonly sum?: string;
 }
 
-const SHAPE = /^([+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?)\s*(%|[a-z]*)$/i;
+/** A number of CSS: no trailing point, nothing between it and its unit. */
+const SHAPE = /^([+-]?(?:\d+|\d*\.\d+)(?:e[+-]?\d+)?)(%|[a-z]*)$/i;
 /** Longer than any length in earnest; matching takes time with the square of a hostile one. */
 const LONGEST = 400;
 
 /** null for anything but a finite number and a unit known here. */
 export function readLength(text: string): WrittenLength | null {
   const trimmed = text.trim();
+  if (isMath(trimmed)) return isLengthSum(trimmed) ? { value: 0, unit: 'calc', sum: trimmed } : null;
   const match = trimmed.length > LONGEST ? null : SHAPE.exec(trimmed);
   if (!match) return null;
   const value = Number(match[1]) + 0;
   if (!Number.isFinite(value)) return null;
-  const unit = match[2].toLowerCase();
-  if (unit === 'q') return { value, unit: 'Q' };
-  return isUnit(unit) ? { value, unit } : null;
+  const unit = unitOf(match[2]);
+  return unit === null ? null : { value, unit };
+}
+
+function unitOf(text: string): WrittenLength['unit'] | null {
+  const unit = text.toLowerCase();
+  if (unit === 'q') return 'Q';
+  return isUnit(unit) ? unit : null;
+}
+
+/** Worked out with lengths of no size, which shows whether it can be worked out at all. */
+function isLengthSum(sum: string): boolean {
+  const reader = (value: number, unit: string): Quantity | null =>
+    unitOf(unit) === null ? null : { kind: unit === '' ? 'number' : 'length', value };
+  return (evaluate(sum, reader)?.kind ?? 'angle') !== 'angle';
 }
 
 function isUnit(unit: string): unit is WrittenLength['unit'] {
@@ -48,8 +67,18 @@ export function toUserUnits(
   context: LengthContext,
   fontSize = 16,
 ): number {
-  const { value, unit } = length;
+  const { value, unit, sum } = length;
   switch (unit) {
+    case 'calc': {
+      const part = (v: number, text: string): Quantity | null => {
+        const u = unitOf(text);
+        if (u === null) return null;
+        return u === ''
+          ? { kind: 'number', value: v }
+          : { kind: 'length', value: toUserUnits({ value: v, unit: u }, axis, context, fontSize) };
+      };
+      return evaluate(sum ?? '', part)?.value ?? 0;
+    }
     case '':
     case 'px':
       return value;
@@ -63,7 +92,7 @@ export function toUserUnits(
     case 'ch':
       return (value * fontSize) / 2;
     case 'rem':
-      return value * 16;
+      return value * (context.rootFontSize ?? 16);
     default:
       return (toMm(value, unit) * context.pxPerInch) / 25.4;
   }

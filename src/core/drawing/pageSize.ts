@@ -1,5 +1,5 @@
 import { toMm } from '../geometry/unit.js';
-import { readLength } from './length.js';
+import { readLength, toUserUnits } from './length.js';
 import type { ViewBox } from './viewBox.js';
 
 /** CSS gives this size to a replaced element that says nothing of its own, px. */
@@ -27,9 +27,10 @@ export function pageSize(
   height: string | null,
   viewBox: ViewBox | null,
   pxPerInch: number,
+  fontSize = 16,
 ): PageSize {
-  const w = side(width, viewBox?.width, pxPerInch);
-  const h = side(height, viewBox?.height, pxPerInch);
+  const w = side(width, viewBox?.width, pxPerInch, fontSize);
+  const h = side(height, viewBox?.height, pxPerInch, fontSize);
   const known = {
     widthGiven: w.given !== null,
     heightGiven: h.given !== null,
@@ -69,18 +70,27 @@ interface Side {
   readonly physical: boolean;
 }
 
-function side(text: string | null, viewBoxSide: number | undefined, pxPerInch: number): Side {
+function side(
+  text: string | null,
+  viewBoxSide: number | undefined,
+  pxPerInch: number,
+  fontSize: number,
+): Side {
   const nothing = { given: null, share: null, physical: false };
   const length = text === null ? null : readLength(text);
-  if (!length || length.value <= 0) return nothing;
+  if (!length || (length.value <= 0 && length.unit !== 'calc')) return nothing;
   const { value, unit } = length;
   if (unit === '%') {
     if (viewBoxSide === undefined) return nothing;
     return { ...nothing, share: (toMm(viewBoxSide, 'px', pxPerInch) * value) / 100 };
   }
   let mm: number;
-  if (unit === 'em' || unit === 'rem') mm = toMm(value * 16, 'px', pxPerInch);
-  else if (unit === 'ex' || unit === 'ch') mm = toMm(value * 8, 'px', pxPerInch);
+  if (unit === 'calc') {
+    // A sum with percentages has nothing to be a share of, and is not usable.
+    const nowhere = { viewportWidth: Number.NaN, viewportHeight: Number.NaN, pxPerInch };
+    mm = toMm(toUserUnits(length, 'x', nowhere, fontSize), 'px', pxPerInch);
+  } else if (unit === 'em' || unit === 'rem') mm = toMm(value * fontSize, 'px', pxPerInch);
+  else if (unit === 'ex' || unit === 'ch') mm = toMm((value * fontSize) / 2, 'px', pxPerInch);
   else mm = toMm(value, unit === '' ? 'px' : unit, pxPerInch);
   if (!isUsable(mm)) return nothing;
   return { given: mm, share: null, physical: ['mm', 'cm', 'in', 'pt', 'pc', 'Q'].includes(unit) };

@@ -6,6 +6,9 @@ import { TextCursor } from './textCursor.js';
 /** Characters of a drawing's path data that go through the grammar, about 2 MB/s of it. */
 const GRAMMAR_CHARACTERS = 200_000;
 
+/** The packaged grammar takes `23.` for a number, as SVG 1.1 did. */
+const TRAILING_POINT = /\.(?!\d)/;
+
 /**
  * Reads path data by the packaged grammar while there is little of it, and by our own tokens for long
  * data and for data with an error, of which the grammar gives nothing. Both give the same commands.
@@ -21,7 +24,7 @@ export class PathReader {
       this.commands.clear();
       return -1;
     }
-    if (this.spent + data.length <= GRAMMAR_CHARACTERS) {
+    if (this.spent + data.length <= GRAMMAR_CHARACTERS && !TRAILING_POINT.test(data)) {
       this.spent += data.length;
       if (readPathByGrammar(data, this.commands)) return -1;
     }

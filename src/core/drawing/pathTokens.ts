@@ -34,7 +34,7 @@ export function readPathTokens(data: string, cursor: TextCursor, out: PathComman
 function readRepeats(letter: number, arity: number, cursor: TextCursor, out: PathCommands): number {
   cursor.skipSpace();
   let code = letter;
-  let needed = true;
+  let mayEnd = false;
   for (;;) {
     const base = out.push(code);
     for (let k = 0; k < arity; k++) {
@@ -46,15 +46,20 @@ function readRepeats(letter: number, arity: number, cursor: TextCursor, out: Pat
           out.numbers[base + k] = cursor.value;
           continue;
         }
-      } else if (k === 0 && !needed) {
+      } else if (k === 0 && mayEnd) {
         out.pop();
         return -1;
       }
       out.pop();
       return start;
     }
-    needed = cursor.skipCommaSpace();
+    // A comma before the next command is an error by the grammar, and passed over by browsers.
+    mayEnd = !cursor.skipCommaSpace() || cursor.atEnd() || isLetter(cursor.text.charCodeAt(cursor.at));
     // Pairs after a moveto are linetos.
     if ((letter & ~32) === M) code = letter === M ? 76 : 108;
   }
+}
+
+function isLetter(c: number): boolean {
+  return (c | 32) >= 97 && (c | 32) <= 122;
 }

@@ -23,7 +23,9 @@ export function rootContext(session: Session): Root {
   const unitMm = 25.4 / units;
   const specified = session.cascade.specifiedOn(root);
   const viewBox = viewBoxOf(session, root);
-  const page = pageSize(specified.get('width') ?? null, specified.get('height') ?? null, viewBox, units);
+  const [width, height] = [specified.get('width') ?? null, specified.get('height') ?? null];
+  const fontSize = rootFontSize(session, specified, units, `${width} ${height}`);
+  const page = pageSize(width, height, viewBox, units, fontSize);
   if (page.physical && !viewBox && pxPerInch === null) {
     session.report('user-unit-assumed', root, { pxPerInch: units });
   }
@@ -37,7 +39,8 @@ export function rootContext(session: Session): Root {
     viewportHeight: page.heightMm / unitMm,
     pxPerInch: units,
   };
-  const styled = { ...outside, style: styleOf(session, root, specified, outside) };
+  const style = styleOf(session, root, specified, outside);
+  const styled: Context = { ...outside, style, rootFontSize: style.fontSize };
   if (specified.get('display')?.trim() === 'none' || readOpacity(specified.get('opacity') ?? '') === 0) {
     session.report('hidden', root);
     return { page, inside: null };
@@ -49,6 +52,27 @@ export function rootContext(session: Session): Root {
   // The viewport is in mm here, so that a viewBox in mm comes out with a scale of exactly 1.
   const rectangle = { x: 0, y: 0, width: page.widthMm, height: page.heightMm };
   return { page, inside: contextInside(styled, map, rectangle, viewBox, aspect) };
+}
+
+/** Asked only where the size is in units of the font: styles need the page's size, and it theirs. */
+function rootFontSize(
+  session: Session,
+  specified: ReadonlyMap<string, string>,
+  pxPerInch: number,
+  sizes: string,
+): number {
+  if (!/\d(?:r?em|ex|ch)\b/i.test(sizes)) return INITIAL_STYLE.fontSize;
+  const font = [...specified].filter(([name]) => name.startsWith('font'));
+  return styleOf(session, session.tree.root, new Map(font), {
+    map: IDENTITY,
+    style: INITIAL_STYLE,
+    layer: NO_LAYER,
+    atTop: true,
+    copies: null,
+    viewportWidth: 0,
+    viewportHeight: 0,
+    pxPerInch,
+  }).fontSize;
 }
 
 /**

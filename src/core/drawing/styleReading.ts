@@ -13,13 +13,15 @@ export function styleOf(
   specified: ReadonlyMap<string, string>,
   context: Context,
 ): Style {
-  const { byId } = session.tree;
+  // The table of ids is made when first asked for: most drawings never need it.
+  const named = (id: string) => session.tree.byId.get(id)?.name ?? '';
   return computeStyle(specified, context.style, {
     viewportWidth: context.viewportWidth,
     viewportHeight: context.viewportHeight,
     pxPerInch: context.pxPerInch,
-    isPaintServer: (id) => PAINT_SERVERS.has(byId.get(id)?.name ?? ''),
-    isMarker: (id) => byId.get(id)?.name === 'marker',
+    rootFontSize: context.rootFontSize,
+    isPaintServer: (id) => PAINT_SERVERS.has(named(id)),
+    isMarker: (id) => named(id) === 'marker',
     reportColour: (found) => session.report('colour-not-read', element, { found: shown(found) }),
     reportLength: (attribute, found) =>
       session.report('length-error', element, { attribute, found: shown(found) }),

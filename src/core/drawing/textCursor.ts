@@ -37,7 +37,7 @@ export class TextCursor {
 
   /**
    * Reads a number into `value`, or returns false and stays. A trailing point (`23.`), legal in
-   * SVG 1.1, is accepted. The result is the double nearest to the text.
+   * SVG 1.1 only, is refused as browsers do. The result is the double nearest to the text.
    */
   number(): boolean {
     const { text, at: start } = this;
@@ -56,6 +56,7 @@ export class TextCursor {
     }
     if (c === 46) {
       c = text.charCodeAt(++at);
+      if (!(c >= 48 && c <= 57)) return false;
       for (; c >= 48 && c <= 57; c = text.charCodeAt(++at)) {
         digits++;
         if (mantissa <= LARGEST_EXTENDABLE) {

@@ -33,7 +33,7 @@ export function readViewBox(text: string): ViewBox | null {
   return cursor.atEnd() && width >= 0 && height >= 0 ? { x, y, width, height } : null;
 }
 
-const ASPECT = /^\s*(?:defer\s+)?(?:(none)|x(Min|Mid|Max)Y(Min|Mid|Max))(?:\s+(meet|slice))?\s*$/;
+const ASPECT = /^\s*(?:(none)|x(Min|Mid|Max)Y(Min|Mid|Max))(?:\s+(meet|slice))?\s*$/;
 
 /** null where the attribute is wrong (SVG 2, "The preserveAspectRatio attribute"). */
 export function readAspectRatio(text: string): AspectRatio | null {

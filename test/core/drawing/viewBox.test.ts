@@ -19,7 +19,6 @@ describe('preserveAspectRatio', () => {
     [' xMaxYMid  slice ', { alignX: 1, alignY: 0.5, mode: 'slice' }],
     ['none', { alignX: 0, alignY: 0, mode: 'none' }],
     ['none slice', { alignX: 0, alignY: 0, mode: 'none' }],
-    ['defer xMidYMid', { alignX: 0.5, alignY: 0.5, mode: 'meet' }],
   ])('%j', (text, expected) => {
     expect(readAspectRatio(text)).toEqual(expected);
   });
