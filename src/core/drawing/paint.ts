@@ -14,7 +14,8 @@ export const BLACK: Paint = { kind: 'colour', hex: '#000000', visible: true };
 const LONGEST = 1000;
 const URL = /^url\(\s*(?:"([^"]*)"|'([^']*)'|([^)]*?))\s*\)\s*/i;
 /** Colour functions that are valid CSS and not evaluated here. */
-const UNEVALUATED = /^(?:lab|lch|oklab|oklch|color|color-mix|device-cmyk|light-dark)\(/i;
+const UNEVALUATED =
+  /^(?:color-mix|contrast-color|light-dark|rgba?|hsla?|hwb|lab|lch|oklab|oklch|color)\((?:\s*from\b|.*\bin\b|.*\b(?:currentcolor|var)\b)/i;
 
 /**
  * A value of `stroke` or `fill` (SVG 2, "Specifying paint"): a paint server that is missing gives way

@@ -23,6 +23,19 @@ describe('colours', () => {
     ['hsla(0.5turn, 100%, 50%, 0.5)', '#00ffff', 0.5],
     ['hwb(150 20% 10%)', '#33e68c', 1],
     ['hwb(45 40% 80%)', '#555555', 1],
+    // CSS Color 4 §§9 and 10: its examples, with the bytes that a browser shows.
+    ['lab(29.2345% 39.3825 20.0664)', '#7d2329', 1],
+    ['lch(52.2345% 72.2 56.2)', '#c65d06', 1],
+    ['oklab(40.101% 0.1147 0.0453)', '#7d2329', 1],
+    ['oklch(59.69% 0.156 49.77)', '#c65d07', 1],
+    ['color(srgb 1 50% 0 / 30%)', '#ff8000', 0.3],
+    ['color(display-p3 1 0 0)', '#ff0000', 1],
+    ['color(xyz 0.9505 1 1.089)', '#ffffff', 1],
+    ['rgb(none 255 none)', '#00ff00', 1],
+    ['rgb(calc(255 / 2) max(0, 3) 0)', '#800300', 1],
+    ['light-dark(red, blue)', '#ff0000', 1],
+    ['color-mix(in srgb, red, blue)', '#800080', 1],
+    ['CanvasText', '#000000', 1],
     ['transparent', '#000000', 0],
     [' RebeccaPurple ', '#663399', 1],
     ['red', '#ff0000', 1],
@@ -40,6 +53,15 @@ describe('colours', () => {
     'reddish',
     'rgb(a,b,c)',
     'constructor',
+    // The old spelling with commas does not mix, and has no "none".
+    'rgb(10%, 20, 30)',
+    'rgb(none, 1, 2)',
+    'hsl(120, 100, 50)',
+    'hwb(120, 0%, 0%)',
+    'rgb(1, 2, 3 / 4)',
+    'rgb (1 2 3)',
+    'color(srgb 1 0.5)',
+    'color(nowhere 1 1 1)',
   ])('%j is none', (text) => {
     expect(readColour(text)).toBeNull();
   });
@@ -80,7 +102,7 @@ describe('paint', () => {
   });
 
   test('a colour that is valid and not evaluated is drawn, in black, and said', () => {
-    expect(readPaint('oklch(0.7 0.1 200)', known)).toEqual({
+    expect(readPaint('rgb(from red r g b)', known)).toEqual({
       paint: { kind: 'colour', hex: '#000000', visible: true },
       exact: false,
     });
