@@ -13,6 +13,7 @@ export type { Drawing, Layer, Strokes } from './drawing/drawing.js';
 export { type Pen, type PenPlan, type PenRule, planPens } from './drawing/pens.js';
 export { choosePens, type PenWishes } from './drawing/penWishes.js';
 export { type ReadOptions, readDrawing } from './drawing/readDrawing.js';
+export { DEFAULT_LIMITS, LIMIT_NAMES, type LimitName, type ReadingLimits } from './drawing/readingLimits.js';
 export { DEFAULT_READING, type ReadingRules } from './drawing/readingRules.js';
 export type { Finding, Place, Severity } from './finding.js';
 export type { Chains, Segments } from './geometry/segments.js';

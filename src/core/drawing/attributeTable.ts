@@ -1,4 +1,8 @@
 import { Column } from './column.js';
+import { isQualifiedName } from './xmlCharacters.js';
+
+/** Ordinary, `xmlns`, `xmlns:…`, and with any other prefix. */
+export type NameKind = 0 | 1 | 2 | 3;
 
 const DECODED = 0xffffffff;
 const MANY = 32;
@@ -12,6 +16,8 @@ export class AttributeTable {
   readonly names: string[] = [];
   /** What stands before the colon of each name, null where there is none. */
   readonly prefixes: (string | null)[] = [];
+  /** By name: 0 for an ordinary one, else one that has to do with namespaces. */
+  readonly kinds: NameKind[] = [];
   private readonly numberOfName = new Map<string, number>();
   /** Attributes of element e: from first[e] up to first[e + 1], or to the last. */
   private readonly first = new Column();
@@ -61,12 +67,16 @@ export class AttributeTable {
     this.add(name, this.decoded.push(value) - 1, DECODED);
   }
 
+  /** Below 0 where it is no legal name. */
   numberOf(name: string): number {
     let number = this.numberOfName.get(name);
     if (number === undefined) {
+      if (!isQualifiedName(name)) return -1;
       number = this.names.push(name) - 1;
       const colon = name.indexOf(':');
-      this.prefixes.push(colon < 0 ? null : name.slice(0, colon));
+      const prefix = colon < 0 ? null : name.slice(0, colon);
+      this.prefixes.push(prefix);
+      this.kinds.push(name === 'xmlns' ? 1 : prefix === 'xmlns' ? 2 : prefix === null ? 0 : 3);
       this.numberOfName.set(name, number);
     }
     return number;

@@ -1,3 +1,5 @@
+import { orTooLarge } from './tooLarge.js';
+
 /** Whole numbers in a typed array that grows by doubling. */
 export class Column {
   length = 0;
@@ -5,7 +7,7 @@ export class Column {
 
   push(value: number): number {
     if (this.length === this.values.length) {
-      const values = new Uint32Array(2 * this.length);
+      const values = orTooLarge(() => new Uint32Array(2 * this.length));
       values.set(this.values);
       this.values = values;
     }

@@ -11,6 +11,8 @@ export const READING_FINDINGS = {
   'not-svg': 'error', // root: name of the root element
   'xml-bad-character': 'error', // codePoint
   'xml-bad-tag': 'error',
+  'xml-bad-doctype': 'error',
+  'xml-bad-entity': 'error', // entity: its text opens an element and does not close it
   'xml-bad-attribute': 'error', // attribute
   'xml-duplicate-attribute': 'error', // attribute
   'xml-tag-mismatch': 'error', // expected, found
@@ -18,15 +20,16 @@ export const READING_FINDINGS = {
   'xml-cut-off': 'error', // inside: what the text ends in the middle of; open: elements not closed; startLine, startColumn
   'xml-two-roots': 'error', // found: name of the second
   'xml-text-outside-root': 'error', // found
-  'xml-too-deep': 'error', // limit
   'xml-unreadable': 'error',
   'too-large': 'error',
-  'entity-limit': 'error', // entity; limitCharacters
+  'past-limit': 'error', // limit: its name; value
+  'entity-limit': 'error', // entity; limit, value
   'entity-loop': 'error', // entity
 
   // The text is read, but not quite as it stands.
   'unknown-entity': 'warning', // entity
-  'entity-with-markup': 'warning', // entity
+  'external-entity': 'warning', // entity
+  'xml-not-strict': 'warning', // what
   'svg-namespace-missing': 'warning',
   'undeclared-prefix': 'warning', // prefix
   'style-rule-not-read': 'warning', // rule
@@ -48,8 +51,8 @@ export const READING_FINDINGS = {
   'use-missing': 'warning', // href
   'use-external': 'warning', // href
   'use-loop': 'warning', // href
-  'use-too-deep': 'warning', // limit
-  'use-limit': 'warning', // limit; of: copies | elements | segments | characters
+  'use-limit': 'warning', // limit: its name; value
+  'text-cut': 'warning', // element; limit, value
   'switch-without-match': 'warning',
 
   // Read, and not drawn, or drawn otherwise than on a screen.

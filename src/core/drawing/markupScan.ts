@@ -1,296 +1,324 @@
-import type { Place } from '../finding.js';
-import { AttributeTable } from './attributeTable.js';
-import { Column } from './column.js';
-import { skipDoctype } from './doctype.js';
-import { Entities } from './entities.js';
-import { type FindingLog, Unreadable } from './findingLog.js';
-import type { LineIndex } from './lineIndex.js';
-import { LongText } from './longText.js';
+import { AttributeDefaults } from './attributeDefaults.js';
+import type { AttributeTable } from './attributeTable.js';
+import type { Column } from './column.js';
+import { readDoctype } from './doctype.js';
+import { type Decoded, Entities, referenceAt, shownReference } from './entities.js';
+import { Unreadable } from './findingLog.js';
+import type { MarkupLexer } from './markupLexer.js';
+import type { ReadingLimits } from './readingLimits.js';
+import type { SkeletonWriter } from './skeleton.js';
+import { findForbidden, isBlank, isXmlSpace } from './xmlCharacters.js';
 
-/** Elements may stand this deep in one another; drawings stay below 50. */
-const DEEPEST = 1024;
-const NO_PLACE = { element: null, id: null };
-/** Names that svg-parser takes as they are; `__` is kept for our own placeholders (and so `__proto__`). */
-const PLAIN_NAME = /^(?!__)[A-Za-z0-9:_-]+$/;
-const NAME_START = /[A-Za-z_:\u0080-\uffff]/;
-// biome-ignore lint/suspicious/noControlCharactersInRegex: the ones XML 1.0 §2.2 forbids are looked for.
-const FORBIDDEN = /[\0-\x08\x0b\x0c\x0e-\x1f\ufffe\uffff]/;
+const XML_DECLARATION =
+  /^<\?xml[ \t\r\n]+version[ \t\r\n]*=[ \t\r\n]*(?:"1\.[0-9]+"|'1\.[0-9]+')(?:[ \t\r\n]+encoding[ \t\r\n]*=[ \t\r\n]*(?:"[A-Za-z][\w.-]*"|'[A-Za-z][\w.-]*'))?(?:[ \t\r\n]+standalone[ \t\r\n]*=[ \t\r\n]*(?:"(?:yes|no)"|'(?:yes|no)'))?[ \t\r\n]*\?>$/;
 
-/**
- * Well-formed markup with everything taken out that svg-parser would misread or choke on: each
- * element has one attribute, its number; texts are `v0`, `v1`, …; odd tag names `__0`, `__1`, …; no
- * prolog, comment, CDATA section, processing instruction or reference is left.
- */
-export interface Skeleton {
-  readonly markup: string;
-  readonly texts: readonly string[];
-  readonly oddNames: readonly string[];
-  /** By the elements' numbers, which follow document order. */
+/** What the scan writes, by the elements' numbers, which follow document order. */
+export interface Scanned {
+  readonly writer: SkeletonWriter;
   readonly attributes: AttributeTable;
-  /** Offset of each element's `<` in the text. */
-  readonly starts: Readonly<Uint32Array>;
+  /** Offset of each element's `<` in the document. */
+  readonly starts: Column;
 }
 
 /**
  * Checks the text's well-formedness (XML 1.0: one root, tags balanced, attributes quoted and unique,
- * legal characters) and makes its skeleton. Throws Unreadable with the line and column otherwise.
- * Cost: O(text); attribute values are slices, not copies.
+ * legal names and characters), expands its entities and writes its skeleton. Throws Unreadable with the
+ * line and column otherwise. Cost: O(text); attribute values are slices, not copies.
  */
-export function scanMarkup(text: string, lines: LineIndex, log: FindingLog): Skeleton {
-  return new MarkupScan(text, lines, log).run();
+export function scanMarkup(lexer: MarkupLexer, limits: ReadingLimits, out: Scanned): void {
+  new MarkupScan(lexer, limits, out).run();
 }
 
 class MarkupScan {
-  private at = 0;
-  private nextLess = -1;
-  private nextAmpersand = -1;
-  private readonly markup = new LongText();
   private pendingText = '';
   private rootDone = false;
-  private readonly texts: string[] = [];
-  private readonly attributes: AttributeTable;
-  private readonly oddNames: string[] = [];
-  private readonly placeholders = new Map<string, string>();
-  private readonly starts = new Column();
-  private readonly open: string[] = [];
-  private readonly openStarts: number[] = [];
-  private readonly entities = new Entities();
+  private hasDoctype = false;
+  /** Elements open where the text being read began: an entity cannot close them. */
+  private floor = 0;
+  private readonly entities: Entities;
+  private readonly defaults = new AttributeDefaults();
 
   constructor(
-    private readonly text: string,
-    private readonly lines: LineIndex,
-    private readonly log: FindingLog,
+    private readonly lexer: MarkupLexer,
+    private readonly limits: ReadingLimits,
+    private readonly out: Scanned,
   ) {
-    this.attributes = new AttributeTable(text);
+    this.entities = new Entities(limits);
   }
 
-  run(): Skeleton {
-    this.checkBeginning();
-    const { text } = this;
-    while (this.at < text.length) {
-      const less = text.indexOf('<', this.at);
-      this.takeText(text.slice(this.at, less < 0 ? text.length : less), true);
-      if (less < 0) break;
-      this.at = less;
-      const c = text[less + 1];
-      if (c === '/') this.closeTag();
-      else if (c === '?') this.skipTo('?>', 'processing instruction');
-      else if (c === '!') this.declaration();
+  run(): void {
+    const { lexer } = this;
+    this.beginning();
+    this.content();
+    if (lexer.open.length > 0) throw lexer.cutOff('element');
+    if (!this.rootDone) throw lexer.fail('not-xml', 0, { found: lexer.text.trim().slice(0, 20) });
+    this.out.writer.finish();
+  }
+
+  private beginning(): void {
+    const { lexer } = this;
+    const { text } = lexer;
+    if (text.charCodeAt(0) === 0xfeff) lexer.at = 1;
+    let first = lexer.at;
+    while (isXmlSpace(text.charCodeAt(first))) first++;
+    if (first === text.length) throw new Unreadable('empty-input', null);
+    if (text[first] !== '<') {
+      // biome-ignore lint/suspicious/noControlCharactersInRegex: kept out of what people will read.
+      const found = text.slice(first, first + 20).replace(/[\0-\x1f\ufffd]/g, '?');
+      throw lexer.fail('not-xml', first, { found });
+    }
+    const bad = findForbidden(text);
+    if (bad >= 0) throw lexer.fail('xml-bad-character', bad, { codePoint: text.charCodeAt(bad) });
+    if (!/^<\?xml[ \t\r\n]/.test(text.slice(lexer.at, lexer.at + 6))) return;
+    const end = text.indexOf('?>', lexer.at);
+    if (end < 0) throw lexer.cutOff('processing instruction');
+    const declaration = text.slice(lexer.at, end + 2);
+    if (declaration.length > 1000 || !XML_DECLARATION.test(declaration)) {
+      lexer.notStrict('the XML declaration', lexer.at);
+    }
+    lexer.at = end + 2;
+  }
+
+  private content(): void {
+    const { lexer } = this;
+    while (lexer.at < lexer.text.length) {
+      const from = lexer.at;
+      const less = lexer.lessFrom(from);
+      if (less > from) this.takeText(from, less);
+      lexer.at = less;
+      if (less === lexer.text.length) return;
+      const c = lexer.text.charCodeAt(less + 1);
+      if (c === 47) this.closeTag();
+      else if (c === 63) lexer.instruction();
+      else if (c === 33) this.declaration();
       else this.openTag();
     }
-    if (this.open.length > 0) throw this.cutOff('element');
-    if (!this.rootDone) throw this.fail('not-xml', 0, { found: text.trim().slice(0, 20) });
-    const { texts, oddNames, attributes, starts } = this;
-    return { markup: this.markup.finish(), texts, oddNames, attributes, starts: starts.values };
   }
 
-  private checkBeginning(): void {
-    if (this.text.charCodeAt(0) === 0xfeff) this.at = 1;
-    const first = this.text.slice(this.at).search(/\S/);
-    if (first < 0) throw new Unreadable('empty-input', null);
-    if (this.text[this.at + first] !== '<') {
-      // biome-ignore lint/suspicious/noControlCharactersInRegex: kept out of what people will read.
-      const found = this.text.slice(this.at + first, this.at + first + 20).replace(/[\0-\x1f\ufffd]/g, '?');
-      throw this.fail('not-xml', this.at + first, { found });
-    }
-    const bad = this.text.search(FORBIDDEN);
-    if (bad >= 0) throw this.fail('xml-bad-character', bad, { codePoint: this.text.charCodeAt(bad) });
+  private takeText(from: number, to: number): void {
+    const { lexer } = this;
+    if (isBlank(lexer.text, from, to)) return;
+    const raw = lexer.text.slice(from, to);
+    this.checkInside(raw);
+    const misplaced = raw.indexOf(']]>');
+    if (misplaced >= 0) lexer.notStrict(']]> in text', from + misplaced);
+    if (lexer.ampersandFrom(from) >= to) this.pendingText += raw;
+    else this.takeReferences(raw, from);
   }
 
-  private takeText(raw: string, decode: boolean): void {
-    if (raw === '' || !/\S/.test(raw)) return;
-    if (this.open.length === 0) {
-      throw this.fail('xml-text-outside-root', this.at, { found: raw.trim().slice(0, 20) });
+  private checkInside(raw: string): void {
+    if (this.lexer.open.length > 0) return;
+    throw this.lexer.fail('xml-text-outside-root', this.lexer.at, { found: raw.trim().slice(0, 20) });
+  }
+
+  /** Text with references: an entity that holds markup is read where its reference stands. */
+  private takeReferences(raw: string, offset: number): void {
+    let from = 0;
+    for (let at = raw.indexOf('&'); at >= 0; at = raw.indexOf('&', at)) {
+      const reference = referenceAt(raw, at);
+      const value = this.guarded(offset + at, () => reference && this.entities.resolve(reference.name));
+      if (!reference || !value) {
+        this.report({ unknown: shownReference(raw, at), external: null }, offset + at);
+        at++;
+        continue;
+      }
+      this.pendingText += raw.slice(from, at);
+      if (value.markup === null) this.pendingText += value.text;
+      else this.expand(reference.name, offset + at);
+      this.report(value, offset + at);
+      at = from = reference.end;
     }
-    this.pendingText += decode ? this.decode(raw) : raw;
+    this.pendingText += raw.slice(from);
+  }
+
+  /** Reads an entity's text as content; it must be balanced in itself (XML 1.0 §4.3.2). */
+  private expand(name: string, offset: number): void {
+    const { lexer, entities, floor } = this;
+    const text = entities.replacementOf(name) ?? '';
+    this.guarded(offset, () => {
+      entities.enter(name);
+      entities.spend(name, text.length);
+    });
+    lexer.enter(text, offset);
+    this.floor = lexer.open.length;
+    this.content();
+    if (lexer.open.length > this.floor) throw lexer.fail('xml-bad-entity', 0, { entity: name });
+    this.floor = floor;
+    lexer.leave();
+    entities.leave(name);
   }
 
   /** Writes the text gathered since the last tag: comments between do not part it. */
   private flushText(): void {
     if (this.pendingText === '') return;
-    this.markup.add(`v${this.texts.push(this.pendingText) - 1}`);
+    this.out.writer.text(this.pendingText);
     this.pendingText = '';
   }
 
   private declaration(): void {
-    const { text, at } = this;
-    if (text.startsWith('<!--', at)) this.skipTo('-->', 'comment', 4);
-    else if (text.startsWith('<![CDATA[', at)) {
+    const { lexer } = this;
+    const { text, at } = lexer;
+    if (lexer.startsWith('<!--')) lexer.comment();
+    else if (lexer.startsWith('<![CDATA[')) {
       const end = text.indexOf(']]>', at);
-      if (end < 0) throw this.cutOff('CDATA section');
-      this.takeText(text.slice(at + 9, end), false);
-      this.at = end + 3;
-    } else if (text.startsWith('<!DOCTYPE', at) && this.starts.length === 0) {
-      const end = skipDoctype(text, at, this.entities);
-      if (end < 0) throw this.cutOff('document type');
-      this.at = end;
-    } else if (text.length - at < 9) throw this.cutOff('tag');
-    else throw this.fail('xml-bad-tag', at);
-  }
-
-  private skipTo(mark: string, inside: string, past = 2): void {
-    const end = this.text.indexOf(mark, this.at + past);
-    if (end < 0) throw this.cutOff(inside);
-    this.at = end + mark.length;
+      if (end < 0) throw lexer.cutOff('CDATA section');
+      const raw = text.slice(at + 9, end);
+      this.checkInside(raw);
+      this.pendingText += raw;
+      lexer.at = end + 3;
+    } else if (lexer.startsWith('<!DOCTYPE') && !this.hasDoctype && this.out.starts.length === 0) {
+      this.hasDoctype = true;
+      readDoctype(lexer, this.entities, this.defaults);
+    } else if (text.length - at < 9 && !lexer.isAside) throw lexer.cutOff('tag');
+    else throw lexer.fail('xml-bad-tag', at);
   }
 
   private closeTag(): void {
-    const start = this.at;
-    this.at += 2;
-    const name = this.name();
-    this.skipSpace();
-    if (this.at >= this.text.length) throw this.cutOff('tag');
-    if (name === '' || this.text[this.at] !== '>') throw this.fail('xml-bad-tag', start);
-    const expected = this.open.pop();
-    this.openStarts.pop();
-    if (expected === undefined) throw this.fail('xml-unopened-tag', start, { found: name });
-    if (expected !== name) throw this.fail('xml-tag-mismatch', start, { expected, found: name });
-    this.at++;
+    const { lexer } = this;
+    const start = lexer.at;
+    lexer.at += 2;
+    const name = lexer.name();
+    lexer.skipSpace();
+    if (lexer.at >= lexer.text.length) throw lexer.cutOff('tag');
+    if (name === '' || lexer.text.charCodeAt(lexer.at) !== 62) throw lexer.fail('xml-bad-tag', start);
+    if (lexer.open.length === this.floor) throw lexer.fail('xml-unopened-tag', start, { found: name });
+    const expected = lexer.open.pop();
+    lexer.openStarts.pop();
+    if (expected !== name) throw lexer.fail('xml-tag-mismatch', start, { expected, found: name });
+    lexer.at++;
     this.flushText();
-    this.markup.add(`</${this.plainName(name)}>`);
-    if (this.open.length === 0) this.rootDone = true;
+    this.out.writer.end();
+    if (lexer.open.length === 0) this.rootDone = true;
   }
 
   private openTag(): void {
-    const { text } = this;
-    const start = this.at++;
-    const name = this.name();
-    if (this.at >= text.length) throw this.cutOff('tag', start);
-    if (name === '') throw this.fail('xml-bad-tag', start);
-    if (this.rootDone) throw this.fail('xml-two-roots', start, { found: name });
-    if (this.open.length >= DEEPEST) throw this.fail('xml-too-deep', start, { limit: DEEPEST });
+    const { lexer } = this;
+    const { text } = lexer;
+    const { writer, attributes, starts } = this.out;
+    const start = lexer.at++;
+    const name = lexer.name();
+    if (lexer.at >= text.length) throw lexer.cutOff('tag', start);
+    if (name === '') throw lexer.fail('xml-bad-tag', start);
+    const tag = writer.tagName(name);
+    if (tag === null) throw lexer.fail('xml-bad-tag', start);
+    if (this.rootDone) throw lexer.fail('xml-two-roots', start, { found: name });
+    this.checkLimits(start);
     this.flushText();
-    this.markup.add(`<${this.plainName(name)} n="e${this.starts.push(start)}"`);
-    this.attributes.beginElement();
+    starts.push(lexer.offsetOf(start));
+    attributes.beginElement();
     for (;;) {
-      const before = this.at;
-      this.skipSpace();
-      if (this.at >= text.length) throw this.cutOff('tag', start);
-      const c = text[this.at];
-      if (c === '>') {
-        this.open.push(name);
-        this.openStarts.push(start);
-        this.at++;
-        this.markup.add('>');
+      const spaced = lexer.skipSpace();
+      if (lexer.at >= text.length) throw lexer.cutOff('tag', start);
+      const c = text.charCodeAt(lexer.at);
+      if (c === 62) {
+        lexer.at++;
+        this.addDefaults(name, start);
+        lexer.open.push(name);
+        lexer.openStarts.push(start);
+        writer.start(tag);
         return;
       }
-      if (c === '/') {
-        if (this.at + 1 >= text.length) throw this.cutOff('tag', start);
-        if (text[this.at + 1] !== '>') throw this.fail('xml-bad-tag', start);
-        this.at += 2;
-        this.markup.add('/>');
-        if (this.open.length === 0) this.rootDone = true;
+      if (c === 47) {
+        if (lexer.at + 1 >= text.length) throw lexer.cutOff('tag', start);
+        if (text.charCodeAt(lexer.at + 1) !== 62) throw lexer.fail('xml-bad-tag', start);
+        lexer.at += 2;
+        this.addDefaults(name, start);
+        writer.empty(tag);
+        if (lexer.open.length === 0) this.rootDone = true;
         return;
       }
-      if (this.at === before) throw this.fail('xml-bad-tag', start);
+      if (!spaced) throw lexer.fail('xml-bad-tag', start);
       this.attribute(start);
     }
   }
 
+  private checkLimits(start: number): void {
+    const { lexer, limits } = this;
+    if (lexer.open.length >= limits.depth) {
+      throw lexer.fail('past-limit', start, { limit: 'depth', value: limits.depth });
+    }
+    if (this.out.starts.length >= limits.elements) {
+      throw lexer.fail('past-limit', start, { limit: 'elements', value: limits.elements });
+    }
+  }
+
   private attribute(tagStart: number): void {
-    const { text } = this;
-    const start = this.at;
-    const name = this.name();
-    this.skipSpace();
-    const hasEquals = text[this.at] === '=';
-    if (hasEquals) this.at++;
-    this.skipSpace();
-    if (this.at >= text.length) throw this.cutOff('tag', tagStart);
-    const quote = text[this.at];
-    if (name === '') throw this.fail('xml-bad-tag', tagStart);
-    if (!hasEquals || (quote !== '"' && quote !== "'")) {
-      throw this.fail('xml-bad-attribute', start, { attribute: name });
+    const { lexer, limits } = this;
+    const { attributes } = this.out;
+    const { text } = lexer;
+    const start = lexer.at;
+    const name = lexer.name();
+    lexer.skipSpace();
+    const hasEquals = text.charCodeAt(lexer.at) === 61;
+    if (hasEquals) {
+      lexer.at++;
+      lexer.skipSpace();
     }
-    const from = this.at + 1;
+    if (lexer.at >= text.length) throw lexer.cutOff('tag', tagStart);
+    const quote = text[lexer.at];
+    if (name === '') throw lexer.fail('xml-bad-tag', tagStart);
+    const bad = () => lexer.fail('xml-bad-attribute', start, { attribute: name.slice(0, 60) });
+    if (!hasEquals || (quote !== '"' && quote !== "'")) throw bad();
+    const from = lexer.at + 1;
     const end = text.indexOf(quote, from);
-    if (this.nextLess < from) this.nextLess = this.nextOf('<', from);
+    const less = lexer.lessFrom(from);
     // A `<` inside a value most often means that the closing quote is missing.
-    if (end >= 0 ? this.nextLess < end : this.nextLess < text.length) {
-      throw this.fail('xml-bad-attribute', start, { attribute: name });
+    if (end >= 0 ? less < end : less < text.length) throw bad();
+    if (end < 0) throw lexer.cutOff('attribute', tagStart);
+    if (end - from > limits.attributeCharacters) {
+      throw lexer.fail('past-limit', start, {
+        limit: 'attributeCharacters',
+        value: limits.attributeCharacters,
+      });
     }
-    if (end < 0) throw this.cutOff('attribute', tagStart);
-    const number = this.attributes.numberOf(name);
-    if (this.attributes.isRepeated(number)) {
-      throw this.fail('xml-duplicate-attribute', start, { attribute: name });
+    const number = attributes.numberOf(name);
+    if (number < 0) throw bad();
+    if (attributes.isRepeated(number)) {
+      throw lexer.fail('xml-duplicate-attribute', start, { attribute: name.slice(0, 60) });
     }
-    if (this.nextAmpersand < from) this.nextAmpersand = this.nextOf('&', from);
-    if (this.nextAmpersand > end) this.attributes.add(number, from, end);
-    else this.attributes.addDecoded(number, this.decode(text.slice(from, end)));
-    this.at = end + 1;
+    const plain = lexer.ampersandFrom(from) > end;
+    if (plain && !lexer.isAside) attributes.add(number, from, end);
+    else {
+      const raw = text.slice(from, end);
+      attributes.addDecoded(number, plain ? raw : this.decodeValue(raw, start, bad));
+    }
+    lexer.at = end + 1;
   }
 
-  private nextOf(character: string, from: number): number {
-    const at = this.text.indexOf(character, from);
-    return at < 0 ? this.text.length : at;
+  private decodeValue(raw: string, start: number, bad: () => Unreadable): string {
+    const value = this.guarded(start, () => this.entities.decode(raw));
+    // XML 1.0 §3.1, "No < in Attribute Values": not through an entity either.
+    if (value.markup !== null) throw bad();
+    this.report(value, start);
+    return value.text;
   }
 
-  private name(): string {
-    const { text } = this;
-    const start = this.at;
-    if (!NAME_START.test(text[start] ?? '')) return '';
-    let at = start + 1;
-    while (at < text.length && !endsName(text.charCodeAt(at))) at++;
-    this.at = at;
-    return text.slice(start, at);
-  }
-
-  private skipSpace(): void {
-    for (;;) {
-      const c = this.text.charCodeAt(this.at);
-      if (c !== 32 && c !== 10 && c !== 9 && c !== 13) return;
-      this.at++;
+  private addDefaults(name: string, start: number): void {
+    if (this.defaults.isEmpty) return;
+    const values = this.defaults.of(name);
+    if (!values) return;
+    const { attributes } = this.out;
+    for (const [attribute, value] of values) {
+      const number = attributes.numberOf(attribute);
+      this.guarded(start, () => this.entities.spend(attribute, value.length + attribute.length));
+      if (!attributes.isRepeated(number)) attributes.addDecoded(number, value);
     }
   }
 
-  private plainName(name: string): string {
-    let plain = this.placeholders.get(name);
-    if (plain === undefined) {
-      plain = name;
-      if (!PLAIN_NAME.test(name)) plain = `__${this.oddNames.push(name) - 1}`;
-      this.placeholders.set(name, plain);
-    }
-    return plain;
+  private report(value: Pick<Decoded, 'unknown' | 'external'>, offset: number): void {
+    const { log } = this.lexer;
+    const place = () => this.lexer.placeAt(offset);
+    if (value.unknown !== null) log.add('unknown-entity', place, { entity: value.unknown });
+    if (value.external !== null) log.add('external-entity', place, { entity: `&${value.external};` });
   }
 
-  private decode(raw: string): string {
-    if (raw.indexOf('&') < 0) return raw;
-    const start = this.at;
-    const place = (): Place => this.placeAt(start);
+  /** What entities refuse has the place of the reference. */
+  private guarded<T>(offset: number, work: () => T): T {
     try {
-      const { text, unknown, markup } = this.entities.decode(raw);
-      if (unknown !== null) this.log.add('unknown-entity', place, { entity: unknown });
-      if (markup !== null) this.log.add('entity-with-markup', place, { entity: markup });
-      return text;
+      return work();
     } catch (error) {
-      if (error instanceof Unreadable) throw new Unreadable(error.code, place(), error.values);
-      throw error;
+      if (!(error instanceof Unreadable)) throw error;
+      throw new Unreadable(error.code, error.place ?? this.lexer.placeAt(offset), error.values);
     }
   }
-
-  private placeAt(offset: number): Place {
-    return { ...NO_PLACE, ...this.lines.locate(offset) };
-  }
-
-  private fail(code: Unreadable['code'], offset: number, values = {}): Unreadable {
-    return new Unreadable(code, this.placeAt(offset), values);
-  }
-
-  /** The text ends too early; the place is its end, and what is begun and not ended stands in the values. */
-  private cutOff(inside: string, start?: number): Unreadable {
-    const begun = this.lines.locate(start ?? (inside === 'element' ? this.openStarts.at(-1)! : this.at));
-    const place = { ...this.placeAt(this.text.length), element: this.open.at(-1) ?? null };
-    return new Unreadable('xml-cut-off', place, {
-      inside,
-      open: this.open.length,
-      startLine: begun.line,
-      startColumn: begun.column,
-    });
-  }
-}
-
-/** Whitespace, or one of `" ' / < = >`. */
-function endsName(c: number): boolean {
-  return (
-    c === 32 || c === 62 || c === 61 || c === 47 || c === 60 || c === 34 || c === 39 || (c <= 13 && c >= 9)
-  );
 }

@@ -1,3 +1,5 @@
+import { orTooLarge } from './tooLarge.js';
+
 const M = 77;
 const Z = 90;
 
@@ -35,7 +37,7 @@ export class PathCommands {
     }
     const at = this.used;
     if (at + 8 > this.numbers.length) {
-      const numbers = new Float64Array(2 * this.numbers.length);
+      const numbers = orTooLarge(() => new Float64Array(2 * this.numbers.length));
       numbers.set(this.numbers);
       this.numbers = numbers;
     }

@@ -3,17 +3,21 @@ import type { Drawing, Strokes } from './drawing.js';
 import { FindingLog, Unreadable } from './findingLog.js';
 import { LineIndex } from './lineIndex.js';
 import type { PageSize } from './pageSize.js';
+import { limitsFrom, type ReadingLimits } from './readingLimits.js';
 import { type ReadingRules, rulesFrom } from './readingRules.js';
 import { childText } from './references.js';
 import { rootContext } from './rootContext.js';
 import { Session } from './session.js';
 import { StrokeSink } from './strokeSink.js';
 import { readTree } from './svgTree.js';
+import { orTooLarge } from './tooLarge.js';
 import { walk } from './walk.js';
 
 export interface ReadOptions extends Partial<ReadingRules> {
   /** What the drawing is called in reports; a file name, most often. */
   readonly name?: string;
+  /** Limits to lift or lower; the others stay as `DEFAULT_LIMITS` has them. */
+  readonly limits?: Partial<ReadingLimits>;
 }
 
 /**
@@ -21,26 +25,32 @@ export interface ReadOptions extends Partial<ReadingRules> {
  * where a pen can; whatever is left out or drawn otherwise is a finding.
  *
  * Never throws on any text: one that cannot be read gives a drawing without strokes and a finding of
- * severity `error`. Throws RangeError where `pxPerInch` is not a positive finite number.
+ * severity `error`. Throws RangeError where `pxPerInch` is not a positive finite number, or a limit not a
+ * number of at least 0.
  * Cost: O(text + segments); `use` copies are capped.
  */
 export function readDrawing(text: string, options: ReadOptions = {}): Drawing {
   const name = options.name ?? '';
   const rules = rulesFrom(options);
+  const limits = limitsFrom(options.limits ?? {});
   const log = new FindingLog();
   try {
-    return read(text, name, rules, log);
+    return read(text, name, rules, limits, log);
   } catch (error) {
     if (error instanceof Unreadable) return emptyDrawing(name, rules, log, error);
-    // Memory is the one thing a text can be too large for, and engines say so with a RangeError.
-    if (error instanceof RangeError) return emptyDrawing(name, rules, log, new Unreadable('too-large', null));
     throw error;
   }
 }
 
-function read(text: string, name: string, rules: ReadingRules, log: FindingLog): Drawing {
-  const tree = readTree(text, new LineIndex(text), log);
-  const session = new Session(tree, log, rules);
+function read(
+  text: string,
+  name: string,
+  rules: ReadingRules,
+  limits: ReadingLimits,
+  log: FindingLog,
+): Drawing {
+  const tree = orTooLarge(() => readTree(text, new LineIndex(text), log, limits));
+  const session = new Session(tree, log, rules, limits);
   const { page, inside } = rootContext(session);
   if (inside) walk(session, tree.root, inside);
   const strokes = session.sink.finish();
@@ -48,8 +58,8 @@ function read(text: string, name: string, rules: ReadingRules, log: FindingLog):
   if (page.guess) session.report('size-guessed', tree.root, { widthMm, heightMm, basis: page.guess });
   return {
     name,
-    title: childText(tree.root, 'title'),
-    description: childText(tree.root, 'desc'),
+    title: wordsOf(session, 'title'),
+    description: wordsOf(session, 'desc'),
     widthMm,
     heightMm,
     elementCount: session.elementCount,
@@ -60,6 +70,16 @@ function read(text: string, name: string, rules: ReadingRules, log: FindingLog):
     findings: log.list(),
     reading: rules,
   };
+}
+
+/** The root's title or description. */
+function wordsOf(session: Session, element: 'title' | 'desc'): string | null {
+  const { root } = session.tree;
+  const { textCharacters: value } = session.limits;
+  const text = childText(root, element, value + 1);
+  if (text === null || text.length <= value) return text;
+  session.report('text-cut', root, { element, limit: 'textCharacters', value });
+  return text.slice(0, value);
 }
 
 /** A page that reaches from the origin to the far ends of what is drawn, where the drawing names none. */

@@ -12,10 +12,15 @@ export function labelOf(session: Session, element: SvgElement): string | null {
   return label?.replace(/\s+/g, ' ').trim() || childText(element, 'title');
 }
 
+/** Characters of a layer's name taken from its title. */
+const LONGEST_LABEL = 1000;
+
 /** The text of the first child of that name, null where there is none or it is blank. */
-export function childText(element: SvgElement, name: string): string | null {
+export function childText(element: SvgElement, name: string, limit = LONGEST_LABEL): string | null {
   for (const child of element.children) {
-    if (typeof child !== 'string' && child.isSvg && child.name === name) return textOf(child, 1000) || null;
+    if (typeof child !== 'string' && child.isSvg && child.name === name) {
+      return textOf(child, limit) || null;
+    }
   }
   return null;
 }

@@ -7,6 +7,7 @@ import type { ReadingCode } from './findingKinds.js';
 import type { FindingLog } from './findingLog.js';
 import type { LengthContext } from './length.js';
 import { PathReader } from './pathReader.js';
+import { DEFAULT_LIMITS, type ReadingLimits } from './readingLimits.js';
 import type { ReadingRules } from './readingRules.js';
 import { StrokeSink } from './strokeSink.js';
 import type { SvgElement, SvgTree } from './svgTree.js';
@@ -34,7 +35,7 @@ type Values = Readonly<Record<string, string | number>>;
 /** One reading of one drawing: what it has gathered so far. */
 export class Session {
   readonly cascade: Cascade;
-  readonly sink = new StrokeSink();
+  readonly sink: StrokeSink;
   readonly paths = new PathReader();
   readonly colours: string[] = [];
   readonly layers: Layer[] = [];
@@ -48,7 +49,9 @@ export class Session {
     readonly tree: SvgTree,
     readonly log: FindingLog,
     readonly rules: ReadingRules,
+    readonly limits: ReadingLimits = DEFAULT_LIMITS,
   ) {
+    this.sink = new StrokeSink(limits.segments);
     this.cascade = new Cascade(tree, log);
     this.placeNumbers = new Uint32Array(tree.elementCount);
   }

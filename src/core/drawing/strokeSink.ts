@@ -6,7 +6,9 @@ import { LINE, SegmentBuilder, type Segments } from '../geometry/segments.js';
 import { appendTransformed } from '../geometry/transform.js';
 import { Column } from './column.js';
 import type { Strokes } from './drawing.js';
-import { isDrawable, SubPath } from './subPath.js';
+import { DEFAULT_LIMITS } from './readingLimits.js';
+import { isDrawable, pastSegments, SubPath } from './subPath.js';
+import { orTooLarge } from './tooLarge.js';
 
 /** What draws a path: points in the element's user units. */
 export interface PathSink {
@@ -61,7 +63,7 @@ export class StrokeSink implements PathSink {
   /** Something of the element has an inside: a curve, or more than one line in a row. */
   hasArea = false;
   private readonly builder = new SegmentBuilder();
-  private readonly sub = new SubPath();
+  private readonly sub: SubPath;
   private readonly first = new Column();
   private readonly colour = new Column();
   private readonly layer = new Column();
@@ -76,6 +78,11 @@ export class StrokeSink implements PathSink {
   /** Dashes cut so far. */
   private dashes = 0;
   private drawn: Drawn = nothingDrawn();
+
+  /** Throws Unreadable past `limit` segments, or where memory is short. */
+  constructor(private readonly limit: number = DEFAULT_LIMITS.segments) {
+    this.sub = new SubPath(limit);
+  }
 
   /** Begins an element; with `properties` null its paths are measured, not drawn. */
   begin(map: Affine, properties: StrokeProperties | null): void {
@@ -122,7 +129,7 @@ export class StrokeSink implements PathSink {
     first.set(this.first.values.subarray(0, count));
     first[count] = this.builder.count;
     return {
-      segments: this.builder.finish(),
+      segments: orTooLarge(() => this.builder.finish()),
       count,
       first,
       closed: Uint8Array.from(this.closed.values.subarray(0, count)),
@@ -139,6 +146,7 @@ export class StrokeSink implements PathSink {
     const { sub, drawn } = this;
     if (!sub.started) return;
     this.segmentsSeen += sub.count;
+    if (this.segmentsSeen > this.limit) throw pastSegments(this.limit);
     if (sub.count > 1 || (sub.count === 1 && sub.view().kind[0] !== LINE)) this.hasArea = true;
     if (!sub.drew) {
       // A lone moveto draws nothing, dots included (SVG 2, "Zero length path segments").
@@ -161,6 +169,7 @@ export class StrokeSink implements PathSink {
     const { first, dot, segments } = dashes;
     this.dashes += dot.length;
     this.segmentsSeen += dashes.segments.count;
+    if (this.segmentsSeen > this.limit) throw pastSegments(this.limit);
     for (let k = 0; k < dot.length; k++) {
       if (dot[k] && !properties.dots) continue;
       this.stroke(properties, this.mapped(segments, first[k], first[k + 1]), false, dot[k]);
@@ -195,7 +204,7 @@ export class StrokeSink implements PathSink {
     const { builder } = this;
     this.drawn.strokes++;
     this.first.push(builder.count);
-    builder.append(segments);
+    orTooLarge(() => builder.append(segments));
     this.closed.push(closed ? 1 : 0);
     this.dot.push(dot ? 1 : 0);
     this.dashed.push(properties.dashed ? 1 : 0);

@@ -1,6 +1,14 @@
 import { type Affine, applyX, applyY } from '../geometry/affine.js';
 import type { ArcCentre } from '../geometry/arc.js';
 import { ARC, CUBIC, LINE, SEGMENT_SIZE, type Segments } from '../geometry/segments.js';
+import { Unreadable } from './findingLog.js';
+import { DEFAULT_LIMITS } from './readingLimits.js';
+import { orTooLarge } from './tooLarge.js';
+
+/** What is thrown where a drawing has more segments than the limit. */
+export function pastSegments(value: number): Unreadable {
+  return new Unreadable('past-limit', null, { limit: 'segments', value });
+}
 
 /** Coordinates beyond this (1000 km) are taken for an overflow: nothing after reading could use them. */
 const FURTHEST_MM = 1e9;
@@ -24,6 +32,9 @@ export class SubPath {
   private kind = new Uint8Array(256);
   private offset = new Uint32Array(256);
   private data = new Float64Array(2048);
+
+  /** Throws Unreadable past `limit` segments. */
+  constructor(private readonly limit: number = DEFAULT_LIMITS.segments) {}
 
   setMap(map: Affine): void {
     this.map = map;
@@ -124,10 +135,18 @@ export class SubPath {
     const i = this.count++;
     const o = this.used;
     if (i === this.kind.length) {
-      this.kind = grown(this.kind, new Uint8Array(2 * i));
-      this.offset = grown(this.offset, new Uint32Array(2 * i));
+      if (i >= this.limit) throw pastSegments(this.limit);
+      const length = Math.min(2 * i, this.limit);
+      this.kind = grown(this.kind, new Uint8Array(length));
+      this.offset = grown(this.offset, new Uint32Array(length));
     }
-    if (o + 12 > this.data.length) this.data = grown(this.data, new Float64Array(2 * this.data.length));
+    if (o + 12 > this.data.length) {
+      const { length } = this.data;
+      this.data = grown(
+        this.data,
+        orTooLarge(() => new Float64Array(2 * length)),
+      );
+    }
     this.kind[i] = kind;
     this.offset[i] = o;
     this.data[o] = this.x;

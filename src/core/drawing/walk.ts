@@ -3,6 +3,7 @@ import { readOpacity, type Style } from './computedStyle.js';
 import { firstThatHolds, holds } from './conditions.js';
 import { CopyLimits } from './copyLimits.js';
 import { drawElement, lengthOf, SHAPES } from './drawElement.js';
+import type { LimitName } from './readingLimits.js';
 import { hrefOf, isCopyOf, isInside, labelOf } from './references.js';
 import { type Context, type Session, shown } from './session.js';
 import { styleOf } from './styleReading.js';
@@ -49,10 +50,12 @@ export function walk(session: Session, root: SvgElement, context: Context): void
 
 class Walk {
   private readonly frames: Frame[] = [];
-  private readonly limits = new CopyLimits();
+  private readonly limits: CopyLimits;
   private readonly shapeCounts = new Map<SvgElement, number>();
 
-  constructor(private readonly session: Session) {}
+  constructor(private readonly session: Session) {
+    this.limits = new CopyLimits(session.limits);
+  }
 
   run(root: SvgElement, context: Context): void {
     this.enter(root.children, context);
@@ -74,12 +77,9 @@ class Walk {
     const { name } = element;
     const copied = frame.useSize !== null;
     if (!element.isSvg || (NOT_RENDERED.has(name) && !(name === 'symbol' && copied))) return;
-    if (
-      context.copies &&
-      !this.limits.allowsElement(session.tree.attributes.sizeOf(element.number) + element.children.length)
-    ) {
-      session.report('use-limit', element, { limit: this.limits.limit, of: this.limits.of });
-      return;
+    if (context.copies) {
+      const size = session.tree.attributes.sizeOf(element.number) + element.children.length;
+      if (this.isPast(this.limits.passedByElement(size), element)) return;
     }
     const isLayer = context.atTop && name === 'g';
     const layer = isLayer ? this.addLayer(element) : context.layer;
@@ -164,11 +164,10 @@ class Walk {
     else if (!target) session.report('use-missing', element, first);
     else if (isInside(element, target) || isCopyOf(context, target))
       session.report('use-loop', element, first);
-    else if (!this.limits.allowsDepth(context.copies?.depth ?? 0)) {
-      session.report('use-too-deep', element, { limit: this.limits.limit });
-    } else if (!this.limits.allowsCopy()) {
-      session.report('use-limit', element, { limit: this.limits.limit, of: this.limits.of });
-    } else {
+    else if (
+      !this.isPast(this.limits.passedByDepth(context.copies?.depth ?? 0), element) &&
+      !this.isPast(this.limits.passedByCopy(), element)
+    ) {
       const length = (name: string, axis: 'x' | 'y'): number =>
         lengthOf(session, element, specified, name, axis, context.style, context) ?? 0;
       const map = multiply(context.map, translation(length('x', 'x'), length('y', 'y')));
@@ -176,6 +175,12 @@ class Walk {
       const size = { width: specified.get('width') ?? null, height: specified.get('height') ?? null };
       this.enter([target], { ...context, map, copies }, size);
     }
+  }
+
+  private isPast(limit: LimitName | null, element: SvgElement): boolean {
+    if (limit === null) return false;
+    this.session.report('use-limit', element, { limit, value: this.session.limits[limit] });
+    return true;
   }
 
   private addLayer(element: SvgElement): number {

@@ -14,6 +14,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'not-svg': (v) => `this is XML, but not SVG: its root is <${v.root}>`,
   'xml-bad-character': (v) => `a character that XML does not allow (code ${v.codePoint})`,
   'xml-bad-tag': () => 'a tag that is not well formed',
+  'xml-bad-doctype': () => 'a document type declaration that is not well formed',
+  'xml-bad-entity': (v) => `the entity ${quoted(v.entity)} opens an element that it does not close`,
   'xml-bad-attribute': (v) => `the attribute ${quoted(v.attribute)} is not well formed`,
   'xml-duplicate-attribute': (v) => `the attribute ${quoted(v.attribute)} stands twice in one tag`,
   'xml-tag-mismatch': (v) => `</${v.found}> stands where </${v.expected}> was due`,
@@ -22,10 +24,9 @@ const WORDING: Readonly<Record<string, Wording>> = {
     `the file is cut off: it ends inside ${v.inside}, with ${some(v.open, 'element')} still open`,
   'xml-two-roots': (v) => `a second root element, <${v.found}>`,
   'xml-text-outside-root': (v) => `text outside the root element: ${quoted(v.found)}`,
-  'xml-too-deep': (v) => `elements nested more than ${v.limit} deep`,
   'xml-unreadable': () => 'the markup could not be read',
-  'entity-limit': (v) =>
-    `the entity ${quoted(v.entity)} expands to more than ${v.limitCharacters} characters: refused`,
+  'past-limit': (v) => `refused ${pastLimit(v)}`,
+  'entity-limit': (v) => `the entity ${quoted(v.entity)} expands ${pastLimit(v)}: refused`,
   'entity-loop': (v) => `the entity ${quoted(v.entity)} contains itself: refused`,
   'too-large': () => 'the drawing is larger than can be held in memory',
   'nothing-stroked': () => 'nothing in the drawing has a stroke: there is nothing to draw',
@@ -37,7 +38,10 @@ const WORDING: Readonly<Record<string, Wording>> = {
 
   // Reading: read, but not quite as it stands.
   'unknown-entity': (v) => `the entity ${quoted(v.entity)} is not declared${times(v)}`,
-  'entity-with-markup': (v) => `the entity ${quoted(v.entity)} holds markup and was left out${times(v)}`,
+  'external-entity': (v) =>
+    `the entity ${quoted(v.entity)} stands in another file, which is never fetched: left out${times(v)}`,
+  'xml-not-strict': (v) =>
+    `not quite XML: ${v.what}${times(v)}; read all the same, though a browser may refuse the file`,
   'svg-namespace-missing': () =>
     'the root does not name the SVG name space: read all the same; a browser shows nothing',
   'undeclared-prefix': (v) => `the prefix ${quoted(v.prefix)} is not declared${times(v)}`,
@@ -63,8 +67,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'use-missing': (v) => `<use> refers to ${quoted(v.href)}, which is not there${times(v)}`,
   'use-external': (v) => `<use> refers to another file, ${quoted(v.href)}: not fetched${times(v)}`,
   'use-loop': (v) => `<use> refers to itself through ${quoted(v.href)}: refused${times(v)}`,
-  'use-too-deep': (v) => `<use> nested more than ${v.limit} deep: refused${times(v)}`,
-  'use-limit': (v) => `copies by <use> make more than ${v.limit} ${v.of ?? 'copies'}: the rest is not drawn`,
+  'use-limit': (v) => `copies by <use> go ${pastLimit(v)}: the rest of them is not drawn`,
+  'text-cut': (v) => `the text of <${v.element}> was cut where it went ${pastLimit(v)}`,
   'style-limit': (v) => `style rules beyond ${v.limit} steps of matching were left aside`,
   'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
   'shape-error': (v) => `a shape is left out: ${v.attribute}=${quoted(v.found)}${times(v)}`,
@@ -170,6 +174,10 @@ function some(count: string | number | undefined, one: string): string {
 
 function times(v: Values): string {
   return Number(v.count ?? 1) > 1 ? ` (${v.count} times)` : '';
+}
+
+function pastLimit(v: Values): string {
+  return `past the limit ${v.limit} (${v.value}); --limit ${v.limit}=N lifts it`;
 }
 
 function place(v: Values): string {

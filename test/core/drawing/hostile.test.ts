@@ -105,7 +105,7 @@ describe('files made to hurt', () => {
   test('2,000 groups in one another are refused', () => {
     const drawing = readBody('<g>'.repeat(2000) + '</g>'.repeat(2000));
     expect(drawing.findings).toMatchObject([
-      { code: 'xml-too-deep', severity: 'error', values: { limit: 1024 } },
+      { code: 'past-limit', severity: 'error', values: { limit: 'depth', value: 1024 } },
     ]);
   });
 
@@ -120,13 +120,14 @@ describe('files made to hurt', () => {
     for (let i = 1; i <= 20; i++) defs += `<g id="u${i}">${`<use href="#u${i - 1}"/>`.repeat(10)}</g>`;
     const drawing = readBody(`<defs>${defs}</defs><use href="#u20"/>`);
     expect(drawing.strokes.count).toBeLessThanOrEqual(100_000);
-    expect(findingOf(drawing, 'use-limit').values).toMatchObject({ limit: 100_000, of: 'copies' });
+    expect(findingOf(drawing, 'use-limit').values).toMatchObject({ limit: 'copies', value: 100_000 });
   });
 
   test('a chain of 3,000 uses stops at a depth', () => {
     let defs = '<path id="c3000" d="M1 1h1" stroke="red"/>';
     for (let i = 0; i < 3000; i++) defs += `<use id="c${i}" href="#c${i + 1}"/>`;
-    expect(codesOf(readBody(`<defs>${defs}</defs><use href="#c0"/>`))).toEqual(['use-too-deep']);
+    const deep = readBody(`<defs>${defs}</defs><use href="#c0"/>`);
+    expect(findingOf(deep, 'use-limit').values).toMatchObject({ limit: 'copyDepth', value: 256 });
     expect(readBody(`<defs>${defs}</defs><use href="#c2900"/>`).strokes.count).toBe(1);
   });
 

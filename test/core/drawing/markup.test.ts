@@ -23,7 +23,7 @@ describe('what XML allows is read', () => {
     ],
     [
       'an internal subset',
-      `<!DOCTYPE svg [<!ATTLIST svg a CDATA #IMPLIED ">"><!-- > ] --><?x ]> ?><!ELEMENT g (a)>]><svg ${IN_MM}>${LINE}</svg>`,
+      `<!DOCTYPE svg [<!ATTLIST svg a CDATA #IMPLIED b (c|d) "c" e CDATA ">"><!-- > ] --><?x ]> ?><!ELEMENT g (a)><!NOTATION n SYSTEM "]>">]><svg ${IN_MM}>${LINE}</svg>`,
     ],
     [
       'comments with tags, before and inside',
@@ -115,6 +115,54 @@ describe('what is not well formed is an error with its place', () => {
     expect([finding.place?.line ?? null, finding.place?.column ?? null]).toEqual([line, column]);
   });
 
+  test.each([
+    ['<svg><a$b/></svg>', 'xml-bad-tag', 6],
+    ['<svg><a:b:c/></svg>', 'xml-bad-tag', 6],
+    ['<svg><g a$="1"/></svg>', 'xml-bad-attribute', 9],
+    ['<svg><g a:b:c="1"/></svg>', 'xml-bad-attribute', 9],
+    ['<svg><? x?></svg>', 'xml-bad-tag', 6],
+    ['<svg><?a+b?></svg>', 'xml-bad-tag', 6],
+    ['<svg></ svg>', 'xml-bad-tag', 6],
+    ['<svg></svg a="1">', 'xml-bad-tag', 6],
+    ['<svg><g / ></svg>', 'xml-bad-tag', 6],
+    ['<svg/>\u00a0', 'xml-text-outside-root', 7],
+    ['<![CDATA[ ]]><svg/>', 'xml-text-outside-root', 1],
+    ['<!DOCTYPE svg [<!ENTITY e " ">]>&e;<svg/>', 'xml-text-outside-root', 33],
+    ['<!DOCTYPE svg><!DOCTYPE svg><svg/>', 'xml-bad-tag', 15],
+    ['<!doctype svg><svg/>', 'xml-bad-tag', 1],
+    ['<!DOCTYPE><svg/>', 'xml-bad-doctype', 10],
+    ['<!DOCTYPE svg PUBLIC "a"><svg/>', 'xml-bad-doctype', 25],
+    ['<!DOCTYPE svg [ foo ]><svg/>', 'xml-bad-doctype', 17],
+    ['<!DOCTYPE svg [<!FOO a>]><svg/>', 'xml-bad-doctype', 16],
+    ['<!DOCTYPE svg [<!ENTITY a "50%">]><svg/>', 'xml-bad-doctype', 30],
+    ['<!DOCTYPE svg [<!ENTITY a"b">]><svg/>', 'xml-bad-doctype', 26],
+    ['<!DOCTYPE svg [<!ENTITY % p "%p;">%p;]><svg/>', 'xml-bad-doctype', 30],
+    ['<!DOCTYPE svg [<!ATTLIST g a FOO "1">]><svg/>', 'xml-bad-doctype', 30],
+    ['<!DOCTYPE svg [<!ATTLIST g a CDATA "<">]><svg/>', 'xml-bad-doctype', 28],
+    ['<svg xmlns:a="u" xmlns:b="u" a:x="1" b:x="2"/>', 'xml-duplicate-attribute', 1],
+    ['<svg>\ud800</svg>', 'xml-bad-character', 6],
+  ])('%j: %s, as a browser has it', (text, code, column) => {
+    const [finding] = readDrawing(text).findings;
+    expect(finding).toMatchObject({ code, severity: 'error', place: { line: 1, column } });
+  });
+
+  test.each([
+    ['a double hyphen in a comment', `<svg ${IN_MM}><!-- a -- b --->${LINE}</svg>`],
+    [']]> in text', `<svg ${IN_MM}><desc>a ]]> b</desc>${LINE}</svg>`],
+    ['an XML declaration not at the very start', `\n<?xml version="1.0"?><svg ${IN_MM}>${LINE}</svg>`],
+    [
+      'the XML declaration',
+      `<?xml version="1.0" standalone="no" encoding="utf-8"?><svg ${IN_MM}>${LINE}</svg>`,
+    ],
+    ['a reserved prefix declared', `<svg ${IN_MM} xmlns:xml="u">${LINE}</svg>`],
+  ])('%s is read with a warning, since a browser refuses it', (what, text) => {
+    const drawing = readDrawing(text);
+    expect(drawing.findings).toMatchObject([
+      { code: 'xml-not-strict', severity: 'warning', values: { what } },
+    ]);
+    expect(textsOf(drawing)).toEqual(DRAWN);
+  });
+
   test('a file that is cut off anywhere', () => {
     const whole = `<?xml version="1.0"?><!DOCTYPE svg [<!ENTITY a "b">]>\n<svg ${IN_MM}>\n<!-- c --><g id="a">\n<![CDATA[x]]>${LINE}</g></svg>`;
     expect(readDrawing(whole).strokes.count).toBe(1);
@@ -163,14 +211,66 @@ describe('references', () => {
     const drawing = readDrawing(
       `<!DOCTYPE svg [<!ENTITY x SYSTEM "file:///etc/hosts">]><svg ${IN_MM}><text>&x;</text></svg>`,
     );
-    expect(codesOf(drawing)).toEqual(['unknown-entity', 'text-not-drawn']);
+    expect(codesOf(drawing)).toEqual(['external-entity', 'text-not-drawn']);
   });
 
-  test('entities with markup are left out, and said', () => {
+  // XML 1.0 §4.3.2, §4.4.2: an entity's text is read as content where its reference stands.
+  test('entities with markup are read where they stand', () => {
     const drawing = readDrawing(
-      `<!DOCTYPE svg [<!ENTITY x "<path d='M1 1h1'/>">]><svg ${IN_MM}><g>&x;</g></svg>`,
+      `<!DOCTYPE svg [<!ENTITY x "<g id='i'>&y;</g>&y;"><!ENTITY y "&#60;path d='M1 1h1' stroke='red'/>">]><svg ${IN_MM}>\n &x;</svg>`,
     );
-    expect(findingOf(drawing, 'entity-with-markup').values).toEqual({ entity: 'x', count: 1 });
+    expect(drawing.findings).toEqual([]);
+    expect(textsOf(drawing)).toEqual([...DRAWN, ...DRAWN]);
+    expect(drawing.layers[0].id).toBe('i');
+    expect(drawing.places[0]).toMatchObject({ element: 'path', line: 2, column: 2 });
+  });
+
+  test.each([
+    ['opens and does not close', '<!ENTITY x "<g>"><!ENTITY y "</g>">', '&x;&y;', 'xml-bad-entity'],
+    ['closes what it did not open', '<!ENTITY x "</g><g>">', '<g>&x;</g>', 'xml-unopened-tag'],
+    ['is cut off', '<!ENTITY x "<g">', '&x;', 'xml-cut-off'],
+    ['holds itself in markup', '<!ENTITY x "<g>&x;</g>">', '&x;', 'entity-loop'],
+    ['holds markup in a value', '<!ENTITY x "<g/>">', '<g id="&x;"/>', 'xml-bad-attribute'],
+    ['holds a < in a value', '<!ENTITY x "&#60;">', '<g id="&x;"/>', 'xml-bad-attribute'],
+  ])('an entity that %s is refused', (_, declared, body, code) => {
+    const drawing = readDrawing(`<!DOCTYPE svg [${declared}]>\n<svg ${IN_MM}>${body}</svg>`);
+    expect(drawing.findings).toMatchObject([{ code, severity: 'error' }]);
+    expect(drawing.findings[0].place?.line).toBe(2);
+  });
+
+  test('a < written twice over is a character', () => {
+    const drawing = readDrawing(
+      `<!DOCTYPE svg [<!ENTITY x "&#38;#60;">]><svg ${IN_MM}><title>&x;</title><g id="&x;"/></svg>`,
+    );
+    expect([drawing.title, drawing.layers[0].id]).toEqual(['<', '<']);
+  });
+
+  test('parameter entities', () => {
+    const drawing = readDrawing(
+      `<!DOCTYPE svg [<!ENTITY % p "<!ENTITY q 'hello'>"> %p; <!ENTITY % e SYSTEM "x.ent"> %e; %no;]><svg ${IN_MM}><title>&q;</title></svg>`,
+    );
+    expect(drawing.title).toBe('hello');
+    expect(findingOf(drawing, 'external-entity').values).toMatchObject({ entity: '%e;' });
+    expect(findingOf(drawing, 'unknown-entity').values).toMatchObject({ entity: '%no;' });
+  });
+
+  // XML 1.0 §3.3.2: defaults hold where a tag leaves the attribute out, and the first declaration of it.
+  test('default values of attributes', () => {
+    const drawing = readDrawing(
+      `<!DOCTYPE svg [<!ENTITY c "#ff0000"><!ATTLIST svg xmlns CDATA #FIXED "http://www.w3.org/2000/svg">
+       <!ATTLIST path stroke CDATA "&c;" fill CDATA "none" stroke CDATA "blue" stroke-linecap (round|butt) #IMPLIED>]>
+       <svg width="10mm" height="10mm" viewBox="0 0 10 10"><path d="M1 1h1"/><path stroke="#00ff00" d="M1 1h1"/></svg>`,
+    );
+    expect(drawing.findings).toEqual([]);
+    expect(drawing.colours).toEqual(['#ff0000', '#00ff00']);
+  });
+
+  test('a document cannot grow by default values without limit', () => {
+    const defaults = Array.from({ length: 2000 }, (_, i) => `a${i} CDATA "${'x'.repeat(100)}"`).join(' ');
+    const text = `<!DOCTYPE svg [<!ATTLIST g ${defaults}>]><svg ${IN_MM}>${'<g/>'.repeat(1000)}</svg>`;
+    expect(readDrawing(text).findings).toMatchObject([
+      { code: 'entity-limit', values: { limit: 'entityCharacters', value: 4_000_000 } },
+    ]);
   });
 
   test('an entity that holds itself is refused', () => {
@@ -187,5 +287,59 @@ describe('references', () => {
     const text = `<!DOCTYPE svg [<!ENTITY a0 "lol">${levels}]><svg ${IN_MM}><text>&a40;</text></svg>`;
     const drawing = readDrawing(text);
     expect(drawing.findings).toMatchObject([{ code: 'entity-limit', severity: 'error' }]);
+  });
+});
+
+describe('what is large', () => {
+  test('a long title is kept, and cut at a limit with a word about it', () => {
+    expect(readBody(`<title>${'word '.repeat(10_000)}</title>`).title).toHaveLength(49_999);
+    const drawing = readDrawing(`<svg ${IN_MM}><desc>${'x'.repeat(50)}</desc></svg>`, {
+      limits: { textCharacters: 20 },
+    });
+    expect(drawing.description).toBe('x'.repeat(20));
+    expect(findingOf(drawing, 'text-cut').values).toMatchObject({
+      element: 'desc',
+      limit: 'textCharacters',
+      value: 20,
+    });
+  });
+
+  test.each([
+    ['depth', 3, '<g><g><g/></g></g>', 'past-limit'],
+    ['elements', 3, '<g/><g/><g/>', 'past-limit'],
+    ['attributeCharacters', 60, `<g id="${'i'.repeat(61)}"/>`, 'past-limit'],
+    ['segments', 3, '<path d="M1 1h1v1h1v1" stroke="red"/>', 'past-limit'],
+    ['copies', 1, '<use href="#a"/><use href="#a"/><defs><g id="a"/></defs>', 'use-limit'],
+    ['copyDepth', 1, '<use href="#a"/><defs><use id="a" href="#b"/><g id="b"/></defs>', 'use-limit'],
+    ['copiedElements', 1, '<use href="#a"/><defs><g id="a"><g/></g></defs>', 'use-limit'],
+  ] as const)('the limit %s of %i is named where it is passed', (limit, value, body, code) => {
+    const drawing = readDrawing(`<svg ${IN_MM}>${body}</svg>`, { limits: { [limit]: value } });
+    expect(findingOf(drawing, code).values).toMatchObject({ limit, value });
+    const lifted = readDrawing(`<svg ${IN_MM}>${body}</svg>`, { limits: { [limit]: value + 100 } });
+    expect(codesOf(lifted)).not.toContain(code);
+  });
+
+  test('a limit that is no number is misuse', () => {
+    expect(() => readDrawing('<svg/>', { limits: { depth: Number.NaN } })).toThrow(RangeError);
+  });
+
+  // More elements than a piece of the skeleton has, opened and closed on both sides of its ends.
+  test('a tree read in pieces is the same tree', () => {
+    let body = '';
+    let want = 0;
+    for (let i = 0; i < 9000; i++) {
+      body += `<g id="g${i}"><title>t${i}</title>${i % 3 === 0 ? `<g>${LINE}</g>${LINE}` : '<g/>'}</g>`;
+      if (i % 3 === 0) want += 2;
+    }
+    const drawing = readBody(body);
+    expect(drawing.strokes.count).toBe(want);
+    expect(drawing.layers.map((layer) => layer.label)).toEqual(
+      Array.from({ length: 9000 }, (_, i) => `t${i}`),
+    );
+  });
+
+  test('depth beyond a piece', () => {
+    const text = `<svg ${IN_MM}>${'<g>'.repeat(20_000)}${LINE}${'</g>'.repeat(20_000)}</svg>`;
+    expect(readDrawing(text, { limits: { depth: 100_000 } }).strokes.count).toBe(1);
   });
 });
