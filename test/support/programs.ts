@@ -123,7 +123,7 @@ function drawChoices(builder: SegmentBuilder, choices: readonly number[], random
 }
 
 /** A plain generator for tests (mulberry32), apart from the one under test. */
-function plainRandom(seed: number): () => number {
+export function plainRandom(seed: number): () => number {
   let state = seed >>> 0;
   return () => {
     state = (state + 0x6d2b79f5) >>> 0;

@@ -11,8 +11,6 @@ import { walkSpan } from './walkSpan.js';
 
 /** Lines that run together for less than this many tolerances merely cross or touch. */
 const LEAST_STRETCH = 25;
-/** How far back from the end of a stretch a joint is taken for the place where the lines part, in tolerances. */
-const PARTING = 50;
 /** Parameters that differ by less are one: rounding where a stretch goes on over a joint. */
 const SEAM = 1e-9;
 
@@ -38,12 +36,21 @@ export function splitWhereLinesOverlap(
   for (const { stroke, segment, t } of search.run()) addSplit(marks, drawing, stroke, segment, t);
 }
 
-/** Where a line runs on another: from u0 to u1 (segment plus parameter), beside segments j0 and j1 there. */
+/** Where a line runs on another, from u0 to u1: segment plus parameter. */
 interface Stretch {
   readonly u0: number;
   readonly u1: number;
-  readonly j0: number;
-  readonly j1: number;
+}
+
+/** A joint or end of either line that lies on the other: u on the own line, w on the other. */
+interface Corner {
+  readonly u: number;
+  readonly w: number;
+}
+
+interface Together {
+  readonly stretches: Stretch[];
+  readonly corners: Corner[];
 }
 
 /** A segment as a polyline: parameter, x, y of each point. */
@@ -71,20 +78,20 @@ class OverlapSearch {
     const { stroke, segment, count } = this.pieces;
     for (let from = 0; from < count; ) {
       const own = stroke[from];
-      const stretches = new Map<number, Stretch[]>();
+      const together = new Map<number, Together>();
       while (from < count && stroke[from] === own) {
         const start = from;
         while (from < count && segment[from] === segment[start]) from++;
-        this.gather(start, from, stretches);
+        this.gather(start, from, together);
       }
-      for (const [other, list] of stretches) this.split(own, other, list);
+      for (const [other, found] of together) this.split(own, other, found);
       this.chords.clear();
     }
     return this.splits;
   }
 
   /** Finds the later segments that run along one segment, the pieces from `start` up to `end`. */
-  private gather(start: number, end: number, stretches: Map<number, Stretch[]>): void {
+  private gather(start: number, end: number, together: Map<number, Together>): void {
     const { segment, stroke } = this.pieces;
     const i = segment[start];
     /** Each later segment beside this one, and its stroke. */
@@ -115,10 +122,13 @@ class OverlapSearch {
       }
     }
     for (const [j, other] of [...beside].sort((a, b) => a[0] - b[0])) {
-      const found = this.stretchesOn(i, j);
-      const list = stretches.get(other);
-      if (list) for (const stretch of found) list.push(stretch);
-      else if (found.length > 0) stretches.set(other, found);
+      let found = together.get(other);
+      if (!found) {
+        found = { stretches: [], corners: [] };
+        together.set(other, found);
+      }
+      this.addStretches(i, j, found.stretches);
+      this.addCorners(i, j, found.corners);
     }
   }
 
@@ -129,10 +139,9 @@ class OverlapSearch {
     return i >= from && (j === i + 1 || (closed[stroke] === 1 && i === from && j === first[stroke + 1] - 1));
   }
 
-  private stretchesOn(i: number, j: number): Stretch[] {
+  private addStretches(i: number, j: number, stretches: Stretch[]): void {
     const own = this.chordsOf(i);
     const other = this.chordsOf(j);
-    const found: Stretch[] = [];
     for (let a = 3; a < own.length; a += 3) {
       for (let b = 3; b < other.length; b += 3) {
         const is = alongside(
@@ -150,10 +159,26 @@ class OverlapSearch {
         if (!is) continue;
         const t0 = own[a - 3];
         const run = own[a] - t0;
-        found.push({ u0: i + t0 + this.share[0] * run, u1: i + t0 + this.share[1] * run, j0: j, j1: j });
+        stretches.push({ u0: i + t0 + this.share[0] * run, u1: i + t0 + this.share[1] * run });
       }
     }
-    return found;
+  }
+
+  private addCorners(i: number, j: number, corners: Corner[]): void {
+    for (const t of [0, 1]) {
+      const w = this.placeOn(j, i, t);
+      if (w !== null) corners.push({ u: i + t, w });
+      const u = this.placeOn(i, j, t);
+      if (u !== null) corners.push({ u, w: j + t });
+    }
+  }
+
+  /** Where segment i passes within reach of the point at t on segment `from`; null where it does not. */
+  private placeOn(i: number, from: number, t: number): number | null {
+    const { segments } = this.drawing.strokes;
+    pointAt(segments, from, t, this.at);
+    const near = nearestOnSegment(segments, i, this.at[0], this.at[1], 0, 1);
+    return near.distance <= this.reachMm ? i + near.t : null;
   }
 
   private chordsOf(i: number): Chords {
@@ -169,56 +194,48 @@ class OverlapSearch {
     return chords;
   }
 
-  /** Splits both strokes at the ends of what they have in common. */
-  private split(own: number, other: number, list: Stretch[]): void {
-    list.sort((a, b) => a.u0 - b.u0 || a.u1 - b.u1);
-    for (let k = 0; k < list.length; ) {
-      const { u0, j0 } = list[k];
-      let { u1, j1 } = list[k];
-      for (k++; k < list.length && list[k].u0 <= u1 + SEAM; k++) {
-        if (list[k].u1 >= u1) ({ u1, j1 } = list[k]);
-      }
-      if (this.lengthBetween(u0, u1) < this.leastMm) continue;
-      this.part(own, other, u0, j0, Math.ceil(u0), u1);
-      this.part(own, other, u1, j1, Math.floor(u1), u0);
-    }
-  }
-
   /**
-   * The lines part at `u`; `joint` is the joint of the own line next to it inside the stretch, which ends
-   * at `far`. Where that joint is near it is the corner at which they part, `u` only where they are too far apart.
+   * Splits both strokes at the first and the last corner of each stretch. Where lines part with no corner
+   * they cross at a small angle, or touch: what they share there is not worth a joint.
    */
-  private part(own: number, other: number, u: number, j: number, joint: number, far: number): void {
-    const { segments, first } = this.drawing.strokes;
-    const isInside = Math.min(u, far) < joint && joint < Math.max(u, far);
-    const backMm = isInside
-      ? this.lengthBetween(Math.min(u, joint), Math.max(u, joint))
-      : Number.POSITIVE_INFINITY;
-    const place = backMm <= PARTING * 2 * this.reachMm ? joint : u;
-    const segment = Math.min(Math.floor(place), first[own + 1] - 1);
-    const t = place - segment;
-    pointAt(segments, segment, t, this.at);
-    const [x, y] = this.at;
-    let there = j;
-    let near = nearestOnSegment(segments, j, x, y, 0, 1);
-    // Going back to a joint may lead to the segment before or after it.
-    for (const next of [j - 1, j + 1]) {
-      if (next < first[other] || next >= first[other + 1]) continue;
-      const beside = nearestOnSegment(segments, next, x, y, 0, 1);
-      if (beside.distance < near.distance) {
-        near = beside;
-        there = next;
+  private split(own: number, other: number, { stretches, corners }: Together): void {
+    stretches.sort((a, b) => a.u0 - b.u0 || a.u1 - b.u1);
+    corners.sort((a, b) => a.u - b.u || a.w - b.w);
+    let c = 0;
+    for (let k = 0; k < stretches.length; ) {
+      const { u0 } = stretches[k];
+      let { u1 } = stretches[k];
+      for (k++; k < stretches.length && stretches[k].u0 <= u1 + SEAM; k++) u1 = Math.max(u1, stretches[k].u1);
+      while (c < corners.length && corners[c].u < u0 - SEAM) c++;
+      const from = corners[c];
+      while (c < corners.length && corners[c].u <= u1 + SEAM) c++;
+      const to = corners[c - 1];
+      if (!from || !to || from.u > u1 || this.lengthBetween(from.u, to.u) < this.leastMm) continue;
+      for (const { u, w } of [from, to]) {
+        this.splitAt(own, u);
+        this.splitAt(other, w);
       }
-    }
-    if (near.distance > 2 * this.reachMm) return;
-    if (!this.isNearEnd(own, x, y)) this.splits.push({ stroke: own, segment, t });
-    pointAt(segments, there, near.t, this.at);
-    if (!this.isNearEnd(other, this.at[0], this.at[1])) {
-      this.splits.push({ stroke: other, segment: there, t: near.t });
     }
   }
 
-  /** An end of the stroke is that near: it is a mark already, and splits what it touches. */
+  /** Near an end of the stroke nothing is split: the end is a mark already, and splits what it touches. */
+  private splitAt(stroke: number, u: number): void {
+    const [x, y] = this.pointOf(stroke, u);
+    if (this.isNearEnd(stroke, x, y)) return;
+    const segment = this.segmentOf(stroke, u);
+    this.splits.push({ stroke, segment, t: u - segment });
+  }
+
+  private pointOf(stroke: number, u: number): [number, number] {
+    const segment = this.segmentOf(stroke, u);
+    pointAt(this.drawing.strokes.segments, segment, u - segment, this.at);
+    return [this.at[0], this.at[1]];
+  }
+
+  private segmentOf(stroke: number, u: number): number {
+    return Math.min(Math.floor(u), this.drawing.strokes.first[stroke + 1] - 1);
+  }
+
   private isNearEnd(stroke: number, x: number, y: number): boolean {
     const { segments, first } = this.drawing.strokes;
     const a = segments.offset[first[stroke]];
