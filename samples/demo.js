@@ -5,6 +5,8 @@ import { main } from '../dist/cli/main.js';
 
 const samples = fileURLToPath(new URL('.', import.meta.url));
 const out = fileURLToPath(new URL('../out/', import.meta.url));
+/** What a sample's recipe asks for beside the defaults. */
+const asked = { 'gift-box': ['--dashes', 'solid'] };
 mkdirSync(out, { recursive: true });
 process.chdir(fileURLToPath(new URL('..', import.meta.url)));
 for (const file of readdirSync(samples).filter((name) => name.endsWith('.svg'))) {
@@ -12,7 +14,7 @@ for (const file of readdirSync(samples).filter((name) => name.endsWith('.svg')))
   const outputs = ['svg', 'gcode', 'json'].flatMap((kind) => ['-o', `out/${name}.${kind}`]);
   process.exitCode = Math.max(
     process.exitCode ?? 0,
-    await main(['tour', `samples/${file}`, '--show-travel', ...outputs]),
+    await main(['tour', `samples/${file}`, '--show-travel', ...(asked[name] ?? []), ...outputs]),
   );
   console.log();
 }
