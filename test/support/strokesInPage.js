@@ -64,7 +64,11 @@
   function replaceCopies(root) {
     const before = [...root.querySelectorAll('use')].filter((use) => !use.closest(NEVER_DRAWN));
     const boxes = before.map((use) => use.getClientRects().length > 0 && use.getBBox());
-    const groups = before.map(replaceCopy);
+    // What is copied is looked up where nothing has been put in place yet.
+    const originals = root.cloneNode(true);
+    const original = (id) =>
+      originals.id === id ? originals : originals.querySelector(`[id="${CSS.escape(id)}"]`);
+    const groups = before.map((use) => replaceCopy(use, original, []));
     let difference = 0;
     groups.forEach((group, i) => {
       const { x, y, width, height } = group.getBBox();
@@ -77,8 +81,10 @@
     return { copies: groups.length, copiesDiffer: difference };
   }
 
-  function replaceCopy(use) {
+  /** `around` holds the ids of the copies that this `use` stands in. */
+  function replaceCopy(use, original, around) {
     const href = use.getAttribute('href') ?? use.getAttributeNS('http://www.w3.org/1999/xlink', 'href') ?? '';
+    const id = href.startsWith('#') ? href.slice(1) : '';
     const outer = document.createElementNS(SVG, 'g');
     for (const { name, value } of use.attributes) {
       if (!['x', 'y', 'width', 'height', 'href', 'xlink:href'].includes(name))
@@ -86,10 +92,11 @@
     }
     // The box of `use` is in its own user space, which its x and y move on.
     const moved = document.createElementNS(SVG, 'g');
-    moved.setAttribute('transform', `translate(${use.x.baseVal.value} ${use.y.baseVal.value})`);
+    const style = getComputedStyle(use);
+    moved.setAttribute('transform', `translate(${lengthOf(use, style, 'x')} ${lengthOf(use, style, 'y')})`);
     outer.append(moved);
-    const target = href.startsWith('#') ? document.getElementById(href.slice(1)) : null;
-    if (target && !target.contains(use)) {
+    const target = id === '' ? null : original(id);
+    if (target && !isInside(use, id) && !around.includes(id)) {
       let copy = target.cloneNode(true);
       copy.removeAttribute('id');
       if (['symbol', 'svg'].includes(target.localName)) {
@@ -101,12 +108,23 @@
         viewport.append(...copy.childNodes);
         copy = viewport;
       }
+      const ids = [...around, id, ...idsAround(use)];
       moved.append(copy);
       use.replaceWith(outer);
-      for (const inner of copy.querySelectorAll('use')) replaceCopy(inner);
-      if (copy.localName === 'use') replaceCopy(copy);
+      for (const inner of copy.querySelectorAll('use')) replaceCopy(inner, original, ids);
+      if (copy.localName === 'use') replaceCopy(copy, original, ids);
     } else use.replaceWith(outer);
     return outer;
+  }
+
+  function isInside(element, id) {
+    return idsAround(element).includes(id);
+  }
+
+  function idsAround(element) {
+    const ids = [];
+    for (let e = element; e instanceof Element; e = e.parentNode) if (e.id) ids.push(e.id);
+    return ids;
   }
 
   function isStroked(shape, style) {
