@@ -20,10 +20,18 @@ export const ARITY: Readonly<Uint8Array> = (() => {
 export class PathCommands {
   count = 0;
   used = 0;
+  /** Whether the path has begun, though its first commands may have been dropped. */
+  begun = false;
   codes = new Uint8Array(256);
   numbers = new Float64Array(1024);
 
   clear(): void {
+    this.begun = false;
+    this.drop();
+  }
+
+  /** Makes room for further commands of the same path. */
+  drop(): void {
     this.count = 0;
     this.used = 0;
   }
@@ -42,7 +50,8 @@ export class PathCommands {
       this.numbers = numbers;
     }
     // A first `m` is absolute (SVG 2, "The moveto commands").
-    this.codes[this.count] = this.count === 0 && code === M + 32 ? M : code === Z + 32 ? Z : code;
+    this.codes[this.count] = !this.begun && code === M + 32 ? M : code === Z + 32 ? Z : code;
+    this.begun = true;
     this.count++;
     this.used = at + ARITY[code];
     return at;

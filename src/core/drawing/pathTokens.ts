@@ -2,7 +2,6 @@ import { ARITY, type PathCommands } from './pathCommands.js';
 import type { TextCursor } from './textCursor.js';
 
 const M = 77;
-const Z = 90;
 const A = 65;
 
 /**
@@ -13,50 +12,91 @@ const A = 65;
  * Cost: O(length), no memory but the columns.
  */
 export function readPathTokens(data: string, cursor: TextCursor, out: PathCommands): number {
-  out.clear();
-  cursor.reset(data).skipSpace();
-  while (!cursor.atEnd()) {
-    const code = data.charCodeAt(cursor.at);
-    const arity = code < 128 ? ARITY[code] : 255;
-    if (arity === 255 || (out.count === 0 && (code & ~32) !== M)) return cursor.at;
-    cursor.at++;
-    if ((code & ~32) === Z) out.push(code);
-    else {
-      const error = readRepeats(code, arity, cursor, out);
-      if (error >= 0) return error;
-    }
-    cursor.skipSpace();
-  }
-  return -1;
+  const tokens = new PathTokens(cursor, out);
+  tokens.begin(data);
+  tokens.next(Number.POSITIVE_INFINITY);
+  return tokens.error;
 }
 
-/** Reads the argument sets of one command letter. */
-function readRepeats(letter: number, arity: number, cursor: TextCursor, out: PathCommands): number {
-  cursor.skipSpace();
-  let code = letter;
-  let mayEnd = false;
-  for (;;) {
-    const base = out.push(code);
-    for (let k = 0; k < arity; k++) {
-      if (k > 0) cursor.skipCommaSpace();
-      const start = cursor.at;
-      const isFlag = (letter & ~32) === A && (k === 3 || k === 4);
-      if (isFlag ? cursor.flag() : cursor.number()) {
-        if (Number.isFinite(cursor.value)) {
-          out.numbers[base + k] = cursor.value;
-          continue;
-        }
-      } else if (k === 0 && mayEnd) {
-        out.pop();
-        return -1;
+/** The same, some commands at a time, so that long data needs no long columns. */
+export class PathTokens {
+  /** Offset of the error that ended the data, or -1. */
+  error = -1;
+  /** The command letter whose further argument sets may follow, or 0. */
+  private letter = 0;
+  /** As what the next set counts: pairs after a moveto are linetos. */
+  private code = 0;
+  /** No set has to follow. */
+  private mayEnd = false;
+
+  constructor(
+    private readonly cursor: TextCursor,
+    private readonly out: PathCommands,
+  ) {}
+
+  begin(data: string): void {
+    this.error = -1;
+    this.letter = 0;
+    this.out.clear();
+    this.cursor.reset(data).skipSpace();
+  }
+
+  /** Puts the next commands, about `most` of them, in the place of the last; false where there are none. */
+  next(most: number): boolean {
+    const { cursor, out } = this;
+    out.drop();
+    if (this.letter !== 0) this.readSets(most);
+    while (this.error < 0 && out.count < most && !cursor.atEnd()) {
+      const code = cursor.text.charCodeAt(cursor.at);
+      const arity = code < 128 ? ARITY[code] : 255;
+      if (arity === 255 || (!out.begun && (code & ~32) !== M)) {
+        this.error = cursor.at;
+        break;
       }
-      out.pop();
-      return start;
+      cursor.at++;
+      if (arity === 0) out.push(code);
+      else {
+        cursor.skipSpace();
+        this.letter = this.code = code;
+        this.mayEnd = false;
+        this.readSets(most);
+      }
+      if (this.letter === 0) cursor.skipSpace();
     }
-    // A comma before the next command is an error by the grammar, and passed over by browsers.
-    mayEnd = !cursor.skipCommaSpace() || cursor.atEnd() || isLetter(cursor.text.charCodeAt(cursor.at));
-    // Pairs after a moveto are linetos.
-    if ((letter & ~32) === M) code = letter === M ? 76 : 108;
+    return out.count > 0;
+  }
+
+  /** Reads the argument sets of one command letter; `letter` is left where there may be more. */
+  private readSets(most: number): void {
+    const { cursor, out, letter } = this;
+    const capital = letter & ~32;
+    const arity = ARITY[letter];
+    while (out.count < most) {
+      const base = out.push(this.code);
+      for (let k = 0; k < arity; k++) {
+        if (k > 0) cursor.skipCommaSpace();
+        const start = cursor.at;
+        const isFlag = capital === A && (k === 3 || k === 4);
+        if (isFlag ? cursor.flag() : cursor.number()) {
+          if (Number.isFinite(cursor.value)) {
+            out.numbers[base + k] = cursor.value;
+            continue;
+          }
+        } else if (k === 0 && this.mayEnd) {
+          out.pop();
+          this.letter = 0;
+          cursor.skipSpace();
+          return;
+        }
+        out.pop();
+        this.error = start;
+        this.letter = 0;
+        return;
+      }
+      // A comma before the next command is an error by the grammar, and passed over by browsers.
+      this.mayEnd = !cursor.skipCommaSpace() || cursor.atEnd() || isLetter(cursor.text.charCodeAt(cursor.at));
+      if (capital === M) this.code = letter === M ? 76 : 108;
+    }
   }
 }
 

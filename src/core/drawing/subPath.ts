@@ -5,6 +5,9 @@ import { Unreadable } from './findingLog.js';
 import { DEFAULT_LIMITS } from './readingLimits.js';
 import { orTooLarge } from './tooLarge.js';
 
+/** Below this the columns grow fourfold: what is not touched costs nothing. */
+const LARGE = 1 << 21;
+
 /** What is thrown where a drawing has more segments than the limit. */
 export function pastSegments(value: number): Unreadable {
   return new Unreadable('past-limit', null, { limit: 'segments', value });
@@ -136,7 +139,7 @@ export class SubPath {
     const o = this.used;
     if (i === this.kind.length) {
       if (i >= this.limit) throw pastSegments(this.limit);
-      const length = Math.min(2 * i, this.limit);
+      const length = Math.min(i * (i < LARGE ? 4 : 2), this.limit);
       this.kind = grown(this.kind, new Uint8Array(length));
       this.offset = grown(this.offset, new Uint32Array(length));
     }
@@ -144,7 +147,7 @@ export class SubPath {
       const { length } = this.data;
       this.data = grown(
         this.data,
-        orTooLarge(() => new Float64Array(2 * length)),
+        orTooLarge(() => new Float64Array(length * (length < 4 * LARGE ? 4 : 2))),
       );
     }
     this.kind[i] = kind;

@@ -36,10 +36,27 @@ export interface Chains {
   readonly first: Uint32Array;
 }
 
-/** Collects segments one by one; columns grow by doubling, so n segments cost O(n). */
+/** Doubles in a chunk once the first ones are full. */
+const CHUNK = 1 << 17;
+
+/** Columns that are full, in order; `data` is as long as what is used of it. */
+interface Chunk {
+  readonly kind: Uint8Array;
+  readonly offset: Uint32Array;
+  readonly data: Float64Array;
+}
+
+/**
+ * Collects segments one by one. Small columns grow by doubling, large ones in chunks, so n segments cost
+ * O(n) and are moved once.
+ */
 export class SegmentBuilder {
   count = 0;
   private used = 0;
+  private readonly full: Chunk[] = [];
+  /** Segments and doubles in the full chunks. */
+  private fullCount = 0;
+  private fullUsed = 0;
   private kind = new Uint8Array(64);
   private offset = new Uint32Array(64);
   private data = new Float64Array(512);
@@ -101,37 +118,70 @@ export class SegmentBuilder {
       const at = offset[i];
       const size = SEGMENT_SIZE[kind[i]];
       const o = this.begin(kind[i], data[at], data[at + 1], data[at + 2], data[at + 3]);
-      for (let k = 4; k < size; k++) this.data[o + k] = data[at + k];
+      const d = this.data;
+      for (let k = 4; k < size; k++) d[o + k] = data[at + k];
       this.used = o + size;
     }
   }
 
   /** The columns so far, copied to their exact size; the builder may go on. */
   finish(): Segments {
-    return {
-      count: this.count,
-      kind: this.kind.slice(0, this.count),
-      offset: this.offset.slice(0, this.count),
-      data: this.data.slice(0, this.used),
-    };
+    const { count, full } = this;
+    const last = this.lastChunk();
+    if (full.length === 0) return { count, ...last };
+    const kind = new Uint8Array(count);
+    const offset = new Uint32Array(count);
+    const data = new Float64Array(this.fullUsed + this.used);
+    let i = 0;
+    let o = 0;
+    for (const chunk of [...full, last]) {
+      kind.set(chunk.kind, i);
+      offset.set(chunk.offset, i);
+      data.set(chunk.data, o);
+      i += chunk.kind.length;
+      o += chunk.data.length;
+    }
+    return { count, kind, offset, data };
   }
 
+  /** Makes room for a segment and writes its ends; returns where in `data` its numbers stand. */
   private begin(kind: number, x0: number, y0: number, x1: number, y1: number): number {
-    const i = this.count++;
-    const o = this.used;
+    if (this.used + 12 > this.data.length) this.growData();
+    const i = this.count++ - this.fullCount;
     if (i === this.kind.length) {
       this.kind = grown(this.kind, new Uint8Array(2 * i));
       this.offset = grown(this.offset, new Uint32Array(2 * i));
     }
-    if (o + 12 > this.data.length) this.data = grown(this.data, new Float64Array(2 * this.data.length));
+    const o = this.used;
     this.kind[i] = kind;
-    this.offset[i] = o;
+    this.offset[i] = this.fullUsed + o;
     const d = this.data;
     d[o] = x0;
     d[o + 1] = y0;
     d[o + 2] = x1;
     d[o + 3] = y1;
     return o;
+  }
+
+  private growData(): void {
+    if (this.data.length < CHUNK) {
+      this.data = grown(this.data, new Float64Array(2 * this.data.length));
+      return;
+    }
+    this.full.push(this.lastChunk());
+    this.fullCount = this.count;
+    this.fullUsed += this.used;
+    this.used = 0;
+    this.data = new Float64Array(CHUNK);
+  }
+
+  private lastChunk(): Chunk {
+    const count = this.count - this.fullCount;
+    return {
+      kind: this.kind.slice(0, count),
+      offset: this.offset.slice(0, count),
+      data: this.data.slice(0, this.used),
+    };
   }
 }
 
