@@ -9,7 +9,7 @@ export interface Declaration {
 export const PROPERTIES: ReadonlySet<string> = new Set([
   ...['stroke', 'stroke-width', 'stroke-linecap', 'stroke-opacity', 'stroke-dasharray', 'stroke-dashoffset'],
   ...['fill', 'fill-opacity', 'color', 'display', 'visibility', 'opacity', 'font-size', 'vector-effect'],
-  ...['marker', 'marker-start', 'marker-mid', 'marker-end', 'clip-path', 'mask', 'filter'],
+  ...['marker', 'marker-start', 'marker-mid', 'marker-end', 'clip-path', 'clip-rule', 'overflow', 'mask', 'filter'],
   ...['transform', 'transform-origin', 'x', 'y', 'width', 'height', 'cx', 'cy', 'r', 'rx', 'ry'],
 ]);
 

@@ -1,11 +1,12 @@
 import { type Affine, determinant } from '../geometry/affine.js';
+import { reportClipping } from './clipping.js';
 import { readOpacity, type Style } from './computedStyle.js';
 import { dashesOf } from './dashesOf.js';
 import { type Axis, readLength, toUserUnits } from './length.js';
 import type { Paint } from './paint.js';
 import { type Context, type Session, shown } from './session.js';
+import type { PathSink } from './strokeSink.js';
 import type { SvgElement } from './svgTree.js';
-import { tracePath } from './tracePath.js';
 import { type ShapeInput, traceShape } from './traceShape.js';
 
 export const SHAPES: ReadonlySet<string> = new Set([
@@ -16,7 +17,7 @@ const WITH_MARKERS: ReadonlySet<string> = new Set(['path', 'line', 'polyline', '
 type Specified = ReadonlyMap<string, string>;
 
 /** A shape in its place: what is said of it, computed and inherited. */
-interface Shape {
+export interface Shape {
   readonly session: Session;
   readonly element: SvgElement;
   readonly specified: Specified;
@@ -93,7 +94,7 @@ function drawLines(shape: Shape, colour: string): number {
   const nonScaling = specified.get('vector-effect')?.trim() === 'non-scaling-stroke';
   const lengthUnder = (by: Affine): number => {
     sink.begin(by, null);
-    trace(shape, false);
+    traceShapeInto(shape, sink, false);
     return sink.end().outlineMm;
   };
   const pathLength = specified.get('pathLength');
@@ -102,17 +103,20 @@ function drawLines(shape: Shape, colour: string): number {
     layer: context.layer,
     element: session.placeNumber(element),
     widthMm: strokeWidthMm(style, nonScaling ? null : map, context),
+    clip: context.clip,
     dots: style.dots,
     dashed: style.dashes !== null,
     dash: dashesOf(session, style, pathLength, nonScaling, context, lengthUnder, map),
   };
   sink.begin(map, properties);
-  const reported = trace(shape, true);
+  const reported = traceShapeInto(shape, sink, true);
   const drawn = sink.end();
+  reportClipping(session, element, drawn.clipping);
   if (drawn.buttDots > 0) session.report('butt-dots-not-drawn', element, {}, drawn.buttDots);
   if (drawn.overflows > 0) session.report('coordinate-overflow', element, {}, drawn.overflows);
   if (drawn.undashed > 0) session.report('too-many-dashes', element, {}, drawn.undashed);
-  if (drawn.strokes + drawn.buttDots + drawn.overflows === 0 && !reported) {
+  const gone = drawn.clipping.byClip.strokes + drawn.clipping.byPage.strokes;
+  if (drawn.strokes + gone + drawn.buttDots + drawn.overflows === 0 && !reported) {
     session.report('nothing-to-draw', element);
   }
   return drawn.strokes;
@@ -122,25 +126,26 @@ function measureOutline(shape: Shape): void {
   const { session, element, map } = shape;
   session.report('filled-not-stroked', element);
   session.sink.begin(map, null);
-  trace(shape, true);
+  traceShapeInto(shape, session.sink, true);
   session.log.sum('filled-not-stroked', 'outlineMm', session.sink.end().outlineMm);
 }
 
-/** Sends the shape to the sink; `tells` is false where its errors have been or will be told elsewhere. */
-function trace(shape: Shape, tells: boolean): boolean {
+/**
+ * Sends the shape to the sink. `tells` is false where its errors have been or will be told elsewhere.
+ * Returns whether there were any.
+ */
+export function traceShapeInto(shape: Shape, sink: PathSink, tells: boolean): boolean {
   const { session, element, specified } = shape;
-  const { sink } = session;
   if (element.name !== 'path') {
     const input = shapeInput(shape, tells);
     traceShape(element.name, input, sink);
     return input.reported();
   }
   const data = specified.get('d') ?? '';
-  const offset = session.paths.read(data);
+  const offset = session.paths.draw(data, sink);
   if (offset >= 0 && tells) {
     session.report('path-error', element, { offset, found: shown(data.slice(offset, offset + 12)) });
   }
-  tracePath(session.paths.commands, sink);
   return offset >= 0;
 }
 

@@ -62,6 +62,9 @@ export const READING_FINDINGS = {
   'foreign-object-not-drawn': 'warning',
   'markers-not-drawn': 'warning',
   'clip-not-applied': 'warning', // clip
+  clipped: 'note', // count: strokes; clippedMm: sum
+  'page-edge-cut': 'warning', // count: strokes; clippedMm: sum
+  'cut-limit': 'warning', // count: strokes left whole
   'mask-not-applied': 'warning', // mask
   'filter-not-applied': 'note', // filter
   'dashes-drawn-solid': 'note',

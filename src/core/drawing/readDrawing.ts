@@ -1,4 +1,5 @@
 import { segmentBox } from '../geometry/box.js';
+import { pageRegion } from './clipping.js';
 import type { Drawing, Strokes } from './drawing.js';
 import { FindingLog, Unreadable } from './findingLog.js';
 import { LineIndex } from './lineIndex.js';
@@ -52,6 +53,7 @@ function read(
   const tree = orTooLarge(() => readTree(text, new LineIndex(text), log, limits));
   const session = new Session(tree, log, rules, limits);
   const { page, inside } = rootContext(session);
+  if (rules.pageEdge === 'cut' && page.guess !== 'extent') session.sink.clipper.page = pageRegion(page);
   if (inside) walk(session, tree.root, inside);
   const strokes = session.sink.finish();
   const { widthMm, heightMm } = page.guess === 'extent' ? extentOf(strokes, page) : page;

@@ -1,6 +1,8 @@
 import type { Place } from '../finding.js';
 import type { Affine } from '../geometry/affine.js';
+import type { Region } from '../geometry/region.js';
 import { Cascade } from './cascade.js';
+import { ClipRegions } from './clipRegions.js';
 import type { Style } from './computedStyle.js';
 import type { Layer } from './drawing.js';
 import type { ReadingCode } from './findingKinds.js';
@@ -18,6 +20,8 @@ export interface Context extends LengthContext {
   readonly map: Affine;
   readonly style: Style;
   readonly layer: number;
+  /** What clip paths and viewports around here leave, page mm; null where there are none. */
+  readonly clip: Region | null;
   /** The parent is the root, so a group here is a layer. */
   readonly atTop: boolean;
   /** The `use` targets this is a copy inside of, innermost first. */
@@ -26,6 +30,8 @@ export interface Context extends LengthContext {
 
 export interface CopyOf {
   readonly target: SvgElement;
+  /** The `use` that makes the copy. */
+  readonly use: SvgElement;
   readonly depth: number;
   readonly outer: CopyOf | null;
 }
@@ -37,6 +43,7 @@ export class Session {
   readonly cascade: Cascade;
   readonly sink: StrokeSink;
   readonly paths = new PathReader();
+  readonly clips: ClipRegions = new ClipRegions(this);
   readonly colours: string[] = [];
   readonly layers: Layer[] = [];
   readonly places: Place[] = [];

@@ -2,11 +2,13 @@ import { type Affine, IDENTITY } from '../geometry/affine.js';
 import type { ArcCentre } from '../geometry/arc.js';
 import { cutDashes, type DashPattern } from '../geometry/dashes.js';
 import { segmentLength } from '../geometry/length.js';
+import type { Region } from '../geometry/region.js';
 import { LINE, SegmentBuilder, type Segments } from '../geometry/segments.js';
 import { appendTransformed } from '../geometry/transform.js';
 import { Column } from './column.js';
 import type { Strokes } from './drawing.js';
 import { DEFAULT_LIMITS } from './readingLimits.js';
+import { type Clipping, nothingClipped, StrokeClipper } from './strokeClipper.js';
 import { isDrawable, pastSegments, SubPath } from './subPath.js';
 import { orTooLarge } from './tooLarge.js';
 
@@ -26,6 +28,8 @@ export interface StrokeProperties {
   readonly layer: number;
   readonly element: number;
   readonly widthMm: number;
+  /** What the lines are cut to; null where to the page at most. */
+  readonly clip: Region | null;
   /** Sub-paths of zero length are dots: the caps are round or square. */
   readonly dots: boolean;
   /** The line is dashed in the drawing, whether or not it is drawn so. */
@@ -51,6 +55,7 @@ export interface Drawn {
   undashed: number;
   /** Length of what was measured instead of drawn. */
   outlineMm: number;
+  readonly clipping: Clipping;
 }
 
 /** Dashes in one drawing, about as many as would be worth drawing. */
@@ -62,6 +67,7 @@ export class StrokeSink implements PathSink {
   segmentsSeen = 0;
   /** Something of the element has an inside: a curve, or more than one line in a row. */
   hasArea = false;
+  readonly clipper = new StrokeClipper();
   private readonly builder = new SegmentBuilder();
   private readonly sub: SubPath;
   private readonly first = new Column();
@@ -197,7 +203,9 @@ export class StrokeSink implements PathSink {
       this.drawn.overflows++;
       return;
     }
-    this.append(properties, segments, closed, dot);
+    this.clipper.clip(segments, closed, dot, properties.clip, this.drawn.clipping, (left, leftClosed) =>
+      this.append(properties, left, leftClosed, dot),
+    );
   }
 
   private append(properties: StrokeProperties, segments: Segments, closed: boolean, dot: boolean): void {
@@ -221,5 +229,5 @@ export class StrokeSink implements PathSink {
 }
 
 function nothingDrawn(): Drawn {
-  return { strokes: 0, buttDots: 0, overflows: 0, undashed: 0, outlineMm: 0 };
+  return { strokes: 0, buttDots: 0, overflows: 0, undashed: 0, outlineMm: 0, clipping: nothingClipped() };
 }

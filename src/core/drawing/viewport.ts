@@ -1,4 +1,5 @@
 import { type Affine, multiply, translation } from '../geometry/affine.js';
+import { viewportClip } from './clipping.js';
 import { lengthOf } from './drawElement.js';
 import { readLength, toUserUnits } from './length.js';
 import { type Context, type Session, shown } from './session.js';
@@ -52,7 +53,8 @@ export function enterViewport(
   }
   const viewBox = viewBoxOf(session, element);
   if (viewBox && (viewBox.width === 0 || viewBox.height === 0)) return null;
-  return contextInside(outer, outer.map, rectangle, viewBox, aspectOf(session, element));
+  const clip = viewportClip(session, specified, rectangle, outer);
+  return { ...contextInside(outer, outer.map, rectangle, viewBox, aspectOf(session, element)), clip };
 }
 
 /** Inside a viewport: percentages are of the viewBox, or of the viewport where there is none. */

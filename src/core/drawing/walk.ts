@@ -1,10 +1,11 @@
 import { type Affine, IDENTITY, multiply, translation } from '../geometry/affine.js';
+import { clipWithin } from './clipping.js';
 import { readOpacity, type Style } from './computedStyle.js';
 import { firstThatHolds, holds } from './conditions.js';
 import { CopyLimits } from './copyLimits.js';
 import { drawElement, lengthOf, SHAPES } from './drawElement.js';
 import type { LimitName } from './readingLimits.js';
-import { hrefOf, isCopyOf, isInside, labelOf } from './references.js';
+import { hrefOf, isLoop, labelOf } from './references.js';
 import { type Context, type Session, shown } from './session.js';
 import { styleOf } from './styleReading.js';
 import { type SvgElement, textOf } from './svgTree.js';
@@ -83,7 +84,7 @@ class Walk {
     }
     const isLayer = context.atTop && name === 'g';
     const layer = isLayer ? this.addLayer(element) : context.layer;
-    const specified = session.cascade.specifiedOn(element, context.copies?.target);
+    let specified = session.cascade.specifiedOn(element, context.copies?.target);
     if (!holds(specified)) {
       this.reportShapes('condition-not-met', element);
       return;
@@ -94,10 +95,19 @@ class Walk {
     }
     const style = styleOf(session, element, specified, context);
     const map = this.mapOf(element, specified, context);
+    const clip = clipWithin(session, element, specified.get('clip-path'), map, style, context);
+    if (clip !== context.clip) specified = session.cascade.specifiedOn(element, context.copies?.target);
     this.reportEffects(element, specified);
     if (SHAPES.has(name)) {
       const before = session.sink.segmentsSeen;
-      drawElement(session, element, specified, style, map, context);
+      drawElement(
+        session,
+        element,
+        specified,
+        style,
+        map,
+        clip === context.clip ? context : { ...context, clip },
+      );
       if (context.copies) this.limits.addSegments(session.sink.segmentsSeen - before);
       return;
     }
@@ -105,7 +115,7 @@ class Walk {
       this.reportShapes('invisible', element);
       return;
     }
-    const inner: Context = { ...context, map, style, layer, atTop: false };
+    const inner: Context = { ...context, map, style, layer, clip, atTop: false };
     switch (name) {
       case 'g':
       case 'a':
@@ -141,13 +151,12 @@ class Walk {
   }
 
   private enterSwitch(element: SvgElement, context: Context): void {
-    const { chosen, passedOver } = firstThatHolds(
-      element,
-      (child) => !NOT_RENDERED.has(child.name),
-      (child) => this.session.cascade.specifiedOn(child, context.copies?.target),
+    const { chosen, passedOver } = firstThatHolds(element, (child) =>
+      this.session.cascade.specifiedOn(child, context.copies?.target),
     );
     for (const foreign of passedOver) this.session.report('foreign-object-not-drawn', foreign);
-    if (chosen) this.enter([chosen], context);
+    // A title or defs before them all is chosen too, and nothing drawn: so says SVG 2, and browsers do.
+    if (chosen && !NOT_RENDERED.has(chosen.name)) this.enter([chosen], context);
     else if (element.children.length > 0) this.session.report('switch-without-match', element);
   }
 
@@ -162,8 +171,7 @@ class Walk {
     const target = href.startsWith('#') ? session.tree.byId.get(href.slice(1)) : undefined;
     if (!href.startsWith('#')) session.report('use-external', element, first);
     else if (!target) session.report('use-missing', element, first);
-    else if (isInside(element, target) || isCopyOf(context, target))
-      session.report('use-loop', element, first);
+    else if (isLoop(element, context, target)) session.report('use-loop', element, first);
     else if (
       !this.isPast(this.limits.passedByDepth(context.copies?.depth ?? 0), element) &&
       !this.isPast(this.limits.passedByCopy(), element)
@@ -171,7 +179,7 @@ class Walk {
       const length = (name: string, axis: 'x' | 'y'): number =>
         lengthOf(session, element, specified, name, axis, context.style, context) ?? 0;
       const map = multiply(context.map, translation(length('x', 'x'), length('y', 'y')));
-      const copies = { target, depth: (context.copies?.depth ?? 0) + 1, outer: context.copies };
+      const copies = { target, use: element, depth: (context.copies?.depth ?? 0) + 1, outer: context.copies };
       const size = { width: specified.get('width') ?? null, height: specified.get('height') ?? null };
       this.enter([target], { ...context, map, copies }, size);
     }
@@ -196,15 +204,14 @@ class Walk {
   }
 
   private reportEffects(element: SvgElement, specified: Specified): void {
-    for (const property of ['clip-path', 'mask', 'filter'] as const) {
+    for (const property of ['mask', 'filter'] as const) {
       const value = specified.get(property)?.trim();
       if (value === undefined || value === '' || ['none', 'inherit', 'initial', 'unset'].includes(value))
         continue;
       // A reference to nothing has no effect (CSS Masking Module Level 1).
       const id = /^url\(\s*["']?#([^"')]*)/.exec(value)?.[1];
       if (id !== undefined && !this.session.tree.byId.has(id)) continue;
-      const code = property === 'clip-path' ? 'clip-not-applied' : (`${property}-not-applied` as const);
-      this.session.report(code, element, { [property === 'clip-path' ? 'clip' : property]: shown(value) });
+      this.session.report(`${property}-not-applied` as const, element, { [property]: shown(value) });
     }
   }
 

@@ -82,6 +82,11 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'foreign-object-not-drawn': (v) => `${some(v.count, 'foreignObject')} not drawn`,
   'markers-not-drawn': (v) => `markers (arrow heads and the like) on ${some(v.count, 'line')} not drawn`,
   'clip-not-applied': (v) => `${some(v.count, 'clip path')} not applied: lines run on past the clip`,
+  clipped: (v) =>
+    `${some(v.count, 'stroke')} cut at the edge of a clip path or viewport, ${number(v.clippedMm)} mm not drawn; --clips ignore draws them whole`,
+  'page-edge-cut': (v) =>
+    `${some(v.count, 'stroke')} cut at the edge of the page, ${number(v.clippedMm)} mm not drawn; --page-edge ignore draws them whole`,
+  'cut-limit': (v) => `${some(v.count, 'stroke')} not cut at an edge, since it would take too long`,
   'mask-not-applied': (v) => `${some(v.count, 'mask')} not applied: what it hides is drawn whole`,
   'filter-not-applied': (v) => `${some(v.count, 'filter')} not applied`,
   'dashes-drawn-solid': (v) => `${some(v.count, 'dashed line')} drawn solid`,

@@ -1,0 +1,226 @@
+import { type Affine, determinant, multiply, scaling, translation } from '../geometry/affine.js';
+import { Outline } from '../geometry/outline.js';
+import { bothOf, NOWHERE, type Region } from '../geometry/region.js';
+import { traceBasicShape } from './basicShape.js';
+import { readClipValue } from './clipValue.js';
+import { INITIAL_STYLE } from './computedStyle.js';
+import { lengthOf, SHAPES, type Shape, traceShapeInto } from './drawElement.js';
+import { type Bounds, boundsOf } from './elementBounds.js';
+import { OutlineSink } from './outlineSink.js';
+import { hrefOf } from './references.js';
+import type { Context, Session } from './session.js';
+import { styleOf } from './styleReading.js';
+import type { SvgElement } from './svgTree.js';
+import { readTransformList } from './transformList.js';
+
+/** What a clip path costs to build, in steps of `Work` per segment. */
+const SEGMENT_WORK = 50;
+
+/** A clip that cannot be evaluated. */
+class NotRead extends Error {}
+
+/** What a clip path is applied to: user space, and the box of what it fills there. */
+interface Applied {
+  readonly element: SvgElement;
+  readonly map: Affine;
+  readonly context: Context;
+}
+
+interface Known {
+  readonly map: Affine;
+  readonly region: Region | null;
+}
+
+/**
+ * The regions that `clip-path` leaves (CSS Masking Module Level 1): the union of what the children of a
+ * clipPath fill, each by its clip-rule and within its own clip, all within the clipPath's own; or a basic
+ * shape. In page mm.
+ */
+export class ClipRegions {
+  /** The last one of each clipPath: many elements in a row share one in the same user space. */
+  private readonly known = new Map<SvgElement, Known>();
+  private readonly active = new Set<SvgElement>();
+  private asksForBox = false;
+
+  constructor(private readonly session: Session) {}
+
+  /**
+   * What the `clip-path` on an element leaves of it; null where it clips nothing, `unread` where it
+   * cannot be evaluated. `map` is the element's user space, its own transform in it.
+   */
+  regionFor(element: SvgElement, value: string, map: Affine, context: Context): Region | null | 'unread' {
+    try {
+      return this.valueRegion(value, { element, map, context });
+    } catch (error) {
+      if (error instanceof NotRead) return 'unread';
+      throw error;
+    } finally {
+      this.active.clear();
+    }
+  }
+
+  private valueRegion(text: string, applied: Applied): Region | null {
+    const value = readClipValue(text);
+    switch (value.kind) {
+      case 'none':
+      case 'unknown':
+        return null;
+      case 'elsewhere':
+        throw new NotRead();
+      case 'reference': {
+        const target = this.session.tree.byId.get(value.id);
+        return target?.name === 'clipPath' && target.isSvg ? this.clipPathRegion(target, applied) : null;
+      }
+      case 'shape': {
+        const { x, y, width, height } = this.referenceBox(value.box, applied);
+        const sink = new OutlineSink(multiply(applied.map, translation(x, y)));
+        const rule = traceBasicShape(
+          value.shape,
+          width,
+          height,
+          applied.context,
+          applied.context.style.fontSize,
+          sink,
+        );
+        if (rule === null) throw new NotRead();
+        return this.outline(sink, rule === 'evenodd');
+      }
+    }
+  }
+
+  private clipPathRegion(clipPath: SvgElement, applied: Applied): Region | null {
+    // A clip path that would clip itself: the reference is in error, and clips nothing.
+    if (this.active.has(clipPath)) return null;
+    const known = this.known.get(clipPath);
+    if (known && this.active.size === 0 && known.map.every((v, k) => v === applied.map[k]))
+      return known.region;
+    const before = this.asksForBox;
+    this.asksForBox = false;
+    this.active.add(clipPath);
+    const region = this.evaluate(clipPath, applied);
+    this.active.delete(clipPath);
+    if (!this.asksForBox && this.active.size === 0) this.known.set(clipPath, { map: applied.map, region });
+    this.asksForBox ||= before;
+    return region;
+  }
+
+  private evaluate(clipPath: SvgElement, applied: Applied): Region | null {
+    const { session } = this;
+    const { style, evenOdd } = this.inherited(clipPath, applied.context);
+    const specified = session.cascade.specifiedOn(clipPath);
+    const own = specified.get('clip-path') ?? '';
+    const transform = readTransformList(specified.get('transform') ?? '');
+    let map = transform ? multiply(applied.map, transform) : applied.map;
+    if (specified.get('clipPathUnits')?.trim() === 'objectBoundingBox') {
+      const [x0, y0, x1, y1] = this.boundsOf(applied);
+      map = multiply(multiply(map, translation(x0, y0)), scaling(x1 - x0, y1 - y0));
+    }
+    const context: Context = { ...applied.context, style, map, copies: null, clip: null };
+    const parts: Region[] = [];
+    for (const child of clipPath.children) {
+      if (typeof child !== 'string' && child.isSvg) this.addChild(child, context, evenOdd, parts);
+    }
+    const region: Region = parts.length === 1 ? parts[0] : { kind: 'any', parts };
+    return own === '' ? region : bothOf(region, this.valueRegion(own, applied));
+  }
+
+  /** Adds what a child of a clipPath, or what such a child copies, fills. */
+  private addChild(child: SvgElement, outer: Context, outerEvenOdd: boolean, parts: Region[]): void {
+    const { session } = this;
+    const isShape = SHAPES.has(child.name);
+    if (!isShape && child.name !== 'use' && child.name !== 'text') return;
+    const specified = session.cascade.specifiedOn(child, outer.copies?.target);
+    if (specified.get('display')?.trim() === 'none') return;
+    const style = styleOf(session, child, specified, outer);
+    const evenOdd = ruleOf(specified, outerEvenOdd);
+    const transform = readTransformList(specified.get('transform') ?? '');
+    const map = transform ? multiply(outer.map, transform) : outer.map;
+    const context: Context = { ...outer, style, map };
+    const own = specified.get('clip-path') ?? '';
+    const found: Region[] = [];
+    if (child.name === 'use') this.addCopy(child, specified, context, evenOdd, found);
+    else if (!style.visible) return;
+    else if (child.name === 'text') throw new NotRead();
+    else if (determinant(map) !== 0) {
+      const sink = new OutlineSink(map);
+      const shape: Shape = { session, element: child, specified, style, map, context: outer };
+      traceShapeInto(shape, sink, false);
+      found.push(this.outline(sink, evenOdd));
+    }
+    if (found.length === 0) return;
+    const clip = own === '' ? null : this.valueRegion(own, { element: child, map, context: outer });
+    parts.push(bothOf(found[0], clip) ?? found[0]);
+  }
+
+  /** A `use` in a clipPath may only copy a shape or text, not a group. */
+  private addCopy(
+    element: SvgElement,
+    specified: ReadonlyMap<string, string>,
+    context: Context,
+    evenOdd: boolean,
+    found: Region[],
+  ): void {
+    const { session } = this;
+    if (context.copies) return;
+    const href = hrefOf(session, element);
+    const target = href?.startsWith('#') ? session.tree.byId.get(href.slice(1)) : undefined;
+    if (!target || target.name === 'use') return;
+    const at = (name: 'x' | 'y'): number =>
+      lengthOf(session, element, specified, name, name, context.style, context) ?? 0;
+    const map = multiply(context.map, translation(at('x'), at('y')));
+    const copies = { target, use: element, depth: 1, outer: null };
+    this.addChild(target, { ...context, map, copies }, evenOdd, found);
+  }
+
+  private outline(sink: OutlineSink, evenOdd: boolean): Region {
+    const segments = sink.finish();
+    if (sink.overflows) throw new NotRead();
+    const { work } = this.session.sink.clipper;
+    work.left -= SEGMENT_WORK * (1 + segments.count);
+    if (work.left < 0) throw new NotRead();
+    if (segments.count === 0) return NOWHERE;
+    return { kind: 'outline', outline: new Outline(segments, evenOdd) };
+  }
+
+  private boundsOf({ element, context }: Applied): Bounds {
+    this.asksForBox = true;
+    const { work } = this.session.sink.clipper;
+    work.left -= SEGMENT_WORK;
+    const bounds = work.left < 0 ? 'unknown' : boundsOf(this.session, element, context);
+    if (bounds === 'unknown') throw new NotRead();
+    return bounds ?? [0, 0, 0, 0];
+  }
+
+  private referenceBox(
+    box: 'fill-box' | 'stroke-box' | 'view-box',
+    applied: Applied,
+  ): { x: number; y: number; width: number; height: number } {
+    if (box === 'view-box') {
+      const { viewportWidth, viewportHeight } = applied.context;
+      return { x: 0, y: 0, width: viewportWidth, height: viewportHeight };
+    }
+    const [x0, y0, x1, y1] = this.boundsOf(applied);
+    return { x: x0, y: y0, width: x1 - x0, height: y1 - y0 };
+  }
+
+  /** What the children of a clipPath inherit where it stands, not where it is used. */
+  private inherited(clipPath: SvgElement, context: Context): { style: Context['style']; evenOdd: boolean } {
+    const { session } = this;
+    const chain: SvgElement[] = [];
+    for (let e: SvgElement | null = clipPath; e !== null; e = e.parent) chain.unshift(e);
+    let style = INITIAL_STYLE;
+    let evenOdd = false;
+    for (const element of chain) {
+      const specified = session.cascade.specifiedOn(element);
+      style = styleOf(session, element, specified, { ...context, style });
+      evenOdd = ruleOf(specified, evenOdd);
+    }
+    return { style, evenOdd };
+  }
+}
+
+function ruleOf(specified: ReadonlyMap<string, string>, inherited: boolean): boolean {
+  const rule = specified.get('clip-rule')?.trim().toLowerCase();
+  if (rule === 'evenodd') return true;
+  return rule === 'nonzero' || rule === 'initial' ? false : inherited;
+}

@@ -1,0 +1,78 @@
+import { type Affine, applyX, applyY } from '../geometry/affine.js';
+import { Outline } from '../geometry/outline.js';
+import { bothOf, type Region } from '../geometry/region.js';
+import { SegmentBuilder } from '../geometry/segments.js';
+import type { Style } from './computedStyle.js';
+import { type Context, type Session, shown } from './session.js';
+import type { Clipping } from './strokeClipper.js';
+import type { SvgElement } from './svgTree.js';
+import type { ViewBox } from './viewBox.js';
+
+/**
+ * What is left of an element within the clip around it and its own `clip-path`. `map` and `style` are the
+ * element's.
+ */
+export function clipWithin(
+  session: Session,
+  element: SvgElement,
+  value: string | undefined,
+  map: Affine,
+  style: Style,
+  context: Context,
+): Region | null {
+  if (value === undefined || session.rules.clips === 'ignore') return context.clip;
+  const own = session.clips.regionFor(element, value, map, { ...context, style });
+  if (own === 'unread') {
+    session.report('clip-not-applied', element, { clip: shown(value) });
+    return context.clip;
+  }
+  return bothOf(context.clip, own);
+}
+
+/** The clip inside a viewport: its own rectangle too, unless what overflows it is shown. */
+export function viewportClip(
+  session: Session,
+  specified: ReadonlyMap<string, string>,
+  { x, y, width, height }: ViewBox,
+  { map, clip }: Context,
+): Region | null {
+  const overflow = specified.get('overflow')?.trim().toLowerCase().split(/\s+/)[0] ?? 'hidden';
+  if (session.rules.clips === 'ignore' || SHOWN_OVERFLOW.has(overflow)) return clip;
+  return bothOf(clip, rectangle(x, y, width, height, map));
+}
+
+const SHOWN_OVERFLOW: ReadonlySet<string> = new Set(['visible', 'auto']);
+
+/** The paper. */
+export function pageRegion({ widthMm, heightMm }: { widthMm: number; heightMm: number }): Region {
+  return rectangle(0, 0, widthMm, heightMm, [1, 0, 0, 1, 0, 0]);
+}
+
+function rectangle(x: number, y: number, width: number, height: number, map: Affine): Region {
+  const builder = new SegmentBuilder();
+  const corners = [
+    [x, y],
+    [x + width, y],
+    [x + width, y + height],
+    [x, y + height],
+  ].map(([px, py]) => [applyX(map, px, py), applyY(map, px, py)]);
+  for (let k = 0; k < 4; k++) {
+    const [from, to] = [corners[k], corners[(k + 1) % 4]];
+    builder.line(from[0], from[1], to[0], to[1]);
+  }
+  return { kind: 'outline', outline: new Outline(builder.finish(), false) };
+}
+
+/** Says what edges took away from one element. */
+export function reportClipping(session: Session, element: SvgElement, clipping: Clipping): void {
+  const { byClip, byPage, gaveUp } = clipping;
+  if (byClip.strokes > 0) {
+    session.report('clipped', element, {}, byClip.strokes);
+    session.log.sum('clipped', 'clippedMm', byClip.mm);
+  }
+  if (byPage.strokes > 0) {
+    session.report('page-edge-cut', element, {}, byPage.strokes);
+    session.log.sum('page-edge-cut', 'clippedMm', byPage.mm);
+  }
+  if (gaveUp > 0) session.report('cut-limit', element, {}, gaveUp);
+}
