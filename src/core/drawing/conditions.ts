@@ -18,12 +18,11 @@ export function holds(specified: Specified): boolean {
  */
 export function firstThatHolds(
   element: SvgElement,
-  isCandidate: (child: SvgElement) => boolean,
   specifiedOn: (child: SvgElement) => Specified,
 ): { readonly chosen: SvgElement | null; readonly passedOver: readonly SvgElement[] } {
   const passedOver: SvgElement[] = [];
   for (const child of element.children) {
-    if (typeof child === 'string' || !child.isSvg || !isCandidate(child)) continue;
+    if (typeof child === 'string' || !child.isSvg) continue;
     if (!holds(specifiedOn(child))) continue;
     if (child.name !== 'foreignObject') return { chosen: child, passedOver };
     passedOver.push(child);

@@ -34,13 +34,19 @@ function prefixed(session: Session, element: SvgElement, name: string): string |
 }
 
 /** Whether the element is the other or stands in it, so that a copy would hold itself. */
-export function isInside(element: SvgElement, other: SvgElement): boolean {
+function isInside(element: SvgElement, other: SvgElement): boolean {
   for (let e: SvgElement | null = element; e !== null; e = e.parent) if (e === other) return true;
   return false;
 }
 
-/** Whether the context is already a copy of the target, directly or further out. */
-export function isCopyOf(context: Context, target: SvgElement): boolean {
-  for (let copy = context.copies; copy !== null; copy = copy.outer) if (copy.target === target) return true;
+/**
+ * Whether a copy of the target made there would stand in the target or in a copy of it: an ancestor of the
+ * element, copies taken for what they copy (SVG 2, "The use element": shadow-including ancestors).
+ */
+export function isLoop(element: SvgElement, context: Context, target: SvgElement): boolean {
+  if (isInside(element, target)) return true;
+  for (let copy = context.copies; copy !== null; copy = copy.outer) {
+    if (isInside(copy.use, target)) return true;
+  }
   return false;
 }
