@@ -39,7 +39,7 @@ export interface Chains {
 /** Doubles in a chunk once the first ones are full. */
 const CHUNK = 1 << 17;
 
-/** Columns that are full, in order; `data` is as long as what is used of it. */
+/** Columns that are full, in order, each as long as what is used of it. */
 interface Chunk {
   readonly kind: Uint8Array;
   readonly offset: Uint32Array;
@@ -128,7 +128,9 @@ export class SegmentBuilder {
   finish(): Segments {
     const { count, full } = this;
     const last = this.lastChunk();
-    if (full.length === 0) return { count, ...last };
+    if (full.length === 0) {
+      return { count, kind: last.kind.slice(), offset: last.offset.slice(), data: last.data.slice() };
+    }
     const kind = new Uint8Array(count);
     const offset = new Uint32Array(count);
     const data = new Float64Array(this.fullUsed + this.used);
@@ -168,7 +170,9 @@ export class SegmentBuilder {
       this.data = grown(this.data, new Float64Array(2 * this.data.length));
       return;
     }
-    this.full.push(this.lastChunk());
+    const { kind, offset, data } = this.lastChunk();
+    // Short columns are copied, since what they have room for would stay with them.
+    this.full.push({ kind: kind.slice(), offset: offset.slice(), data });
     this.fullCount = this.count;
     this.fullUsed += this.used;
     this.used = 0;
@@ -178,9 +182,9 @@ export class SegmentBuilder {
   private lastChunk(): Chunk {
     const count = this.count - this.fullCount;
     return {
-      kind: this.kind.slice(0, count),
-      offset: this.offset.slice(0, count),
-      data: this.data.slice(0, this.used),
+      kind: this.kind.subarray(0, count),
+      offset: this.offset.subarray(0, count),
+      data: this.data.subarray(0, this.used),
     };
   }
 }
