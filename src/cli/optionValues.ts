@@ -1,5 +1,5 @@
 import { InvalidArgumentError } from 'commander';
-import { parseLengthMm } from '../core/index.js';
+import { LIMIT_NAMES, parseLengthMm, type ReadingLimits } from '../core/index.js';
 
 /** A length of at least 0, with or without a unit; bare numbers are mm. */
 export function lengthMm(text: string): number {
@@ -62,4 +62,17 @@ export function pairOfNames(text: string, before: [string, string][] = []): [str
   const [old, name] = [text.slice(0, at).trim(), text.slice(at + 1).trim()];
   if (at < 0 || old === '' || name === '') throw new InvalidArgumentError('Give it as OLD=NEW.');
   return [...before, [old, name]];
+}
+
+/** `NAME=N`, added to the limits given before it: the option may be repeated. */
+export function readingLimit(text: string, before: Partial<ReadingLimits> = {}): Partial<ReadingLimits> {
+  const [name, value = ''] = text.split('=', 2);
+  const known = LIMIT_NAMES.find((limit) => limit === name.trim());
+  if (known === undefined) {
+    throw new InvalidArgumentError(`Give NAME=N, where NAME is one of ${LIMIT_NAMES.join(', ')}.`);
+  }
+  if (!/^\d{1,15}$/.test(value.trim())) {
+    throw new InvalidArgumentError(`Give a whole number of at least 0 for ${known}, such as ${known}=1000.`);
+  }
+  return { ...before, [known]: Number(value) };
 }

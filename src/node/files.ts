@@ -15,10 +15,19 @@ import {
   writeSync,
 } from 'node:fs';
 import { basename, dirname, join, resolve } from 'node:path';
+import { NotText } from './notText.js';
 
-/** All bytes of a file, or of standard input for `-`. Throws as the file system does. */
+/**
+ * All bytes of a file, or of standard input for `-`. Throws as the file system does, or NotText where there
+ * are more than Node.js reads at once.
+ */
 export function readBytes(path: string): Uint8Array {
-  return path === '-' ? readFileSync(0) : readFileSync(path);
+  try {
+    return readFileSync(path === '-' ? 0 : path);
+  } catch (error) {
+    if ((error as { code?: unknown }).code !== 'ERR_FS_FILE_TOO_LARGE') throw error;
+    throw new NotText('is larger than Node.js reads at once (2 GB): split it');
+  }
 }
 
 /**
