@@ -20,8 +20,8 @@ export interface Ancestry {
 
 /** Reads the forest between searches; linear time. */
 export function nestsOf(f: Forest): Ancestry {
-  const { n, set, node, z, firstChild, sibling } = f;
-  const nodes = z.length;
+  const { n, set, node } = f;
+  const nodes = f.z.length;
   const nests = {
     blossoms: [] as number[],
     inner: new Int32Array(n).fill(-1),
@@ -31,34 +31,38 @@ export function nestsOf(f: Forest): Ancestry {
     skip: new Int32Array(nodes),
     zSum: new Float64Array(nodes),
   };
-  const { blossoms, inner, outermost, parent, depth, skip, zSum } = nests;
+  const { blossoms } = nests;
+  let known = 0;
   for (let v = 0; v < n; v++) {
     const top = node[set[v]];
     if (top < n || f.firstVertex[top] !== v) continue;
-    outermost[top] = top;
-    skip[top] = top;
-    zSum[top] = z[top];
+    nests.outermost[top] = top;
+    nests.skip[top] = top;
+    nests.zSum[top] = f.z[top];
     blossoms.push(top);
-  }
-  for (let i = 0; i < blossoms.length; i++) {
-    const blossom = blossoms[i];
-    const far = skip[blossom];
-    const balanced = depth[blossom] - depth[far] === depth[far] - depth[skip[far]];
-    let child = firstChild[blossom];
-    do {
-      if (child < n) inner[child] = blossom;
-      else {
-        parent[child] = blossom;
-        outermost[child] = outermost[blossom];
-        depth[child] = depth[blossom] + 1;
-        skip[child] = balanced ? skip[far] : blossom;
-        zSum[child] = zSum[blossom] + z[child];
-        blossoms.push(child);
-      }
-      child = sibling[child];
-    } while (child !== firstChild[blossom]);
+    while (known < blossoms.length) enterChildren(f, nests, blossoms[known++]);
   }
   return nests;
+}
+
+function enterChildren(f: Forest, nests: Ancestry & { blossoms: number[] }, blossom: number): void {
+  const { n, z, firstChild, sibling } = f;
+  const { blossoms, inner, outermost, parent, depth, skip, zSum } = nests;
+  const far = skip[blossom];
+  const balanced = depth[blossom] - depth[far] === depth[far] - depth[skip[far]];
+  let child = firstChild[blossom];
+  do {
+    if (child < n) inner[child] = blossom;
+    else {
+      parent[child] = blossom;
+      outermost[child] = outermost[blossom];
+      depth[child] = depth[blossom] + 1;
+      skip[child] = balanced ? skip[far] : blossom;
+      zSum[child] = zSum[blossom] + z[child];
+      blossoms.push(child);
+    }
+    child = sibling[child];
+  } while (child !== firstChild[blossom]);
 }
 
 /** The innermost blossom that holds both, or −1; either argument may be −1. */

@@ -1,14 +1,14 @@
 import { buildBoxTree } from '../structures/boxTree.js';
-import { NearestSearch } from '../structures/nearest.js';
 import { EdgeList } from './graph.js';
 import type { IntegerCosts, Layout } from './layout.js';
+import { nearInQuadrants, QUADRANT_NEIGHBOURS } from './quadrants.js';
 
-/** Nearest places per quadrant. Nearest in all directions alone starve between clusters. */
-const PER_QUADRANT = 2;
 /** Up to this many vertices a special vertex is a candidate for every other one. */
 const COMPLETE = 2048;
 /** Beyond that, this many cheapest partners of a special vertex, and as many by cost less the partner's dual. */
 const SPECIAL_PARTNERS = 48;
+/** Edges to make room for, per vertex; uniform points have 5.4. */
+const EXPECTED = 5.5;
 
 /**
  * Candidate edges among which a perfect matching certainly exists: two nearest places in each quadrant
@@ -16,54 +16,81 @@ const SPECIAL_PARTNERS = 48;
  * a path through all vertices in working order, and partners for the special vertices.
  */
 export function candidateEdges(layout: Layout, costs: IntegerCosts): EdgeList {
-  const edges = new EdgeList();
-  const add = (u: number, v: number): void => edges.add(u, v, costs.between(u, v));
-  nearPlaces(layout, add);
-  for (let v = 0; v + 1 < layout.n; v++) add(v, v + 1);
+  const edges = new EdgeList(16 + Math.ceil(EXPECTED * layout.n));
+  placeEdges(layout, edges);
+  costs.fill(edges);
   if (layout.placed < layout.n) specialPartners(layout, costs, edges);
   return edges;
 }
 
-function nearPlaces(layout: Layout, add: (u: number, v: number) => void): void {
+function placeEdges(layout: Layout, edges: EdgeList): void {
   const { tree, first } = layout;
-  const search = new NearestSearch(tree, PER_QUADRANT, 4);
+  const places = tree.x.length;
+  const near = nearInQuadrants(tree);
   const odd: number[] = [];
-  for (let p = 0; p < tree.x.length; p++) {
+  for (let p = 0; p < places; p++) {
     const size = first[p + 1] - first[p];
     if (size % 2 === 1) odd.push(p);
+    joinNear(near, p, first, edges);
+    if (size === 1 && p + 1 < places && joined(near, p, p + 1)) continue;
     // The copies on a place start as one odd set (start.ts): its cycle closes here.
-    if (size >= 3) add(first[p], first[p] + size - (size % 2 === 0 ? 2 : 1));
-    for (const q of search.around(tree.x[p], tree.y[p], p)) if (q >= 0) joinPlaces(first, p, q, add);
+    if (size >= 3) edges.join(first[p], first[p] + size - (size % 2 === 0 ? 2 : 1));
+    for (let v = first[p]; v < first[p + 1] && v + 1 < layout.n; v++) edges.join(v, v + 1);
   }
-  if (odd.length < tree.x.length) nearOddPlaces(layout, odd, add);
+  for (let v = layout.placed; v + 1 < layout.n; v++) edges.join(v, v + 1);
+  if (odd.length < places) joinOdd(layout, odd, edges);
+}
+
+/** To the neighbours of p; of two positions that are neighbours of one another only from the lower one. */
+function joinNear(near: Int32Array, p: number, first: Int32Array, edges: EdgeList): void {
+  const row = QUADRANT_NEIGHBOURS * p;
+  const alone = first[p + 1] - first[p] === 1;
+  for (let i = row; i < row + QUADRANT_NEIGHBOURS; i++) {
+    const q = near[i];
+    if (q < p && (q < 0 || lists(near, q, p))) continue;
+    if (alone && first[q + 1] - first[q] === 1) edges.join(first[p], first[q]);
+    else joinPlaces(first, p, q, edges);
+  }
+}
+
+/** An odd number of copies acts as one vertex, an even number as two: the first and the last. */
+function joinPlaces(first: Int32Array, p: number, q: number, edges: EdgeList): void {
+  const lastP = (first[p + 1] - first[p]) % 2 === 0 ? first[p + 1] - 1 : first[p];
+  const lastQ = (first[q + 1] - first[q]) % 2 === 0 ? first[q + 1] - 1 : first[q];
+  edges.join(first[p], first[q]);
+  if (lastP !== first[p]) edges.join(lastP, first[q]);
+  if (lastQ !== first[q]) edges.join(first[p], lastQ);
+  if (lastP !== first[p] && lastQ !== first[q]) edges.join(lastP, lastQ);
 }
 
 /**
  * Where the triangle inequality holds, the copies on a place with an even number of them may as well be mates:
  * the other places see one another as if these were not there, lest every way lead through them.
  */
-function nearOddPlaces(layout: Layout, odd: readonly number[], add: (u: number, v: number) => void): void {
+function joinOdd(layout: Layout, odd: readonly number[], edges: EdgeList): void {
   const { tree, first } = layout;
   const oddTree = buildBoxTree(
     odd.map((p) => tree.x[p]),
     odd.map((p) => tree.y[p]),
   );
-  const search = new NearestSearch(oddTree, PER_QUADRANT, 4);
-  for (let i = 0; i < odd.length; i++) {
-    for (const j of search.around(oddTree.x[i], oddTree.y[i], i)) {
-      if (j >= 0) add(first[odd[oddTree.order[i]]], first[odd[oddTree.order[j]]]);
+  const near = nearInQuadrants(oddTree);
+  for (let p = 0; p < odd.length; p++) {
+    const u = first[odd[oddTree.order[p]]];
+    for (let i = QUADRANT_NEIGHBOURS * p; i < QUADRANT_NEIGHBOURS * (p + 1); i++) {
+      const q = near[i];
+      if (q > p || (q >= 0 && !lists(near, q, p))) edges.join(u, first[odd[oddTree.order[q]]]);
     }
   }
 }
 
-/** An odd number of copies acts as one vertex, an even number as two: the first and the last. */
-function joinPlaces(first: Int32Array, p: number, q: number, add: (u: number, v: number) => void): void {
-  const lastP = (first[p + 1] - first[p]) % 2 === 0 ? first[p + 1] - 1 : first[p];
-  const lastQ = (first[q + 1] - first[q]) % 2 === 0 ? first[q + 1] - 1 : first[q];
-  add(first[p], first[q]);
-  if (lastP !== first[p]) add(lastP, first[q]);
-  if (lastQ !== first[q]) add(first[p], lastQ);
-  if (lastP !== first[p] && lastQ !== first[q]) add(lastP, lastQ);
+function joined(near: Int32Array, p: number, q: number): boolean {
+  return lists(near, p, q) || lists(near, q, p);
+}
+
+function lists(near: Int32Array, p: number, q: number): boolean {
+  const row = QUADRANT_NEIGHBOURS * p;
+  for (let i = row; i < row + QUADRANT_NEIGHBOURS; i++) if (near[i] === q) return true;
+  return false;
 }
 
 function specialPartners(layout: Layout, costs: IntegerCosts, edges: EdgeList): void {
@@ -71,7 +98,7 @@ function specialPartners(layout: Layout, costs: IntegerCosts, edges: EdgeList): 
   const cheapest = new Float64Array(n).fill(Number.POSITIVE_INFINITY);
   for (let i = 0; i < edges.count; i++) {
     const { from, to, cost } = edges;
-    if (to[i] >= placed) continue;
+    if (from[i] >= placed || to[i] >= placed) continue;
     if (cost[i] < cheapest[from[i]]) cheapest[from[i]] = cost[i];
     if (cost[i] < cheapest[to[i]]) cheapest[to[i]] = cost[i];
   }

@@ -3,7 +3,7 @@ import { candidateEdges } from './candidates.js';
 import { largestCost, powerScale } from './cost.js';
 import { certificateOf, matesOf, tallies } from './extract.js';
 import { Forest } from './forest.js';
-import { buildGraph } from './graph.js';
+import { addEdges, buildGraph, EdgeList } from './graph.js';
 import { interrupted } from './interrupted.js';
 import { IntegerCosts, type Layout, layOut } from './layout.js';
 import { exposedSets, matchExposed, type Watch } from './passes.js';
@@ -53,8 +53,7 @@ function solve(
   options: ExactOptions,
 ): CertifiedMatching | 'stopped' | 'inexact' {
   const { n, placed } = layout;
-  const edges = candidateEdges(layout, costs);
-  const f = new Forest(n, buildGraph(n, edges));
+  const f = new Forest(n, buildGraph(n, candidateEdges(layout, costs)));
   firstDuals(f, placed);
   contractPlaces(f, layout);
   raiseExposed(f);
@@ -63,8 +62,9 @@ function solve(
   for (;;) {
     if (!matchExposed(f, exposed, watch)) return 'stopped';
     const nests = nestsOf(f);
-    const start = edges.count;
-    if (priceAllPairs(f, layout, costs, nests, edges) === 0) {
+    const missed = new EdgeList();
+    priceAllPairs(f, layout, costs, nests, missed);
+    if (missed.count === 0) {
       const certificate = certificateOf(f, layout, costs.scale, nests);
       const mate = matesOf(f, layout);
       if (!tallies(certificate, mate, layout, costs)) return 'inexact';
@@ -73,8 +73,10 @@ function solve(
     }
     if (watch.stop()) return 'stopped';
     exposed = [];
-    for (let i = start; i < edges.count; i++) makeRoom(f, edges.from[i], edges.to[i], edges.cost[i], exposed);
-    f.graph = buildGraph(n, edges);
+    for (let i = 0; i < missed.count; i++) {
+      makeRoom(f, missed.from[i], missed.to[i], missed.cost[i], exposed);
+    }
+    addEdges(f.graph, missed);
   }
 }
 

@@ -23,6 +23,8 @@ export class Forest {
   /** By vertex. */
   readonly pi: Float64Array;
   readonly set: Int32Array;
+  /** 1 where π may have risen, against that of vertices in other sets, since the last pricing. */
+  readonly risen: Uint8Array;
   /** The vertices of a node as a chain from firstVertex to lastVertex. */
   readonly next: Int32Array;
 
@@ -76,6 +78,7 @@ export class Forest {
     const nodes = n + (n >> 1);
     this.pi = new Float64Array(n);
     this.set = identity(n);
+    this.risen = new Uint8Array(n).fill(1);
     this.next = new Int32Array(n).fill(-1);
     this.node = identity(n);
     this.sign = new Int8Array(n);

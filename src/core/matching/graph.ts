@@ -12,57 +12,69 @@ export class EdgeList {
   }
 
   add(u: number, v: number, cost: number): void {
-    if (this.count === this.from.length) this.grow();
-    const i = this.count++;
-    this.from[i] = Math.min(u, v);
-    this.to[i] = Math.max(u, v);
-    this.cost[i] = cost;
+    this.join(u, v);
+    this.cost[this.count - 1] = cost;
+  }
+
+  /** An edge whose cost is not known yet. */
+  join(u: number, v: number): void {
+    const i = this.count;
+    if (i === this.from.length) this.grow();
+    this.count = i + 1;
+    this.from[i] = u;
+    this.to[i] = v;
   }
 
   private grow(): void {
     const capacity = 2 * this.from.length;
-    const from = new Int32Array(capacity);
-    const to = new Int32Array(capacity);
-    const cost = new Float64Array(capacity);
-    from.set(this.from);
-    to.set(this.to);
-    cost.set(this.cost);
-    this.from = from;
-    this.to = to;
-    this.cost = cost;
+    const { from, to, cost } = this;
+    this.from = new Int32Array(capacity);
+    this.to = new Int32Array(capacity);
+    this.cost = new Float64Array(capacity);
+    this.from.set(from);
+    this.to.set(to);
+    this.cost.set(cost);
   }
 }
 
-/** Every edge as two arcs: those leaving v are first[v] … first[v + 1] − 1. */
+/** Every edge as two arcs: those leaving v are first[v] … first[v + 1] − 1. The columns have room to spare. */
 export interface Graph {
-  readonly first: Int32Array;
-  readonly tail: Int32Array;
-  readonly head: Int32Array;
-  readonly cost: Float64Array;
+  first: Int32Array;
+  tail: Int32Array;
+  head: Int32Array;
+  cost: Float64Array;
 }
 
-/** Lists the arcs by vertex. Puts the edges in the order of their lower ends and drops double ones. Linear time. */
+/** Arcs the first graph leaves room for, as a share of those it has. */
+const SPARE = 1 / 32;
+
+/** Lists the arcs by vertex. Linear time. */
 export function buildGraph(n: number, edges: EdgeList): Graph {
-  tidy(n, edges);
   const { from, to, cost, count } = edges;
   const first = new Int32Array(n + 1);
   for (let i = 0; i < count; i++) {
-    first[from[i] + 1]++;
-    first[to[i] + 1]++;
+    first[from[i]]++;
+    first[to[i]]++;
   }
-  for (let v = 0; v < n; v++) first[v + 1] += first[v];
-  const tail = new Int32Array(2 * count);
-  const head = new Int32Array(2 * count);
-  const arcCost = new Float64Array(2 * count);
-  const at = first.slice(0, n);
-  for (let i = 0; i < count; i++) {
+  let sum = 0;
+  for (let v = 0; v < n; v++) {
+    sum += first[v];
+    first[v] = sum;
+  }
+  first[n] = sum;
+  const capacity = sum + Math.ceil(sum * SPARE);
+  const tail = new Int32Array(capacity);
+  const head = new Int32Array(capacity);
+  const arcCost = new Float64Array(capacity);
+  // From the last edge to the first, each vertex's block is filled from behind: first[v] ends at its start.
+  for (let i = count - 1; i >= 0; i--) {
     const u = from[i];
     const v = to[i];
-    const there = at[u]++;
-    const back = at[v]++;
+    const there = --first[u];
     tail[there] = u;
     head[there] = v;
     arcCost[there] = cost[i];
+    const back = --first[v];
     tail[back] = v;
     head[back] = u;
     arcCost[back] = cost[i];
@@ -70,28 +82,48 @@ export function buildGraph(n: number, edges: EdgeList): Graph {
   return { first, tail, head, cost: arcCost };
 }
 
-function tidy(n: number, edges: EdgeList): void {
+/** Adds edges: the blocks of arcs behind each new one move up. Time in the size of the graph, at the speed of copying. */
+export function addEdges(graph: Graph, edges: EdgeList): void {
+  const { first } = graph;
+  const n = first.length - 1;
   const { from, to, cost, count } = edges;
-  const bucket = bucketByFrom(n, from, count);
-  const mark = new Int32Array(n).fill(-1);
-  const tidied = new EdgeList(from.length);
+  reserve(graph, first[n] + 2 * count);
+  const { tail, head, cost: arcCost } = graph;
+  const fresh = new EdgeList(2 * count);
   for (let i = 0; i < count; i++) {
-    const edge = bucket[i];
-    if (mark[to[edge]] === from[edge]) continue;
-    mark[to[edge]] = from[edge];
-    tidied.add(from[edge], to[edge], cost[edge]);
+    fresh.add(from[i], to[i], cost[i]);
+    fresh.add(to[i], from[i], cost[i]);
   }
-  edges.from = tidied.from;
-  edges.to = tidied.to;
-  edges.cost = tidied.cost;
-  edges.count = tidied.count;
+  const order = Int32Array.from({ length: 2 * count }, (_, i) => i);
+  order.sort((a, b) => fresh.from[a] - fresh.from[b] || a - b);
+  let end = first[n];
+  for (let i = order.length - 1; i >= 0; i--) {
+    const arc = order[i];
+    const v = fresh.from[arc];
+    const start = first[v + 1];
+    tail.copyWithin(start + i + 1, start, end);
+    head.copyWithin(start + i + 1, start, end);
+    arcCost.copyWithin(start + i + 1, start, end);
+    tail[start + i] = v;
+    head[start + i] = fresh.to[arc];
+    arcCost[start + i] = fresh.cost[arc];
+    end = start;
+  }
+  let added = 0;
+  for (let v = 0; v <= n; v++) {
+    first[v] += added;
+    while (added < order.length && fresh.from[order[added]] === v) added++;
+  }
 }
 
-function bucketByFrom(n: number, from: Int32Array, count: number): Int32Array {
-  const at = new Int32Array(n + 1);
-  for (let i = 0; i < count; i++) at[from[i] + 1]++;
-  for (let v = 0; v < n; v++) at[v + 1] += at[v];
-  const bucket = new Int32Array(count);
-  for (let i = 0; i < count; i++) bucket[at[from[i]]++] = i;
-  return bucket;
+function reserve(graph: Graph, arcs: number): void {
+  if (arcs <= graph.head.length) return;
+  const capacity = arcs + Math.ceil(arcs * SPARE);
+  const { tail, head, cost } = graph;
+  graph.tail = new Int32Array(capacity);
+  graph.head = new Int32Array(capacity);
+  graph.cost = new Float64Array(capacity);
+  graph.tail.set(tail);
+  graph.head.set(head);
+  graph.cost.set(cost);
 }

@@ -24,11 +24,8 @@ export function layOut(problem: MatchingProblem): Layout {
   const { n, special } = problem;
   const placed = n - special;
   const { representative, nextOnPlace } = groupByPlace(problem, placed);
-  const tree = buildBoxTree(
-    Float64Array.from(representative, (v) => problem.x[v]),
-    Float64Array.from(representative, (v) => problem.y[v]),
-  );
   const places = representative.length;
+  const tree = buildBoxTree(pick(problem.x, representative), pick(problem.y, representative));
   const original = new Int32Array(n);
   const first = new Int32Array(places + 1);
   const place = new Int32Array(placed);
@@ -43,6 +40,12 @@ export function layOut(problem: MatchingProblem): Layout {
   first[places] = at;
   for (; at < n; at++) original[at] = at;
   return { problem, n, placed, original, tree, first, place };
+}
+
+function pick(column: Float64Array, vertices: Int32Array): Float64Array {
+  const picked = new Float64Array(vertices.length);
+  for (let i = 0; i < vertices.length; i++) picked[i] = column[vertices[i]];
+  return picked;
 }
 
 /** The first vertex on each place, and for each vertex the next one on its place or −1. Expected linear time. */
@@ -64,8 +67,8 @@ function groupByPlace(
     bits[0] = problem.x[v] + 0;
     bits[1] = problem.y[v] + 0;
     let hash = 0;
-    for (const word of words) {
-      hash = Math.imul(hash ^ word, 0x85ebca6b);
+    for (let i = 0; i < 4; i++) {
+      hash = Math.imul(hash ^ words[i], 0x85ebca6b);
       hash ^= hash >>> 15;
     }
     let slot = hash & (capacity - 1);
@@ -92,19 +95,17 @@ function groupByPlace(
 export class IntegerCosts {
   private readonly layout: Layout;
   readonly scale: number;
-  private readonly px: Float64Array;
-  private readonly py: Float64Array;
+  /** Places of the working vertices. */
+  readonly px: Float64Array;
+  readonly py: Float64Array;
 
   constructor(layout: Layout, scale: number) {
     this.layout = layout;
     this.scale = scale;
     const { original, placed, problem } = layout;
-    this.px = new Float64Array(placed);
-    this.py = new Float64Array(placed);
-    for (let v = 0; v < placed; v++) {
-      this.px[v] = problem.x[original[v]];
-      this.py[v] = problem.y[original[v]];
-    }
+    const alone = layout.tree.x.length === placed;
+    this.px = alone ? layout.tree.x : pick(problem.x, original.subarray(0, placed));
+    this.py = alone ? layout.tree.y : pick(problem.y, original.subarray(0, placed));
   }
 
   /** c(u, v) = 2·floor(scale·cost). */
@@ -118,8 +119,20 @@ export class IntegerCosts {
     return 2 * Math.floor(scale * layout.problem.weigh(Math.sqrt(dx * dx + dy * dy)));
   }
 
-  /** At most the cost of any pair at this distance or more. */
-  atLeast(distance: number): number {
-    return 2 * Math.floor(this.scale * this.layout.problem.weigh(distance));
+  /** Fills in the costs of edges whose ends are known, all at once: in one loop a tenth of a call for each. */
+  fill(edges: { from: Int32Array; to: Int32Array; cost: Float64Array; count: number }): void {
+    const { layout, px, py, scale } = this;
+    const { placed, problem } = layout;
+    const { from, to, cost, count } = edges;
+    for (let i = 0; i < count; i++) {
+      const u = from[i];
+      const v = to[i];
+      if (u >= placed || v >= placed) cost[i] = this.between(u, v);
+      else {
+        const dx = px[u] - px[v];
+        const dy = py[u] - py[v];
+        cost[i] = 2 * Math.floor(scale * problem.weigh(Math.sqrt(dx * dx + dy * dy)));
+      }
+    }
   }
 }

@@ -9,17 +9,24 @@ const PER_VERTEX = 3;
 /** The same for a pair of crowded places, whose copies stand for one another, and for a special vertex. */
 const PER_PLACES = 30;
 const PER_SPECIAL = 50;
+/** Pairs of places put by before they are looked at one by one. */
+const BATCH = 4096;
 
 /** What a group of vertices (a place, a box) has in common, to judge pairs of groups. */
 interface Summary {
   readonly highest: Float64Array;
   readonly blossom: Int32Array;
+  readonly risen: Uint8Array;
 }
 
 /**
- * Adds to `edges` pairs of the complete graph with negative slack, and says how many; 0 proves that there are
- * none. Pairs of boxes are passed over where even the nearest and highest of their vertices have slack; special
+ * Adds to `edges` pairs of the complete graph with negative slack, and leaves it empty only where there are none.
+ * Pairs of boxes are passed over where even the nearest and highest of their vertices have slack; special
  * vertices are priced one by one.
+ *
+ * A pair that had slack in an earlier round is looked at again only where one of its ends has risen since. While
+ * both lie in one set their slack does not change: π rises or falls by t in both and z by 2t. While they lie in
+ * two, it falls only where π rises in one of them, that is while that one is grown, and scanned (scan.ts).
  */
 export function priceAllPairs(
   f: Forest,
@@ -27,90 +34,149 @@ export function priceAllPairs(
   costs: IntegerCosts,
   nests: Ancestry,
   edges: EdgeList,
-): number {
-  const before = edges.count;
+): void {
   const value = new Float64Array(f.n);
   for (let v = 0; v < f.n; v++) value[v] = f.pi[v] + f.off[f.set[v]];
-  const pricer = new Pricer(layout, costs, nests, value, edges);
-  if (layout.tree.root >= 0) pricer.walkBoxes();
+  const pricer = new Pricer(layout, costs, nests, value, f.risen.slice(), edges);
+  // What stays behind for the next round is marked again on the way.
+  f.risen.fill(0);
+  if (layout.tree.root >= 0) pricer.walkBoxes(f.risen);
   for (let s = layout.placed; s < f.n; s++) pricer.special(s);
-  return edges.count - before;
 }
 
+/**
+ * The walk over pairs of boxes, a step at a time: a function called often is compiled once and stays so through
+ * all rounds, a long loop is compiled anew in each.
+ */
 class Pricer {
   private readonly places: Summary;
   private readonly boxes: Summary;
   private readonly added: Uint8Array;
+  private readonly stack: number[] = [];
+  /** Pairs of places that may hold a violating pair: p0 q0 p1 q1 … */
+  private readonly pending = new Int32Array(2 * BATCH);
+  private count = 0;
 
   constructor(
     private readonly layout: Layout,
     private readonly costs: IntegerCosts,
     private readonly nests: Ancestry,
     private readonly value: Float64Array,
+    risen: Uint8Array,
     private readonly edges: EdgeList,
   ) {
     this.added = new Uint8Array(layout.n);
-    this.places = placeSummary(layout, nests, value);
+    this.places = placeSummary(layout, nests, value, risen);
     this.boxes = boxSummary(layout, nests, this.places);
   }
 
-  walkBoxes(): void {
-    const { tree } = this.layout;
-    const { highest, blossom } = this.boxes;
-    const { nests, costs } = this;
-    const { zSum } = nests;
-    const stack = [tree.root, tree.root];
+  /** Marks in `behind` the vertices that may have more such pairs than this round takes. */
+  walkBoxes(behind: Uint8Array): void {
+    const { stack, layout } = this;
+    const { root } = layout.tree;
+    stack.push(root, root);
     while (stack.length > 0) {
       const b = stack.pop() as number;
       const a = stack.pop() as number;
-      const common = commonBlossom(nests, blossom[a], blossom[b]);
-      const shared = common < 0 ? 0 : zSum[common];
-      if (costs.atLeast(boxDistance(tree, a, b)) + shared >= highest[a] + highest[b]) continue;
-      if (a < tree.leaves && b < tree.leaves) {
-        this.leafPair(a, b, shared);
-      } else if (a === b) {
-        const left = tree.left[a];
-        const right = tree.right[a];
-        stack.push(left, left);
-        if (right >= 0) stack.push(left, right, right, right);
-      } else {
-        // The higher node is the later one: split it.
-        const high = Math.max(a, b);
-        const low = Math.min(a, b);
-        stack.push(tree.left[high], low);
-        if (tree.right[high] >= 0) stack.push(tree.right[high], low);
-      }
+      this.boxPair(a, b);
+      if (this.count > BATCH - LEAF * LEAF) this.settle(behind);
+    }
+    this.settle(behind);
+  }
+
+  private boxPair(a: number, b: number): void {
+    const { stack, nests } = this;
+    const { tree, problem } = this.layout;
+    const { highest, blossom, risen } = this.boxes;
+    if (risen[a] === 0 && risen[b] === 0) return;
+    const most = highest[a] + highest[b];
+    const least = 2 * Math.floor(this.costs.scale * problem.weigh(boxDistance(tree, a, b)));
+    if (least >= most) return;
+    const common = commonBlossom(nests, blossom[a], blossom[b]);
+    const shared = common < 0 ? 0 : nests.zSum[common];
+    if (least + shared >= most) return;
+    const { left, right, leaves } = tree;
+    if (a < leaves && b < leaves) {
+      this.leafPair(a, b, shared);
+    } else if (a === b) {
+      stack.push(left[a], left[a]);
+      if (right[a] >= 0) stack.push(left[a], right[a], right[a], right[a]);
+    } else {
+      // The higher node is the later one: split it.
+      const high = a > b ? a : b;
+      const low = a > b ? b : a;
+      stack.push(left[high], low);
+      if (right[high] >= 0) stack.push(right[high], low);
     }
   }
 
   private leafPair(a: number, b: number, shared: number): void {
-    const { tree, first } = this.layout;
-    const { highest } = this.places;
-    const endA = Math.min(tree.x.length, LEAF * a + LEAF);
-    const endB = Math.min(tree.x.length, LEAF * b + LEAF);
+    const { tree, problem } = this.layout;
+    const { x, y } = tree;
+    const { highest, risen } = this.places;
+    const { pending } = this;
+    const { scale } = this.costs;
+    const endA = Math.min(x.length, LEAF * a + LEAF);
+    const endB = Math.min(x.length, LEAF * b + LEAF);
+    let count = this.count;
     for (let p = LEAF * a; p < endA; p++) {
       for (let q = a === b ? p : LEAF * b; q < endB; q++) {
-        const cost = this.costs.between(first[p], first[q]);
-        if (cost + shared < highest[p] + highest[q]) this.placePair(p, q, cost);
+        const dx = x[p] - x[q];
+        const dy = y[p] - y[q];
+        const cost = 2 * Math.floor(scale * problem.weigh(Math.sqrt(dx * dx + dy * dy)));
+        if (cost + shared >= highest[p] + highest[q] || (risen[p] === 0 && risen[q] === 0)) continue;
+        pending[2 * count] = p;
+        pending[2 * count + 1] = q;
+        count++;
       }
     }
+    this.count = count;
   }
 
-  private placePair(p: number, q: number, cost: number): void {
+  private settle(behind: Uint8Array): void {
+    const { pending } = this;
     const { first } = this.layout;
+    for (let i = 0; i < this.count; i++) {
+      const p = pending[2 * i];
+      const q = pending[2 * i + 1];
+      if (this.placePair(p, q)) continue;
+      for (let v = first[p]; v < first[p + 1]; v++) behind[v] = 1;
+      for (let v = first[q]; v < first[q + 1]; v++) behind[v] = 1;
+    }
+    this.count = 0;
+  }
+
+  /** Adds violating pairs of two places; false where there may be more than it was free to add. */
+  private placePair(p: number, q: number): boolean {
     const { highest, blossom } = this.places;
-    const { nests, value, added } = this;
+    const { nests } = this;
+    const { first } = this.layout;
     const common = commonBlossom(nests, blossom[p], blossom[q]);
-    const shared = common < 0 ? 0 : nests.zSum[common];
-    if (cost + shared >= highest[p] + highest[q]) return;
+    const cost = this.costs.between(first[p], first[q]);
+    const least = cost + (common < 0 ? 0 : nests.zSum[common]);
+    return least >= highest[p] + highest[q] || this.addFrom(p, q, cost, least);
+  }
+
+  private addFrom(p: number, q: number, cost: number, least: number): boolean {
+    const { first } = this.layout;
+    const { highest } = this.places;
+    const { value, added } = this;
     let left = PER_PLACES;
-    for (let u = first[p]; u < first[p + 1] && left > 0; u++) {
-      if (cost + shared >= value[u] + highest[q]) continue;
-      for (let v = p === q ? u + 1 : first[q]; v < first[q + 1] && left > 0; v++) {
-        if (added[u] >= PER_VERTEX) break;
-        if (added[v] < PER_VERTEX && cost + shared < value[u] + value[v] && this.offer(u, v, cost)) left--;
+    let all = true;
+    for (let u = first[p]; u < first[p + 1]; u++) {
+      if (least >= value[u] + highest[q]) continue;
+      for (let v = p === q ? u + 1 : first[q]; v < first[q + 1]; v++) {
+        if (least >= value[u] + value[v]) continue;
+        if (left === 0) return false;
+        if (added[u] >= PER_VERTEX || added[v] >= PER_VERTEX) all = false;
+        else if (this.offer(u, v, cost)) left--;
+        if (added[u] >= PER_VERTEX && v + 1 < first[q + 1]) {
+          all = false;
+          break;
+        }
       }
     }
+    return all;
   }
 
   /** The worst pairs first: where one dual is too high everywhere, mending the worst mends all. */
@@ -148,46 +214,56 @@ class Pricer {
   }
 }
 
-function placeSummary(layout: Layout, nests: Ancestry, value: Float64Array): Summary {
+function placeSummary(layout: Layout, nests: Ancestry, value: Float64Array, risen: Uint8Array): Summary {
   const { first } = layout;
   const places = first.length - 1;
+  if (places === layout.placed) return { highest: value, blossom: nests.inner, risen };
   const highest = new Float64Array(places);
   const blossom = new Int32Array(places);
+  const anyRisen = new Uint8Array(places);
   for (let p = 0; p < places; p++) {
     highest[p] = value[first[p]];
     blossom[p] = nests.inner[first[p]];
+    anyRisen[p] = risen[first[p]];
     for (let v = first[p] + 1; v < first[p + 1]; v++) {
       if (value[v] > highest[p]) highest[p] = value[v];
       blossom[p] = commonBlossom(nests, blossom[p], nests.inner[v]);
+      anyRisen[p] |= risen[v];
     }
   }
-  return { highest, blossom };
+  return { highest, blossom, risen: anyRisen };
 }
 
 function boxSummary(layout: Layout, nests: Ancestry, places: Summary): Summary {
   const { tree } = layout;
   const nodes = tree.root + 1;
-  const highest = new Float64Array(nodes).fill(Number.NEGATIVE_INFINITY);
-  const blossom = new Int32Array(nodes);
+  const boxes = {
+    highest: new Float64Array(nodes),
+    blossom: new Int32Array(nodes),
+    risen: new Uint8Array(nodes),
+  };
   for (let node = 0; node < nodes; node++) {
     if (node < tree.leaves) {
       const start = LEAF * node;
       const end = Math.min(tree.x.length, start + LEAF);
-      blossom[node] = places.blossom[start];
-      for (let p = start; p < end; p++) {
-        if (places.highest[p] > highest[node]) highest[node] = places.highest[p];
-        blossom[node] = commonBlossom(nests, blossom[node], places.blossom[p]);
-      }
-      continue;
-    }
-    const left = tree.left[node];
-    const right = tree.right[node];
-    highest[node] = highest[left];
-    blossom[node] = blossom[left];
-    if (right >= 0) {
-      highest[node] = Math.max(highest[left], highest[right]);
-      blossom[node] = commonBlossom(nests, blossom[left], blossom[right]);
+      take(boxes, node, places, start);
+      for (let p = start + 1; p < end; p++) join(nests, boxes, node, places, p);
+    } else {
+      take(boxes, node, boxes, tree.left[node]);
+      if (tree.right[node] >= 0) join(nests, boxes, node, boxes, tree.right[node]);
     }
   }
-  return { highest, blossom };
+  return boxes;
+}
+
+function take(into: Summary, i: number, from: Summary, j: number): void {
+  into.highest[i] = from.highest[j];
+  into.blossom[i] = from.blossom[j];
+  into.risen[i] = from.risen[j];
+}
+
+function join(nests: Ancestry, into: Summary, i: number, from: Summary, j: number): void {
+  if (from.highest[j] > into.highest[i]) into.highest[i] = from.highest[j];
+  into.blossom[i] = commonBlossom(nests, into.blossom[i], from.blossom[j]);
+  into.risen[i] |= from.risen[j];
 }

@@ -5,13 +5,14 @@ import { BEST, type Forest, TIME } from './forest.js';
  * which their slack is used up, if that is before the search would end anyway.
  */
 export function scanGrown(f: Forest, from: number, to: number, s: number): void {
-  const { pi, set, off, sign, mateOut, next, reach, reachRound, round, clock, events } = f;
+  const { pi, set, off, sign, mateOut, next, reach, reachRound, round, clock, events, risen } = f;
   const { first, head, cost } = f.graph;
   const time = clock[TIME];
   let best = clock[BEST];
   const lift = off[s] + time;
   for (let v = from; ; v = next[v]) {
     const value = pi[v] + lift;
+    risen[v] = 1;
     const end = first[v + 1];
     for (let arc = first[v]; arc < end; arc++) {
       const w = head[arc];

@@ -27,14 +27,15 @@ export interface BoxTree {
 /** Builds the tree over finite coordinates. Time n·log n; no recursion. */
 export function buildBoxTree(x: ArrayLike<number>, y: ArrayLike<number>): BoxTree {
   const n = x.length;
-  const order = kdOrder(x, y);
+  const sorter = new KdSorter(x, y);
+  sorter.sort();
   const levels = [Math.ceil(n / LEAF)];
   while (levels[levels.length - 1] > 1) levels.push(Math.ceil(levels[levels.length - 1] / 2));
   const nodes = n === 0 ? 0 : levels.reduce((sum, count) => sum + count, 0);
   const tree: BoxTree = {
-    order,
-    x: Float64Array.from(order, (i) => x[i]),
-    y: Float64Array.from(order, (i) => y[i]),
+    order: sorter.order,
+    x: sorter.x,
+    y: sorter.y,
     leaves: levels[0],
     root: nodes - 1,
     left: new Int32Array(nodes).fill(-1),
@@ -44,21 +45,41 @@ export function buildBoxTree(x: ArrayLike<number>, y: ArrayLike<number>): BoxTre
     maxX: new Float64Array(nodes).fill(Number.NEGATIVE_INFINITY),
     maxY: new Float64Array(nodes).fill(Number.NEGATIVE_INFINITY),
   };
-  for (let i = 0; i < n; i++) widen(tree, Math.floor(i / LEAF), tree.x[i], tree.y[i], tree.x[i], tree.y[i]);
+  boxLeaves(tree);
   let below = 0;
   for (let level = 1; level < levels.length; level++) {
     const start = below + levels[level - 1];
-    for (let i = 0; i < levels[level]; i++) {
-      const node = start + i;
-      for (let child = below + 2 * i; child < Math.min(below + 2 * i + 2, start); child++) {
-        if (tree.left[node] < 0) tree.left[node] = child;
-        else tree.right[node] = child;
-        widen(tree, node, tree.minX[child], tree.minY[child], tree.maxX[child], tree.maxY[child]);
-      }
-    }
+    joinChildren(tree, below, start, levels[level]);
     below = start;
   }
   return tree;
+}
+
+function boxLeaves(tree: BoxTree): void {
+  const { x, y, minX, minY, maxX, maxY } = tree;
+  for (let i = 0; i < x.length; i++) {
+    const leaf = (i / LEAF) | 0;
+    if (x[i] < minX[leaf]) minX[leaf] = x[i];
+    if (y[i] < minY[leaf]) minY[leaf] = y[i];
+    if (x[i] > maxX[leaf]) maxX[leaf] = x[i];
+    if (y[i] > maxY[leaf]) maxY[leaf] = y[i];
+  }
+}
+
+/** Makes the nodes of one level, from `start` on, over those of the level below. */
+function joinChildren(tree: BoxTree, below: number, start: number, count: number): void {
+  const { left, right, minX, minY, maxX, maxY } = tree;
+  for (let i = 0; i < count; i++) {
+    const node = start + i;
+    const a = below + 2 * i;
+    const b = a + 1 < start ? a + 1 : a;
+    left[node] = a;
+    if (b > a) right[node] = b;
+    minX[node] = Math.min(minX[a], minX[b]);
+    minY[node] = Math.min(minY[a], minY[b]);
+    maxX[node] = Math.max(maxX[a], maxX[b]);
+    maxY[node] = Math.max(maxY[a], maxY[b]);
+  }
 }
 
 /** The distance of two nodes' boxes, at most the distance of any two of their points as computed. */
@@ -68,73 +89,80 @@ export function boxDistance(tree: BoxTree, a: number, b: number): number {
   return Math.sqrt(dx * dx + dy * dy);
 }
 
-function widen(tree: BoxTree, node: number, x0: number, y0: number, x1: number, y1: number): void {
-  if (x0 < tree.minX[node]) tree.minX[node] = x0;
-  if (y0 < tree.minY[node]) tree.minY[node] = y0;
-  if (x1 > tree.maxX[node]) tree.maxX[node] = x1;
-  if (y1 > tree.maxY[node]) tree.maxY[node] = y1;
-}
+/** Puts points into k-d order; their coordinates move along, so that every look is at a neighbour. */
+class KdSorter {
+  readonly order: Int32Array;
+  readonly x: Float64Array;
+  readonly y: Float64Array;
 
-function kdOrder(x: ArrayLike<number>, y: ArrayLike<number>): Int32Array {
-  const n = x.length;
-  const order = new Int32Array(n);
-  for (let i = 0; i < n; i++) order[i] = i;
-  const stack = [0, n];
-  while (stack.length > 0) {
-    const end = stack.pop() as number;
-    const start = stack.pop() as number;
-    if (end - start <= LEAF) continue;
-    let block = LEAF;
-    while (2 * block < end - start) block *= 2;
-    select(order, widerAxis(order, x, y, start, end), start + block, start, end - 1);
-    stack.push(start, start + block, start + block, end);
+  constructor(x: ArrayLike<number>, y: ArrayLike<number>) {
+    this.x = new Float64Array(x);
+    this.y = new Float64Array(y);
+    this.order = new Int32Array(x.length);
+    for (let i = 0; i < x.length; i++) this.order[i] = i;
   }
-  return order;
+
+  sort(): void {
+    const { x, y } = this;
+    const stack = [0, x.length];
+    while (stack.length > 0) {
+      const end = stack.pop() as number;
+      const start = stack.pop() as number;
+      if (end - start <= LEAF) continue;
+      let block = LEAF;
+      while (2 * block < end - start) block *= 2;
+      const wide = extent(x, start, end) >= extent(y, start, end);
+      if (wide) select(this.order, x, y, start + block, start, end - 1);
+      else select(this.order, y, x, start + block, start, end - 1);
+      stack.push(start, start + block, start + block, end);
+    }
+  }
 }
 
-function widerAxis(
-  order: Int32Array,
-  x: ArrayLike<number>,
-  y: ArrayLike<number>,
-  start: number,
-  end: number,
-): ArrayLike<number> {
-  let x0 = x[order[start]];
-  let x1 = x0;
-  let y0 = y[order[start]];
-  let y1 = y0;
+function extent(key: Float64Array, start: number, end: number): number {
+  let least = key[start];
+  let most = least;
   for (let i = start + 1; i < end; i++) {
-    const px = x[order[i]];
-    const py = y[order[i]];
-    if (px < x0) x0 = px;
-    else if (px > x1) x1 = px;
-    if (py < y0) y0 = py;
-    else if (py > y1) y1 = py;
+    if (key[i] < least) least = key[i];
+    else if (key[i] > most) most = key[i];
   }
-  return x1 - x0 >= y1 - y0 ? x : y;
+  return most - least;
 }
 
 /** Quickselect (Hoare 1961), the pivot the middle of three places drawn by a congruential generator. */
-function select(ids: Int32Array, key: ArrayLike<number>, k: number, from: number, to: number): void {
+function select(
+  ids: Int32Array,
+  key: Float64Array,
+  other: Float64Array,
+  k: number,
+  from: number,
+  to: number,
+): void {
   let low = from;
   let high = to;
   let draw = 1;
   while (low < high) {
     draw = (Math.imul(draw, 1664525) + 1013904223) | 0;
     const span = high - low + 1;
-    const a = key[ids[low + ((draw >>> 8) % span)]];
-    const b = key[ids[low + ((draw >>> 4) % span)]];
-    const c = key[ids[(low + high) >> 1]];
+    const a = key[low + ((draw >>> 8) % span)];
+    const b = key[low + ((draw >>> 4) % span)];
+    const c = key[(low + high) >> 1];
     const pivot = Math.max(Math.min(a, b), Math.min(Math.max(a, b), c));
     let i = low;
     let j = high;
     while (i <= j) {
-      while (key[ids[i]] < pivot) i++;
-      while (key[ids[j]] > pivot) j--;
+      while (key[i] < pivot) i++;
+      while (key[j] > pivot) j--;
       if (i <= j) {
-        const swap = ids[i];
+        const id = ids[i];
         ids[i] = ids[j];
-        ids[j] = swap;
+        ids[j] = id;
+        const first = key[i];
+        key[i] = key[j];
+        key[j] = first;
+        const second = other[i];
+        other[i] = other[j];
+        other[j] = second;
         i++;
         j--;
       }
