@@ -33,7 +33,7 @@ const MAY_IMPORT: Readonly<Record<string, readonly string[]>> = {
 
 /** Packages from outside that a folder may import. */
 const PACKAGES: Readonly<Record<string, readonly string[]>> = {
-  'core/drawing': ['svg-parser', 'svg-path-parser', 'css-tree/parser'],
+  'core/drawing': ['svg-parser', 'svg-path-parser', 'css-tree/selector-parser'],
   'core/network': ['flatbush'],
   'core/tour': ['flatbush', 'delaunator'],
   'core/matching': [],

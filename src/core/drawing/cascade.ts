@@ -1,102 +1,281 @@
-import { type Declaration, readDeclarations } from './declarations.js';
+import { type CustomValues, customValues, substituted } from './customProperties.js';
+import { checkedValue, type Declaration, type Misread, readDeclarations } from './declarations.js';
 import type { FindingLog } from './findingLog.js';
-import type { Subject } from './selector.js';
-import { MOST_COMPARED, StyleSheet } from './styleSheet.js';
-import { type SvgElement, type SvgTree, textOf } from './svgTree.js';
+import { PROPERTIES } from './properties.js';
+import { SelectorMatcher } from './selectorMatcher.js';
+import { reportMisread, sheetsOf } from './sheets.js';
+import type { StyleSheet } from './styleSheet.js';
+import type { SvgElement, SvgTree } from './svgTree.js';
 
 /** Distinct style attributes remembered; drawings repeat a few of them thousands of times. */
 const REMEMBERED = 4096;
 
+/** What is said of one element: its attributes, and over them its style. */
+export interface Specified extends ReadonlyMap<string, string> {
+  /** Names of those that are values of CSS properties, from a sheet or a style attribute. */
+  readonly styled: ReadonlySet<string>;
+}
+
+/** A `use` around an element, whose copy it is in. */
+export interface CopyAround {
+  readonly target: SvgElement;
+  readonly use: SvgElement;
+  readonly outer: CopyAround | null;
+}
+
+class SpecifiedValues extends Map<string, string> implements Specified {
+  readonly styled = new Set<string>();
+
+  override clear(): void {
+    super.clear();
+    if (this.styled.size > 0) this.styled.clear();
+  }
+}
+
+interface Inline {
+  readonly declarations: readonly Declaration[];
+  readonly misread: readonly Misread[];
+}
+
 /**
  * What is said of one element in its attributes, in style sheets and in its style attribute, the
- * strongest of them for each name (SVG 2, "Styling": presentation attributes are the weakest).
+ * strongest of them for each name (SVG 2, "Styling": presentation attributes are the weakest). Properties
+ * that are inherited and to be taken from the parent are left out, as are those that are to have their
+ * initial value and are not inherited; `display` is in lower case.
  */
 export class Cascade {
-  private readonly sheet = new StyleSheet();
-  private readonly specified = new Map<string, string>();
-  private readonly subjects = new Map<SvgElement, Subject>();
+  private readonly sheet: StyleSheet | null;
+  private readonly matcher: SelectorMatcher | null;
+  private specified = new SpecifiedValues();
   private saidGivenUp = false;
-  private readonly remembered = new Map<string, readonly Declaration[]>();
+  private readonly remembered = new Map<string, Inline>();
+  /** What parents were found to specify, and custom properties, by the copy they are in. */
+  private readonly parents = new Map<CopyAround | null, Map<SvgElement, SpecifiedValues>>();
+  private readonly customs = new Map<CopyAround | null, Map<SvgElement, CustomValues | null>>();
 
   constructor(
     private readonly tree: SvgTree,
     private readonly log: FindingLog,
   ) {
-    for (const element of tree.sheets) {
-      const place = () => tree.placeOf(element);
-      const type = tree.attributeOf(element, 'type') ?? '';
-      if (type !== '' && type.trim().toLowerCase() !== 'text/css') {
-        log.add('style-sheet-not-read', place, { type });
-        continue;
-      }
-      const media = tree.attributeOf(element, 'media')?.trim() ?? '';
-      const rules = textOf(element, Number.MAX_SAFE_INTEGER);
-      this.sheet.add(media === '' ? rules : `@media ${media}{${rules}}`, (rule) =>
-        log.add('style-rule-not-read', place, { rule: rule.replace(/\s+/g, ' ').slice(0, 60) }),
-      );
-    }
+    this.sheet = sheetsOf(tree, log);
+    this.matcher = this.sheet ? new SelectorMatcher(tree) : null;
   }
 
   /**
-   * The map is the same one each time, valid until the next call. `copied` is what a `use` copies around
+   * The map is the same one each time, valid until the next call. `copy` is what a `use` copies around
    * here: selectors see ancestors up to it only (SVG 2, "The use-element shadow tree").
    */
-  specifiedOn(element: SvgElement, copied: SvgElement | null = null): ReadonlyMap<string, string> {
-    const { specified, tree } = this;
-    const { attributes } = tree;
+  specifiedOn(element: SvgElement, copy: CopyAround | null = null): Specified {
+    const { specified } = this;
     specified.clear();
-    for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
-      const name = attributes.nameNumberAt(i);
-      if (attributes.prefixes[name] === null) specified.set(attributes.names[name], attributes.valueAt(i));
-    }
-    const style = specified.get('style');
-    if (style === undefined && this.sheet.isEmpty) return specified;
-    const inline = style === undefined ? [] : this.declarationsOf(style);
-    const ruled = this.sheet.isEmpty ? [] : this.ruled(element, copied);
-    // The order of the cascade: rules, style attribute, important rules, important style attribute.
-    for (const important of [false, true]) {
-      for (const declarations of [ruled, inline]) {
-        for (const d of declarations) if (d.important === important) specified.set(d.name, d.value);
-      }
-    }
+    this.fill(specified, element, copy);
     return specified;
   }
 
-  private ruled(element: SvgElement, copied: SvgElement | null): readonly Declaration[] {
-    const declarations = this.sheet.declarationsFor(this.subjectOf(element), () => {
-      const ancestors: Subject[] = [];
-      for (let e = element; e !== copied && e.parent !== null; e = e.parent)
-        ancestors.push(this.subjectOf(e.parent));
-      return ancestors;
-    });
-    if (this.sheet.gaveUp && !this.saidGivenUp) {
+  /** Does something that asks for other elements, and leaves the map of the last one as it is. */
+  apart<T>(work: () => T): T {
+    const { specified } = this;
+    this.specified = new SpecifiedValues();
+    try {
+      return work();
+    } finally {
+      this.specified = specified;
+    }
+  }
+
+  private fill(specified: SpecifiedValues, element: SvgElement, copy: CopyAround | null): void {
+    const { attributes } = this.tree;
+    let inherits: string[] | null = null;
+    for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
+      const number = attributes.nameNumberAt(i);
+      if (attributes.prefixes[number] !== null) continue;
+      const name = attributes.names[number];
+      const value = attributes.valueAt(i);
+      specified.set(name, name === 'display' ? value.trim().toLowerCase() : value);
+      if (value === 'inherit') inherits = [...(inherits ?? []), name];
+    }
+    const style = specified.get('style');
+    for (const declaration of this.declarationsOn(element, style, copy)) {
+      this.declare(specified, declaration, element, copy);
+    }
+    for (const name of inherits ?? []) {
+      const property = specified.get(name) === 'inherit' ? PROPERTIES.get(name) : undefined;
+      if (property && !property.inherited) this.inherit(specified, name, element, copy);
+    }
+  }
+
+  /** In the order of the cascade: rules, style attribute, important rules, important style attribute. */
+  private declarationsOn(
+    element: SvgElement,
+    style: string | undefined,
+    copy: CopyAround | null,
+  ): readonly Declaration[] {
+    const inline = style === undefined ? NONE : this.inlineOf(style, element);
+    if (!this.sheet || !this.matcher) return inOrder(NONE, inline);
+    const id = this.tree.attributeOf(element, 'id');
+    const ruled = this.sheet.declarationsFor(element, id, copy?.target ?? null, this.matcher);
+    if (this.matcher.compared > this.matcher.most && !this.saidGivenUp) {
       this.saidGivenUp = true;
-      this.log.add('style-limit', () => this.tree.placeOf(element), { limit: MOST_COMPARED });
+      this.log.add('style-limit', () => this.tree.placeOf(element), { limit: this.matcher?.most ?? 0 });
     }
-    return declarations;
+    return inOrder(ruled, inline);
   }
 
-  private subjectOf(element: SvgElement): Subject {
-    let subject = this.subjects.get(element);
-    if (!subject) {
-      const classes = this.tree.attributeOf(element, 'class')?.trim();
-      subject = {
-        name: element.name,
-        id: this.tree.attributeOf(element, 'id'),
-        classes: new Set(classes ? classes.split(/\s+/) : []),
-      };
-      this.subjects.set(element, subject);
+  private declare(
+    specified: SpecifiedValues,
+    { name, value, kind }: Declaration,
+    element: SvgElement,
+    copy: CopyAround | null,
+  ): void {
+    if (IN_ATTRIBUTES.has(name) && ignoresStyle(element, name)) return;
+    if (kind === 'wide') {
+      this.wide(specified, name, value, element, copy);
+      return;
     }
-    return subject;
+    if (name.startsWith('--')) return;
+    if (kind === 'plain') {
+      specified.set(name, value);
+      specified.styled.add(name);
+      return;
+    }
+    const given = substituted(value, this.customOn(element, copy));
+    const keyword = given?.toLowerCase() ?? '';
+    const checked = given === null || WIDE.has(keyword) ? null : checkedValue(name, given, false);
+    if (checked !== null) {
+      specified.set(name, checked);
+      specified.styled.add(name);
+      return;
+    }
+    if (!WIDE.has(keyword)) this.misread(element, { property: name, found: given ?? value });
+    // Wrong only when worked out: the weaker declarations are gone by then.
+    this.wide(specified, name, WIDE.has(keyword) ? keyword : 'unset', element, copy);
   }
 
-  private declarationsOf(style: string): readonly Declaration[] {
-    let declarations = this.remembered.get(style);
-    if (!declarations) {
-      declarations = readDeclarations(style);
+  private wide(
+    specified: SpecifiedValues,
+    name: string,
+    keyword: string,
+    element: SvgElement,
+    copy: CopyAround | null,
+  ): void {
+    if (keyword === 'revert-layer') return; // What is weaker stands already.
+    const isInherited = PROPERTIES.get(name)?.inherited === true;
+    specified.styled.delete(name);
+    if (isInherited && keyword === 'initial') specified.set(name, keyword);
+    else if (!isInherited && keyword === 'inherit') this.inherit(specified, name, element, copy);
+    else specified.delete(name);
+  }
+
+  private inherit(
+    specified: SpecifiedValues,
+    name: string,
+    element: SvgElement,
+    copy: CopyAround | null,
+  ): void {
+    const parent = parentOf(element, copy);
+    const outer = parent && this.parentValues(parent.element, parent.copy);
+    const value = outer?.get(name);
+    if (value === undefined) {
+      specified.delete(name);
+      return;
+    }
+    specified.set(name, value);
+    if (outer?.styled.has(name)) specified.styled.add(name);
+  }
+
+  private parentValues(element: SvgElement, copy: CopyAround | null): SpecifiedValues {
+    const known = mapIn(this.parents, copy);
+    let values = known.get(element);
+    if (!values) {
+      values = new SpecifiedValues();
+      this.fill(values, element, copy);
+      known.set(element, values);
+    }
+    return values;
+  }
+
+  /** From the outermost ancestor whose values are not known yet inwards, so that depth costs no stack. */
+  private customOn(element: SvgElement, copy: CopyAround | null): CustomValues | null {
+    const path: { readonly element: SvgElement; readonly copy: CopyAround | null }[] = [];
+    let values: CustomValues | null | undefined;
+    let at: (typeof path)[number] | null = { element, copy };
+    for (; at; at = parentOf(at.element, at.copy)) {
+      values = mapIn(this.customs, at.copy).get(at.element);
+      if (values !== undefined) break;
+      path.push(at);
+    }
+    let current: CustomValues | null = values ?? null;
+    for (const here of path.reverse()) {
+      const declared = new Map<string, string>();
+      const style = this.tree.attributeOf(here.element, 'style') ?? undefined;
+      for (const { name, value } of this.declarationsOn(here.element, style, here.copy)) {
+        if (name.startsWith('--')) declared.set(name, value);
+      }
+      if (declared.size > 0) current = customValues(declared, current);
+      mapIn(this.customs, here.copy).set(here.element, current);
+    }
+    return current;
+  }
+
+  private inlineOf(style: string, element: SvgElement): readonly Declaration[] {
+    let inline = this.remembered.get(style);
+    if (!inline) {
+      const misread: Misread[] = [];
+      inline = { declarations: readDeclarations(style, (what) => misread.push(what)), misread };
       if (this.remembered.size >= REMEMBERED) this.remembered.clear();
-      this.remembered.set(style, declarations);
+      this.remembered.set(style, inline);
     }
-    return declarations;
+    for (const what of inline.misread) this.misread(element, what);
+    return inline.declarations;
   }
+
+  private misread(element: SvgElement, what: Misread): void {
+    reportMisread(this.log, what, () => this.tree.placeOf(element));
+  }
+}
+
+const NONE: readonly Declaration[] = [];
+
+/** Browsers take the place and size of a viewport inside the drawing, and the size of a copy, from attributes only. */
+const IN_ATTRIBUTES: ReadonlySet<string> = new Set(['x', 'y', 'width', 'height']);
+
+function ignoresStyle({ name, parent }: SvgElement, property: string): boolean {
+  if (name === 'use') return property === 'width' || property === 'height';
+  return (name === 'svg' && parent !== null) || name === 'symbol';
+}
+
+const WIDE: ReadonlySet<string> = new Set(['inherit', 'initial', 'unset', 'revert', 'revert-layer']);
+
+function inOrder(ruled: readonly Declaration[], inline: readonly Declaration[]): readonly Declaration[] {
+  if (ruled.length === 0 && !inline.some((d) => d.important)) return inline;
+  if (inline.length === 0) return ruled;
+  const plain = (d: Declaration): boolean => !d.important;
+  const important = (d: Declaration): boolean => d.important;
+  return [
+    ...ruled.filter(plain),
+    ...inline.filter(plain),
+    ...ruled.filter(important),
+    ...inline.filter(important),
+  ];
+}
+
+/** The parent of what a `use` copies is that `use`. */
+function parentOf(
+  element: SvgElement,
+  copy: CopyAround | null,
+): { readonly element: SvgElement; readonly copy: CopyAround | null } | null {
+  if (copy !== null && element === copy.target) return { element: copy.use, copy: copy.outer };
+  return element.parent && { element: element.parent, copy };
+}
+
+function mapIn<V>(
+  maps: Map<CopyAround | null, Map<SvgElement, V>>,
+  copy: CopyAround | null,
+): Map<SvgElement, V> {
+  let map = maps.get(copy);
+  if (!map) {
+    map = new Map();
+    maps.set(copy, map);
+  }
+  return map;
 }

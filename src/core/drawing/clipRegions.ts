@@ -5,19 +5,31 @@ import { traceBasicShape } from './basicShape.js';
 import { readClipValue } from './clipValue.js';
 import { INITIAL_STYLE } from './computedStyle.js';
 import { lengthOf, SHAPES, type Shape, traceShapeInto } from './drawElement.js';
-import { type Bounds, boundsOf } from './elementBounds.js';
+import { type Bounds, boundsInside, boundsOf } from './elementBounds.js';
 import { OutlineSink } from './outlineSink.js';
 import { hrefOf } from './references.js';
 import type { Context, Session } from './session.js';
 import { styleOf } from './styleReading.js';
 import type { SvgElement } from './svgTree.js';
-import { readTransformList } from './transformList.js';
+import { transformOf } from './transformOf.js';
 
 /** What a clip path costs to build, in steps of `Work` per segment. */
 const SEGMENT_WORK = 50;
 
+/** And beyond its segments. */
+const CLIP_WORK = 1000;
+/** Clip paths clipped by clip paths, deeper than any drawing in earnest. */
+const MOST_DEEP = 64;
+
 /** A clip that cannot be evaluated. */
 class NotRead extends Error {}
+
+/** Clip paths clip one another; `latest` is the last of them in the document. */
+class Loop extends Error {
+  constructor(readonly latest: SvgElement) {
+    super();
+  }
+}
 
 /** What a clip path is applied to: user space, and the box of what it fills there. */
 interface Applied {
@@ -46,11 +58,12 @@ export class ClipRegions {
 
   /**
    * What the `clip-path` on an element leaves of it; null where it clips nothing, `unread` where it
-   * cannot be evaluated. `map` is the element's user space, its own transform in it.
+   * cannot be evaluated. `context` is that of what stands inside the element.
    */
-  regionFor(element: SvgElement, value: string, map: Affine, context: Context): Region | null | 'unread' {
+  regionFor(element: SvgElement, value: string, context: Context): Region | null | 'unread' {
+    const { map } = context;
     try {
-      return this.valueRegion(value, { element, map, context });
+      return this.session.cascade.apart(() => this.valueRegion(value, { element, map, context }));
     } catch (error) {
       if (error instanceof NotRead) return 'unread';
       throw error;
@@ -69,7 +82,7 @@ export class ClipRegions {
         throw new NotRead();
       case 'reference': {
         const target = this.session.tree.byId.get(value.id);
-        return target?.name === 'clipPath' && target.isSvg ? this.clipPathRegion(target, applied) : null;
+        return target?.name === 'clipPath' && target.isSvg ? this.reference(target, applied) : null;
       }
       case 'shape': {
         const { x, y, width, height } = this.referenceBox(value.box, applied);
@@ -88,17 +101,40 @@ export class ClipRegions {
     }
   }
 
+  /** Of references that go round in a loop the last one in the document clips nothing, as in Chromium. */
+  private reference(clipPath: SvgElement, applied: Applied): Region | null {
+    const from = [...this.active].pop();
+    try {
+      return this.clipPathRegion(clipPath, applied);
+    } catch (error) {
+      if (error instanceof Loop && error.latest === from) return null;
+      throw error;
+    }
+  }
+
+  private latestSince(clipPath: SvgElement): SvgElement {
+    const active = [...this.active];
+    return active
+      .slice(active.indexOf(clipPath))
+      .reduce((latest, next) => (next.number > latest.number ? next : latest));
+  }
+
   private clipPathRegion(clipPath: SvgElement, applied: Applied): Region | null {
-    // A clip path that would clip itself: the reference is in error, and clips nothing.
-    if (this.active.has(clipPath)) return null;
+    if (this.active.has(clipPath)) throw new Loop(this.latestSince(clipPath));
+    this.spend(CLIP_WORK);
+    if (this.active.size > MOST_DEEP) throw new NotRead();
     const known = this.known.get(clipPath);
     if (known && this.active.size === 0 && known.map.every((v, k) => v === applied.map[k]))
       return known.region;
     const before = this.asksForBox;
     this.asksForBox = false;
     this.active.add(clipPath);
-    const region = this.evaluate(clipPath, applied);
-    this.active.delete(clipPath);
+    let region: Region | null;
+    try {
+      region = this.evaluate(clipPath, applied);
+    } finally {
+      this.active.delete(clipPath);
+    }
     if (!this.asksForBox && this.active.size === 0) this.known.set(clipPath, { map: applied.map, region });
     this.asksForBox ||= before;
     return region;
@@ -109,7 +145,7 @@ export class ClipRegions {
     const { style, evenOdd } = this.inherited(clipPath, applied.context);
     const specified = session.cascade.specifiedOn(clipPath);
     const own = specified.get('clip-path') ?? '';
-    const transform = readTransformList(specified.get('transform') ?? '');
+    const transform = transformOf(session, clipPath, specified, style, applied.context, boundsOf);
     let map = transform ? multiply(applied.map, transform) : applied.map;
     if (specified.get('clipPathUnits')?.trim() === 'objectBoundingBox') {
       const [x0, y0, x1, y1] = this.boundsOf(applied);
@@ -129,16 +165,17 @@ export class ClipRegions {
     const { session } = this;
     const isShape = SHAPES.has(child.name);
     if (!isShape && child.name !== 'use' && child.name !== 'text') return;
-    const specified = session.cascade.specifiedOn(child, outer.copies?.target);
-    if (specified.get('display')?.trim() === 'none') return;
+    const specified = session.cascade.specifiedOn(child, outer.copies);
+    if (specified.get('display') === 'none') return;
     const style = styleOf(session, child, specified, outer);
     const evenOdd = ruleOf(specified, outerEvenOdd);
-    const transform = readTransformList(specified.get('transform') ?? '');
+    const transform = transformOf(session, child, specified, style, outer, boundsOf);
     const map = transform ? multiply(outer.map, transform) : outer.map;
     const context: Context = { ...outer, style, map };
     const own = specified.get('clip-path') ?? '';
     const found: Region[] = [];
-    if (child.name === 'use') this.addCopy(child, specified, context, evenOdd, found);
+    let inside = context;
+    if (child.name === 'use') inside = this.addCopy(child, specified, context, evenOdd, found);
     else if (!style.visible) return;
     else if (child.name === 'text') throw new NotRead();
     else if (determinant(map) !== 0) {
@@ -148,45 +185,50 @@ export class ClipRegions {
       found.push(this.outline(sink, evenOdd));
     }
     if (found.length === 0) return;
-    const clip = own === '' ? null : this.valueRegion(own, { element: child, map, context: outer });
+    const clip =
+      own === '' ? null : this.valueRegion(own, { element: child, map: inside.map, context: inside });
     parts.push(bothOf(found[0], clip) ?? found[0]);
   }
 
-  /** A `use` in a clipPath may only copy a shape or text, not a group. */
+  /** A `use` in a clipPath may only copy a shape or text, not a group. Returns where the copy stands. */
   private addCopy(
     element: SvgElement,
     specified: ReadonlyMap<string, string>,
     context: Context,
     evenOdd: boolean,
     found: Region[],
-  ): void {
+  ): Context {
     const { session } = this;
-    if (context.copies) return;
+    if (context.copies) return context;
     const href = hrefOf(session, element);
     const target = href?.startsWith('#') ? session.tree.byId.get(href.slice(1)) : undefined;
-    if (!target || target.name === 'use') return;
+    if (!target || target.name === 'use') return context;
     const at = (name: 'x' | 'y'): number =>
       lengthOf(session, element, specified, name, name, context.style, context) ?? 0;
     const map = multiply(context.map, translation(at('x'), at('y')));
     const copies = { target, use: element, depth: 1, outer: null };
     this.addChild(target, { ...context, map, copies }, evenOdd, found);
+    return { ...context, map };
   }
 
   private outline(sink: OutlineSink, evenOdd: boolean): Region {
     const segments = sink.finish();
     if (sink.overflows) throw new NotRead();
-    const { work } = this.session.sink.clipper;
-    work.left -= SEGMENT_WORK * (1 + segments.count);
-    if (work.left < 0) throw new NotRead();
+    this.spend(SEGMENT_WORK * (1 + segments.count));
     if (segments.count === 0) return NOWHERE;
     return { kind: 'outline', outline: new Outline(segments, evenOdd) };
   }
 
-  private boundsOf({ element, context }: Applied): Bounds {
-    this.asksForBox = true;
+  private spend(steps: number): void {
     const { work } = this.session.sink.clipper;
-    work.left -= SEGMENT_WORK;
-    const bounds = work.left < 0 ? 'unknown' : boundsOf(this.session, element, context);
+    work.left -= steps;
+    if (work.left < 0) throw new NotRead();
+  }
+
+  private boundsOf({ element, context }: Applied, withStrokes = false): Bounds {
+    this.asksForBox = true;
+    this.spend(CLIP_WORK);
+    const bounds = boundsInside(this.session, element, context, withStrokes);
     if (bounds === 'unknown') throw new NotRead();
     return bounds ?? [0, 0, 0, 0];
   }
@@ -199,7 +241,7 @@ export class ClipRegions {
       const { viewportWidth, viewportHeight } = applied.context;
       return { x: 0, y: 0, width: viewportWidth, height: viewportHeight };
     }
-    const [x0, y0, x1, y1] = this.boundsOf(applied);
+    const [x0, y0, x1, y1] = this.boundsOf(applied, box === 'stroke-box');
     return { x: x0, y: y0, width: x1 - x0, height: y1 - y0 };
   }
 

@@ -1,3 +1,4 @@
+import { evaluate } from './calc.js';
 import { readColour } from './colour.js';
 import { type LengthContext, readLength, toUserUnits } from './length.js';
 import { BLACK, NONE, type Paint, readPaint } from './paint.js';
@@ -86,7 +87,6 @@ const INITIAL_VALUES: Readonly<Record<string, string>> = {
   'stroke-dasharray': 'none',
   'stroke-dashoffset': '0',
   visibility: 'visible',
-  marker: 'none',
   'marker-start': 'none',
   'marker-mid': 'none',
   'marker-end': 'none',
@@ -118,11 +118,9 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
   [
     'font-size',
     (style, value, parent, context) => {
-      const length = readLength(value);
-      // A percentage of the font size, unlike others, is one of the parent's.
-      if (length?.unit === '%') style.fontSize = (parent.fontSize * length.value) / 100;
-      else if (length && length.value >= 0)
-        style.fontSize = toUserUnits(length, 'other', context, parent.fontSize);
+      const size = readFontSize(value, parent.fontSize, context);
+      if (size === null) context.reportLength('font-size', value);
+      else style.fontSize = size;
     },
   ],
   [
@@ -145,7 +143,7 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
     (style, value, _parent, context) => {
       const length = readLength(value);
       if (length && length.value >= 0)
-        style.strokeWidth = toUserUnits(length, 'other', context, style.fontSize);
+        style.strokeWidth = Math.max(0, toUserUnits(length, 'other', context, style.fontSize));
       else context.reportLength('stroke-width', value);
     },
   ],
@@ -183,7 +181,6 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
       else if (visibility === 'hidden' || visibility === 'collapse') style.visible = false;
     },
   ],
-  ['marker', markerSetter(7)],
   ['marker-start', markerSetter(1)],
   ['marker-mid', markerSetter(2)],
   ['marker-end', markerSetter(4)],
@@ -191,9 +188,37 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
 
 /** An opacity as a number or percentage, clamped to 0 to 1; null where it is neither. */
 export function readOpacity(value: string): number | null {
+  const opacity = evaluate(value.trim(), (number, unit) => {
+    if (unit !== '' && unit !== '%') return null;
+    return { kind: 'number', value: unit === '%' ? number / 100 : number };
+  });
+  return opacity && Math.min(1, Math.max(0, opacity.value));
+}
+
+/** px, as browsers take the keywords where nobody has chosen otherwise (CSS Fonts Module Level 4, §2.5). */
+const FONT_SIZES: ReadonlyMap<string, number> = new Map([
+  ['xx-small', 9],
+  ['x-small', 10],
+  ['small', 13],
+  ['medium', 16],
+  ['large', 18],
+  ['x-large', 24],
+  ['xx-large', 32],
+  ['xxx-large', 48],
+]);
+
+function readFontSize(value: string, parent: number, context: LengthContext): number | null {
+  const keyword = value.toLowerCase();
+  if (keyword === 'larger') return parent * 1.2;
+  if (keyword === 'smaller') return parent / 1.2;
+  if (keyword === 'math') return parent;
+  const named = FONT_SIZES.get(keyword);
+  if (named !== undefined) return named;
   const length = readLength(value);
-  if (!length || (length.unit !== '' && length.unit !== '%')) return null;
-  return Math.min(1, Math.max(0, length.unit === '%' ? length.value / 100 : length.value));
+  if (!length || length.value < 0) return null;
+  // A percentage of the font size, unlike others, is one of the parent's.
+  const within = { ...context, viewportWidth: parent, viewportHeight: parent };
+  return Math.max(0, toUserUnits(length, 'x', within, parent));
 }
 
 /**
@@ -207,7 +232,7 @@ function readDashes(value: string, context: LengthContext, fontSize: number): nu
   for (const word of value.split(/\s*,\s*|\s+/)) {
     const length = readLength(word);
     if (!length || length.value < 0) return undefined;
-    sum += lengths[lengths.push(toUserUnits(length, 'other', context, fontSize)) - 1];
+    sum += lengths[lengths.push(Math.max(0, toUserUnits(length, 'other', context, fontSize))) - 1];
   }
   if (!(sum > 0)) return null;
   return lengths.length % 2 === 0 ? lengths : [...lengths, ...lengths];

@@ -12,6 +12,7 @@ import { type ShapeInput, traceShape } from './traceShape.js';
 export const SHAPES: ReadonlySet<string> = new Set([
   ...['path', 'line', 'rect', 'circle', 'ellipse', 'polyline', 'polygon'],
 ]);
+const NOT_NEGATIVE: ReadonlySet<string> = new Set(['width', 'height', 'r', 'rx', 'ry']);
 const WITH_MARKERS: ReadonlySet<string> = new Set(['path', 'line', 'polyline', 'polygon']);
 
 type Specified = ReadonlyMap<string, string>;
@@ -176,7 +177,11 @@ export function lengthOf(
   const text = specified.get(name);
   if (text === undefined || text.trim() === 'auto') return null;
   const length = readLength(text);
-  if (length) return toUserUnits(length, axis, context, style.fontSize);
+  if (length) {
+    const value = toUserUnits(length, axis, context, style.fontSize);
+    // A sum that comes out negative where it may not be counts as 0 (CSS Values and Units 4, §10.5).
+    return length.unit === 'calc' && NOT_NEGATIVE.has(name) ? Math.max(0, value) : value;
+  }
   session.report('length-error', element, { attribute: name, found: shown(text) });
   return null;
 }

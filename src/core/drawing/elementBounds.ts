@@ -1,5 +1,6 @@
 import { type Affine, IDENTITY, multiply, translation } from '../geometry/affine.js';
 import { segmentBox } from '../geometry/box.js';
+import type { Style } from './computedStyle.js';
 import { firstThatHolds, holds } from './conditions.js';
 import { lengthOf, SHAPES, traceShapeInto } from './drawElement.js';
 import { OutlineSink } from './outlineSink.js';
@@ -7,7 +8,7 @@ import { hrefOf } from './references.js';
 import type { Context, Session } from './session.js';
 import { styleOf } from './styleReading.js';
 import type { SvgElement } from './svgTree.js';
-import { readTransformList } from './transformList.js';
+import { transformOf } from './transformOf.js';
 import { enterViewport, type UseSize } from './viewport.js';
 
 /** Least x and y, greatest x and y. */
@@ -15,7 +16,8 @@ export type Bounds = [number, number, number, number];
 
 /** Deeper than any drawing in earnest goes. */
 const MOST_DEEP = 100;
-const MOST_ELEMENTS = 100_000;
+/** What an element costs, in steps of `Work`. */
+const ELEMENT_WORK = 200;
 /** Elements that draw nothing where they stand, and so have no box. */
 const WITHOUT_BOX: ReadonlySet<string> = new Set([
   ...['defs', 'symbol', 'clipPath', 'mask', 'pattern', 'marker', 'linearGradient', 'radialGradient'],
@@ -29,33 +31,59 @@ const WITHOUT_BOX: ReadonlySet<string> = new Set([
  * takes part, or too much does.
  */
 export function boundsOf(session: Session, element: SvgElement, context: Context): Bounds | null | 'unknown' {
+  return search(session, context, false, (bounds, at) => bounds.add(element, at, null, 0));
+}
+
+/**
+ * The same in the user space of its content: past the x and y of a `use`, the viewBox of a viewport. With
+ * strokes they reach half their width around; what joins and caps reach beyond that is left out.
+ */
+export function boundsInside(
+  session: Session,
+  element: SvgElement,
+  context: Context,
+  withStrokes: boolean,
+): Bounds | null | 'unknown' {
+  return search(session, context, withStrokes, (bounds, at) => {
+    if (element.name === 'svg' || element.name === 'symbol') return bounds.addChildren(element, at, 0);
+    return element.name === 'use' ? bounds.addCopy(element, at, false, 0) : bounds.add(element, at, null, 0);
+  });
+}
+
+function search(
+  session: Session,
+  context: Context,
+  withStrokes: boolean,
+  add: (bounds: Search, at: Context) => boolean,
+): Bounds | null | 'unknown' {
   const bounds: Bounds = [Infinity, Infinity, -Infinity, -Infinity];
-  const search = new Search(session, bounds);
-  const isKnown = search.add(element, { ...context, map: IDENTITY, clip: null }, null, 0);
-  if (!isKnown) return 'unknown';
+  if (!add(new Search(session, bounds, withStrokes), { ...context, map: IDENTITY, clip: null }))
+    return 'unknown';
   return bounds[0] <= bounds[2] ? bounds : null;
 }
 
 class Search {
-  private left = MOST_ELEMENTS;
   private readonly box = new Float64Array(4);
 
   constructor(
     private readonly session: Session,
     private readonly bounds: Bounds,
+    private readonly withStrokes: boolean,
   ) {}
 
   /** `context.map` holds the element's own transform already. False where the box cannot be known. */
   add(element: SvgElement, context: Context, useSize: UseSize | null, depth: number): boolean {
     const { session } = this;
-    if (--this.left < 0 || depth > MOST_DEEP) return false;
-    const specified = session.cascade.specifiedOn(element, context.copies?.target);
+    const { work } = session.sink.clipper;
+    work.left -= ELEMENT_WORK;
+    if (work.left < 0 || depth > MOST_DEEP) return false;
+    const specified = session.cascade.specifiedOn(element, context.copies);
     const style = styleOf(session, element, specified, context);
     const inner: Context = { ...context, style };
     if (SHAPES.has(element.name)) {
       const sink = new OutlineSink(context.map);
       traceShapeInto({ session, element, specified, style, map: context.map, context }, sink, false);
-      return this.include(sink);
+      return this.include(sink, this.withStrokes ? reachOf(style, context.map) : NO_REACH);
     }
     switch (element.name) {
       case 'g':
@@ -63,7 +91,7 @@ class Search {
         return this.addChildren(element, inner, depth);
       case 'switch': {
         const chosen = firstThatHolds(element, (child) =>
-          session.cascade.specifiedOn(child, context.copies?.target),
+          session.cascade.specifiedOn(child, context.copies),
         ).chosen;
         return !chosen || WITHOUT_BOX.has(chosen.name) || this.addChild(chosen, inner, null, depth);
       }
@@ -73,13 +101,13 @@ class Search {
         return !entered || this.addChildren(element, entered, depth);
       }
       case 'use':
-        return this.addCopy(element, specified, inner, depth);
+        return this.addCopy(element, inner, true, depth);
       default:
         return WITHOUT_BOX.has(element.name) || !element.isSvg;
     }
   }
 
-  private addChildren(element: SvgElement, context: Context, depth: number): boolean {
+  addChildren(element: SvgElement, context: Context, depth: number): boolean {
     for (const child of element.children) {
       if (typeof child === 'string' || !child.isSvg || WITHOUT_BOX.has(child.name)) continue;
       if (!this.addChild(child, context, null, depth)) return false;
@@ -88,42 +116,47 @@ class Search {
   }
 
   private addChild(child: SvgElement, context: Context, useSize: UseSize | null, depth: number): boolean {
-    const specified = this.session.cascade.specifiedOn(child, context.copies?.target);
+    const specified = this.session.cascade.specifiedOn(child, context.copies);
     if (!holds(specified)) return true;
-    if (specified.get('display')?.trim() === 'none' && child.name !== 'symbol') return true;
-    const own = readTransformList(specified.get('transform') ?? '');
+    if (specified.get('display') === 'none' && child.name !== 'symbol') return true;
+    const own = transformOf(this.session, child, specified, context.style, context, boundsOf);
     const map: Affine = own ? multiply(context.map, own) : context.map;
     return this.add(child, { ...context, map }, useSize, depth + 1);
   }
 
-  private addCopy(
-    element: SvgElement,
-    specified: ReadonlyMap<string, string>,
-    context: Context,
-    depth: number,
-  ): boolean {
+  addCopy(element: SvgElement, context: Context, isMoved: boolean, depth: number): boolean {
     const { session } = this;
     const href = hrefOf(session, element);
     const target = href?.startsWith('#') ? session.tree.byId.get(href.slice(1)) : undefined;
     if (!target) return true;
+    const specified = session.cascade.specifiedOn(element, context.copies);
     const at = (name: 'x' | 'y'): number =>
-      lengthOf(session, element, specified, name, name, context.style, context) ?? 0;
+      isMoved ? (lengthOf(session, element, specified, name, name, context.style, context) ?? 0) : 0;
     const map = multiply(context.map, translation(at('x'), at('y')));
     const size = { width: specified.get('width') ?? null, height: specified.get('height') ?? null };
     const copies = { target, use: element, depth: (context.copies?.depth ?? 0) + 1, outer: context.copies };
     return this.addChild(target, { ...context, map, copies }, size, depth);
   }
 
-  private include(sink: OutlineSink): boolean {
+  private include(sink: OutlineSink, [reachX, reachY]: readonly [number, number]): boolean {
     const { bounds, box } = this;
     const segments = sink.finish();
     for (let i = 0; i < segments.count; i++) {
       segmentBox(segments, i, box);
-      bounds[0] = Math.min(bounds[0], box[0]);
-      bounds[1] = Math.min(bounds[1], box[1]);
-      bounds[2] = Math.max(bounds[2], box[2]);
-      bounds[3] = Math.max(bounds[3], box[3]);
+      bounds[0] = Math.min(bounds[0], box[0] - reachX);
+      bounds[1] = Math.min(bounds[1], box[1] - reachY);
+      bounds[2] = Math.max(bounds[2], box[2] + reachX);
+      bounds[3] = Math.max(bounds[3], box[3] + reachY);
     }
     return !sink.overflows;
   }
+}
+
+const NO_REACH = [0, 0] as const;
+
+/** How far a line reaches across and down: half its width is a circle, and that an ellipse when mapped. */
+function reachOf({ stroke, strokeWidth }: Style, [a, b, c, d]: Affine): readonly [number, number] {
+  if (stroke.kind === 'none') return NO_REACH;
+  const half = strokeWidth / 2;
+  return [half * Math.sqrt(a * a + c * c), half * Math.sqrt(b * b + d * d)];
 }

@@ -34,12 +34,14 @@ export const READING_FINDINGS = {
   'undeclared-prefix': 'warning', // prefix
   'style-rule-not-read': 'warning', // rule
   'style-sheet-not-read': 'warning', // type
+  'style-value-not-read': 'warning', // property, found
   'style-limit': 'warning', // limit: comparisons, after which no rule was applied any more
   'path-error': 'warning', // offset: characters from the start of the data; found
   'points-error': 'warning', // offset, found
   'points-odd': 'warning',
   'transform-error': 'warning', // transform
   'transform-origin-ignored': 'warning', // origin
+  'motion-path-not-applied': 'warning', // motion
   'length-error': 'warning', // attribute, found
   'viewbox-error': 'warning', // viewBox
   'viewbox-empty': 'warning', // viewBox

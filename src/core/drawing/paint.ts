@@ -40,8 +40,9 @@ export function readPaint(
     const reference = url[1] ?? url[2] ?? url[3] ?? '';
     const fallback = t.slice(url[0].length);
     const id = reference.startsWith('#') ? reference.slice(1) : null;
-    if (id !== null && isServer(id)) return { paint: { kind: 'server', id }, exact: true };
-    return fallback === '' ? { paint: NONE, exact: true } : readPaint(fallback, isServer);
+    const otherwise = fallback === '' ? { paint: NONE, exact: true } : readPaint(fallback, isServer);
+    if (id !== null && isServer(id) && otherwise) return { paint: { kind: 'server', id }, exact: true };
+    return otherwise;
   }
   const colour = readColour(t.replace(/\s+(?:icc-color|device-\w+)\([^)]*\)\s*$/i, ''));
   if (colour) {

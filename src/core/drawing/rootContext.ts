@@ -1,10 +1,11 @@
-import { type Affine, IDENTITY, multiply, scaling, translation } from '../geometry/affine.js';
-import { INITIAL_STYLE, readOpacity } from './computedStyle.js';
+import { type Affine, IDENTITY, multiply, scaling } from '../geometry/affine.js';
+import type { Specified } from './cascade.js';
+import { INITIAL_STYLE, readOpacity, type Style } from './computedStyle.js';
 import { NO_LAYER } from './drawing.js';
 import { type PageSize, pageSize } from './pageSize.js';
-import { type Context, type Session, shown } from './session.js';
+import type { Context, Session } from './session.js';
 import { styleOf } from './styleReading.js';
-import { readTransformList } from './transformList.js';
+import { rootTransformOf } from './transformOf.js';
 import { aspectOf, contextInside, viewBoxOf } from './viewport.js';
 
 export const CSS_PX_PER_INCH = 96;
@@ -42,11 +43,11 @@ export function rootContext(session: Session): Root {
   };
   const style = styleOf(session, root, specified, outside);
   const styled: Context = { ...outside, style, rootFontSize: style.fontSize };
-  if (specified.get('display')?.trim() === 'none' || readOpacity(specified.get('opacity') ?? '') === 0) {
+  if (specified.get('display') === 'none' || readOpacity(specified.get('opacity') ?? '') === 0) {
     session.report('hidden', root);
     return { page, inside: null };
   }
-  const map = rootTransform(session, specified.get('transform'), page, unitMm);
+  const map = rootTransform(session, specified, style, outside);
   const aspect = aspectOf(session, root);
   if (!viewBox) return { page, inside: { ...styled, map: multiply(map, scaling(unitMm, unitMm)) } };
   if (viewBox.width === 0 || viewBox.height === 0) return { page, inside: null };
@@ -78,16 +79,13 @@ function rootFontSize(
 }
 
 /**
- * A transform on the outermost svg acts on its box as on any CSS box, about the middle of it (CSS
+ * A transform on the outermost svg acts on its box as on any CSS box, by default about the middle of it (CSS
  * Transforms Module Level 1, "transform-origin"); in mm.
  */
-function rootTransform(session: Session, text: string | undefined, page: PageSize, unitMm: number): Affine {
-  if (text === undefined) return IDENTITY;
-  const m = readTransformList(text);
-  if (!m) session.report('transform-error', session.tree.root, { transform: shown(text) });
-  if (!m || m === IDENTITY) return IDENTITY;
-  const inMm: Affine = [m[0], m[1], m[2], m[3], m[4] * unitMm, m[5] * unitMm];
-  const x = page.widthMm / 2;
-  const y = page.heightMm / 2;
-  return multiply(multiply(translation(x, y), inMm), translation(-x, -y));
+function rootTransform(session: Session, specified: Specified, style: Style, outside: Context): Affine {
+  const unitMm = 25.4 / outside.pxPerInch;
+  const inUnits = rootTransformOf(session, specified, style, outside);
+  if (!inUnits) return IDENTITY;
+  const [a, b, c, d, e, f] = inUnits;
+  return [a, b, c, d, e * unitMm, f * unitMm];
 }

@@ -2,97 +2,71 @@ import { type Affine, IDENTITY, multiply, scaling, translation } from '../geomet
 import { sinCosDegrees } from '../geometry/trig.js';
 import { TextCursor } from './textCursor.js';
 
-const FUNCTION = /\s*([A-Za-z]+)\s*\(([^()]*)\)/y;
+/** Names in this grammar are as written, unlike those of CSS. */
+const NAMES = ['matrix', 'translate', 'scale', 'rotate', 'skewX', 'skewY'] as const;
 
 /**
- * The map of a transform list (SVG 2, "The transform property"; CSS Transforms Module Level 1, §8):
- * the last function acts first. The functions of the attribute, and those of CSS in two dimensions;
- * angles without a unit are degrees, lengths without one user units.
+ * The map of a `transform` attribute (CSS Transforms Module Level 1, §8.1, "SVG transform attribute"): the
+ * last function acts first. Angles are in degrees, lengths in user units, both without a unit; the commas
+ * between functions may be left out. The property of CSS has a grammar of its own: `cssTransform`.
  *
- * null where the list is wrong anywhere or a number is not finite.
+ * null where the list is wrong anywhere or a number is not finite. O(text).
  */
 export function readTransformList(text: string): Affine | null {
-  if (/^\s*(none\s*)?$/i.test(text)) return IDENTITY;
+  const cursor = new TextCursor().reset(text);
   let result = IDENTITY;
-  let at = 0;
-  while (at < text.length) {
-    FUNCTION.lastIndex = at;
-    const match = FUNCTION.exec(text);
-    if (!match) return null;
-    const map = mapOf(match[1].toLowerCase(), match[2]);
+  cursor.skipSpace();
+  if (text.startsWith('none', cursor.at) && text.slice(cursor.at).trim() === 'none') return IDENTITY;
+  for (let comma = false; !cursor.atEnd() || comma; comma = cursor.skipCommaSpace()) {
+    const map = readFunction(cursor, text);
     if (!map) return null;
     result = multiply(result, map);
-    at = FUNCTION.lastIndex;
-    const separator = /\s*,?\s*/y;
-    separator.lastIndex = at;
-    separator.test(text);
-    const comma = text.slice(at, separator.lastIndex).includes(',');
-    at = separator.lastIndex;
-    if (comma && at >= text.length) return null;
   }
   return result.every(Number.isFinite) ? result : null;
 }
 
-function mapOf(name: string, list: string): Affine | null {
-  const n = argumentsOf(list);
-  if (!n) return null;
-  const [a, b, c, d, e, f] = n as [number, number, number, number, number, number];
+function readFunction(cursor: TextCursor, text: string): Affine | null {
+  const name = NAMES.find((known) => text.startsWith(known, cursor.at));
+  if (name === undefined) return null;
+  cursor.at += name.length;
+  cursor.skipSpace();
+  if (text[cursor.at] !== '(') return null;
+  cursor.at++;
+  const numbers = readNumbers(cursor, text);
+  return numbers && mapOf(name, numbers);
+}
+
+/** What stands in the brackets, the closing one passed; null where it is more or less than numbers. */
+function readNumbers(cursor: TextCursor, text: string): number[] | null {
+  const numbers: number[] = [];
+  cursor.skipSpace();
+  for (let comma = false; ; comma = cursor.skipCommaSpace()) {
+    if (text[cursor.at] === ')') {
+      cursor.at++;
+      return comma ? null : numbers;
+    }
+    if (numbers.length === 6 || !cursor.number() || !Number.isFinite(cursor.value)) return null;
+    numbers.push(cursor.value);
+  }
+}
+
+function mapOf(name: (typeof NAMES)[number], n: readonly number[]): Affine | null {
+  const [a, b, c, d, e, f] = n;
   const count = n.length;
   switch (name) {
     case 'matrix':
       return count === 6 ? [a, b, c, d, e, f] : null;
     case 'translate':
       return count === 1 ? translation(a, 0) : count === 2 ? translation(a, b) : null;
-    case 'translatex':
-      return count === 1 ? translation(a, 0) : null;
-    case 'translatey':
-      return count === 1 ? translation(0, a) : null;
     case 'scale':
       return count === 1 ? scaling(a, a) : count === 2 ? scaling(a, b) : null;
-    case 'scalex':
-      return count === 1 ? scaling(a, 1) : null;
-    case 'scaley':
-      return count === 1 ? scaling(1, a) : null;
     case 'rotate':
       if (count === 1) return rotate(a);
       return count === 3 ? multiply(multiply(translation(b, c), rotate(a)), translation(-b, -c)) : null;
-    case 'skew':
-      return count === 1
-        ? [1, 0, tangent(a), 1, 0, 0]
-        : count === 2
-          ? [1, tangent(b), tangent(a), 1, 0, 0]
-          : null;
-    case 'skewx':
+    case 'skewX':
       return count === 1 ? [1, 0, tangent(a), 1, 0, 0] : null;
-    case 'skewy':
+    case 'skewY':
       return count === 1 ? [1, tangent(a), 0, 1, 0, 0] : null;
-    default:
-      return null;
-  }
-}
-
-const UNIT_FACTORS: ReadonlyMap<string, number> = new Map([
-  ['', 1],
-  ['px', 1],
-  ['deg', 1],
-  ['grad', 0.9],
-  ['turn', 360],
-  ['rad', 180 / Math.PI],
-]);
-
-function argumentsOf(list: string): number[] | null {
-  const cursor = new TextCursor().reset(list);
-  const numbers: number[] = [];
-  cursor.skipSpace();
-  for (let comma = false; ; comma = cursor.skipCommaSpace()) {
-    if (cursor.atEnd()) return comma ? null : numbers;
-    if (!cursor.number() || numbers.length === 6) return null;
-    const unit = /[a-z]*/iy;
-    unit.lastIndex = cursor.at;
-    const factor = UNIT_FACTORS.get(unit.exec(list)![0].toLowerCase());
-    if (factor === undefined || !Number.isFinite(cursor.value)) return null;
-    cursor.at = unit.lastIndex;
-    numbers.push(cursor.value * factor);
   }
 }
 

@@ -1,4 +1,4 @@
-/** Shapes of the two parsing packages, which ship no types of their own. */
+/** Shapes of what is used of the parsing packages, which ship no types of their own for it. */
 
 declare module 'svg-parser' {
   export interface ParsedText {
@@ -31,4 +31,22 @@ declare module 'svg-path-parser' {
   }
   function parsePath(data: string): ParsedCommand[];
   export default parsePath;
+}
+
+declare module 'css-tree/selector-parser' {
+  export interface SelectorNode {
+    readonly type: string;
+    /** Text, or for an attribute selector the node of its name. */
+    readonly name: string | SelectorNode;
+    readonly children: { toArray(): SelectorNode[] } | null;
+    readonly matcher: string | null;
+    readonly value: SelectorNode | string | null;
+    readonly flags: string | null;
+    readonly nth: SelectorNode;
+    readonly selector: SelectorNode | null;
+    readonly a: string | null;
+    readonly b: string | null;
+  }
+  function parse(text: string, options: { context: 'selector' | 'selectorList' }): SelectorNode;
+  export default parse;
 }

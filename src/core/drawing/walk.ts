@@ -1,15 +1,18 @@
-import { type Affine, IDENTITY, multiply, translation } from '../geometry/affine.js';
+import { type Affine, multiply, translation } from '../geometry/affine.js';
+import type { Region } from '../geometry/region.js';
+import type { Specified } from './cascade.js';
 import { clipWithin } from './clipping.js';
 import { readOpacity, type Style } from './computedStyle.js';
 import { firstThatHolds, holds } from './conditions.js';
 import { CopyLimits } from './copyLimits.js';
 import { drawElement, lengthOf, SHAPES } from './drawElement.js';
+import { boundsOf } from './elementBounds.js';
 import type { LimitName } from './readingLimits.js';
 import { hrefOf, isLoop, labelOf } from './references.js';
 import { type Context, type Session, shown } from './session.js';
 import { styleOf } from './styleReading.js';
 import { type SvgElement, textOf } from './svgTree.js';
-import { readTransformList } from './transformList.js';
+import { transformOf } from './transformOf.js';
 import { enterViewport, type UseSize } from './viewport.js';
 
 /** Never drawn where they stand; some of them are used by others, from there. */
@@ -39,14 +42,18 @@ interface Frame {
   next: number;
 }
 
-type Specified = ReadonlyMap<string, string>;
-
 /**
  * Draws everything below the root in document order, `use` copies in their place. The walk keeps its
  * own stack, so neither depth nor copies in copies can overflow the engine's.
  */
 export function walk(session: Session, root: SvgElement, context: Context): void {
   new Walk(session).run(root, context);
+}
+
+/** A shape is nothing but its box, which `contents` takes away (CSS Display Module Level 3, appendix B). */
+function isUndisplayed(specified: Specified, name: string): boolean {
+  const display = specified.get('display');
+  return (display === 'none' && name !== 'symbol') || (display === 'contents' && SHAPES.has(name));
 }
 
 class Walk {
@@ -84,19 +91,21 @@ class Walk {
     }
     const isLayer = context.atTop && name === 'g';
     const layer = isLayer ? this.addLayer(element) : context.layer;
-    let specified = session.cascade.specifiedOn(element, context.copies?.target);
+    const specified = session.cascade.specifiedOn(element, context.copies);
     if (!holds(specified)) {
       this.reportShapes('condition-not-met', element);
       return;
     }
-    if (specified.get('display')?.trim() === 'none' && name !== 'symbol') {
+    if (isUndisplayed(specified, name)) {
       this.reportShapes('hidden', element);
       return;
     }
     const style = styleOf(session, element, specified, context);
-    const map = this.mapOf(element, specified, context);
-    const clip = clipWithin(session, element, specified.get('clip-path'), map, style, context);
-    if (clip !== context.clip) specified = session.cascade.specifiedOn(element, context.copies?.target);
+    const map = this.mapOf(element, specified, style, context);
+    const clipPath = specified.get('clip-path');
+    const within = (inside: Context): Region | null => clipWithin(session, element, clipPath, inside);
+    const hasOwnSpace = name === 'use' || name === 'svg' || name === 'symbol';
+    const clip = clipPath === undefined || hasOwnSpace ? context.clip : within({ ...context, map, style });
     this.reportEffects(element, specified);
     if (SHAPES.has(name)) {
       const before = session.sink.segmentsSeen;
@@ -124,35 +133,29 @@ class Walk {
       case 'svg':
       case 'symbol': {
         const entered = enterViewport(session, element, specified, inner, frame.useSize);
-        if (entered) this.enter(element.children, entered);
+        if (!entered) break;
+        this.enter(element.children, { ...entered, clip: within(entered) });
         break;
       }
       case 'switch':
         this.enterSwitch(element, inner);
         break;
       case 'use':
-        this.enterUse(element, specified, inner);
+        this.enterUse(element, specified, inner, within);
         break;
       default:
         this.reportNotDrawn(element, style);
     }
   }
 
-  private mapOf(element: SvgElement, specified: Specified, context: Context): Affine {
-    const text = specified.get('transform');
-    if (text === undefined) return context.map;
-    const map = readTransformList(text);
-    if (!map) this.session.report('transform-error', element, { transform: shown(text) });
-    const origin = specified.get('transform-origin');
-    if (origin !== undefined && map !== IDENTITY) {
-      this.session.report('transform-origin-ignored', element, { origin: shown(origin) });
-    }
-    return map ? multiply(context.map, map) : context.map;
+  private mapOf(element: SvgElement, specified: Specified, style: Style, context: Context): Affine {
+    const own = transformOf(this.session, element, specified, style, context, boundsOf);
+    return own ? multiply(context.map, own) : context.map;
   }
 
   private enterSwitch(element: SvgElement, context: Context): void {
     const { chosen, passedOver } = firstThatHolds(element, (child) =>
-      this.session.cascade.specifiedOn(child, context.copies?.target),
+      this.session.cascade.specifiedOn(child, context.copies),
     );
     for (const foreign of passedOver) this.session.report('foreign-object-not-drawn', foreign);
     // A title or defs before them all is chosen too, and nothing drawn: so says SVG 2, and browsers do.
@@ -160,7 +163,12 @@ class Walk {
     else if (element.children.length > 0) this.session.report('switch-without-match', element);
   }
 
-  private enterUse(element: SvgElement, specified: Specified, context: Context): void {
+  private enterUse(
+    element: SvgElement,
+    specified: Specified,
+    context: Context,
+    clipWithin: (inside: Context) => Region | null,
+  ): void {
     const { session } = this;
     const href = hrefOf(session, element);
     if (href === null || href === '' || href === '#') {
@@ -181,7 +189,8 @@ class Walk {
       const map = multiply(context.map, translation(length('x', 'x'), length('y', 'y')));
       const copies = { target, use: element, depth: (context.copies?.depth ?? 0) + 1, outer: context.copies };
       const size = { width: specified.get('width') ?? null, height: specified.get('height') ?? null };
-      this.enter([target], { ...context, map, copies }, size);
+      const clip = clipWithin({ ...context, map });
+      this.enter([target], { ...context, map, copies, clip }, size);
     }
   }
 

@@ -69,6 +69,9 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'use-loop': (v) => `<use> refers to itself through ${quoted(v.href)}: refused${times(v)}`,
   'use-limit': (v) => `copies by <use> go ${pastLimit(v)}: the rest of them is not drawn`,
   'text-cut': (v) => `the text of <${v.element}> was cut where it went ${pastLimit(v)}`,
+  'style-value-not-read': (v) =>
+    `style not understood, and left aside: ${v.property}: ${quoted(v.found)}${times(v)}`,
+  'motion-path-not-applied': (v) => `a path of motion is not applied: ${quoted(v.motion)}${times(v)}`,
   'style-limit': (v) => `style rules beyond ${v.limit} steps of matching were left aside`,
   'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
   'shape-error': (v) => `a shape is left out: ${v.attribute}=${quoted(v.found)}${times(v)}`,

@@ -96,13 +96,20 @@ describe('style sheets', () => {
     expect(coloursOf(`<style>.k .a{stroke:red}</style>${defs}${use}`)).toEqual(['#ff0000']);
   });
 
-  test('rules that are not read are counted, the others hold', () => {
+  test('rules that are not read are counted with their places, the others hold', () => {
     const drawing = readBody(
-      `<style>g + path{stroke:blue} a:not(b),.c{stroke:red} @media (width &gt; 9px){.c{stroke:blue}} [q]{font-size:3px}</style>
-       <path ${LINE} class="c"/>`,
+      `<style>\n@media (width &gt; 9px){.c{stroke:blue}}\n.c{stroke:red} .c, a:nope{stroke:blue}
+       @import "x.css"; .c{stroke:foo(1)}</style><path ${LINE} class="c"/>`,
     );
     expect(strokeColours(drawing)).toEqual(['#ff0000']);
-    expect(findingOf(drawing, 'style-rule-not-read').values).toEqual({ rule: 'g + path', count: 4 });
+    const { values, places } = findingOf(drawing, 'style-rule-not-read');
+    expect(values).toEqual({ rule: '@media (width > 9px)', count: 2 });
+    expect(places?.map(({ line, column }) => [line, column])).toEqual([
+      [2, 1],
+      [3, 16],
+    ]);
+    expect(findingOf(drawing, 'style-sheet-not-read').values).toEqual({ type: '@import "x.css"', count: 1 });
+    expect(findingOf(drawing, 'colour-not-read').values).toEqual({ found: 'foo(1)', count: 1 });
   });
 
   test('a sheet for other media does not hold', () => {
