@@ -7,15 +7,8 @@ async ({ original, ours, widthMm, heightMm, pxPerMm, strokesOnly, keepPicture })
   const INKED = 64;
   const FOUND = 24;
   const COLOUR = 64;
-  const NEAR = [
-    ...[-1, 0, 1].flatMap((dy) => [-1, 0, 1].map((dx) => [dx, dy])),
-    ...[
-      [2, 0],
-      [-2, 0],
-      [0, 2],
-      [0, -2],
-    ],
-  ];
+  /** Steps to the px within 2 px, right and down. */
+  const NEAR = [0, 0, 0, -1, 0, 1, -1, 0, 1, 0, -1, -1, -1, 1, 1, -1, 1, 1, 0, -2, 0, 2, -2, 0, 2, 0];
   /** Places are told by squares of that side. */
   const SQUARE = 24;
 
@@ -80,7 +73,7 @@ async ({ original, ours, widthMm, heightMm, pxPerMm, strokesOnly, keepPicture })
         const p = 4 * (y * widthPx + x);
         if (from[p + 3] < INKED) continue;
         ink++;
-        if (NEAR.some(([dx, dy]) => isLike(from, p, other, x + dx, y + dy))) continue;
+        if (isNear(from, p, other, x, y)) continue;
         count++;
         const square = `${Math.floor(x / SQUARE)} ${Math.floor(y / SQUARE)}`;
         squares.set(square, (squares.get(square) ?? 0) + 1);
@@ -90,6 +83,13 @@ async ({ original, ours, widthMm, heightMm, pxPerMm, strokesOnly, keepPicture })
     const middle = (n) => ((Number(n) + 0.5) * SQUARE) / pxPerMm;
     const at = most ? most[0].split(' ').map((n) => middle(n).toFixed(1)) : [];
     return { ink, count, at: at.join(',') };
+  }
+
+  function isNear(from, p, other, x, y) {
+    for (let k = 0; k < NEAR.length; k += 2) {
+      if (isLike(from, p, other, x + NEAR[k], y + NEAR[k + 1])) return true;
+    }
+    return false;
   }
 
   function isLike(from, p, other, x, y) {

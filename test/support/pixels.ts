@@ -10,8 +10,8 @@ import { flattenSegment } from '../../src/core/geometry/flatten.ts';
  * size, and what is inked in one picture is looked for in the other, within a few px.
  */
 
-/** Across the longer side; a line of 0.3 mm on a page of 60 mm is 5 px wide. */
-const LONGER_SIDE_PX = 1000;
+/** Across the longer side; a line of 0.3 mm on a page of 60 mm is 4 px wide. */
+const LONGER_SIDE_PX = 800;
 const ACCURACY_MM = 0.002;
 const IN_PAGE = readFileSync(new URL('./picturesInPage.js', import.meta.url), 'utf8');
 
@@ -54,11 +54,10 @@ export async function comparePictures(
   const context = await browser.newContext({ offline: true });
   try {
     const page = await context.newPage();
-    const differences: PictureDifference[] = [];
-    for (const { name, text, drawing, caps, strokesOnly } of jobs) {
+    const tasks = jobs.map(({ text, drawing, caps, strokesOnly }) => {
       const { widthMm, heightMm } = drawing;
       const pxPerMm = LONGER_SIDE_PX / Math.max(widthMm, heightMm);
-      const job = {
+      return {
         original: text,
         ours: pictureOf(drawing, caps ?? 'butt', pxPerMm),
         widthMm,
@@ -67,19 +66,28 @@ export async function comparePictures(
         strokesOnly: strokesOnly ?? false,
         keepPicture: folder !== undefined,
       };
-      const call = `(${IN_PAGE.trimEnd().replace(/;$/, '')})(${JSON.stringify(job)})`;
-      const { picture, ...difference } = await page.evaluate<PictureDifference & { picture: string }>(call);
-      if (folder !== undefined) {
-        mkdirSync(folder, { recursive: true });
-        const file = join(folder, `${name.replace(/\W+/g, '-')}.png`);
-        writeFileSync(file, Buffer.from(picture.slice(picture.indexOf(',') + 1), 'base64'));
-      }
-      differences.push(difference);
-    }
-    return differences;
+    });
+    const found = await page.evaluate<(PictureDifference & { picture: string })[]>(
+      `(async (tasks) => {
+        const compare = ${IN_PAGE.trimEnd().replace(/;$/, '')};
+        const found = [];
+        for (const task of tasks) found.push(await compare(task));
+        return found;
+      })(${JSON.stringify(tasks)})`,
+    );
+    return found.map(({ picture, ...difference }, i) => {
+      if (folder !== undefined) keepPicture(folder, jobs[i].name, picture);
+      return difference;
+    });
   } finally {
     await context.close();
   }
+}
+
+function keepPicture(folder: string, name: string, picture: string): void {
+  mkdirSync(folder, { recursive: true });
+  const bytes = Buffer.from(picture.slice(picture.indexOf(',') + 1), 'base64');
+  writeFileSync(join(folder, `${name.replace(/\W+/g, '-')}.png`), bytes);
 }
 
 /** What is wrong with a picture beyond `tolerance`, a share of the ink; null where nothing is. */
