@@ -178,6 +178,9 @@ export function lengthOf(
   if (text === undefined || text.trim() === 'auto') return null;
   const length = readLength(text);
   if (length) {
+    if (length.unit === 'ex' || length.unit === 'ch') {
+      session.report('font-unit-assumed', element, { attribute: name, found: shown(text) });
+    }
     const value = toUserUnits(length, axis, context, style.fontSize);
     // A sum that comes out negative where it may not be counts as 0 (CSS Values and Units 4, §10.5).
     return length.unit === 'calc' && NOT_NEGATIVE.has(name) ? Math.max(0, value) : value;

@@ -49,6 +49,7 @@ export const READING_FINDINGS = {
   'colour-not-read': 'warning', // found
   'size-guessed': 'warning', // widthMm, heightMm, basis: viewBox | extent | default
   'user-unit-assumed': 'warning', // pxPerInch
+  'font-unit-assumed': 'warning', // attribute, found
   'coordinate-overflow': 'warning', // count: strokes left out
   'use-missing': 'warning', // href
   'use-external': 'warning', // href

@@ -63,6 +63,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
     `the drawing does not say how large it is: taken as ${number(v.widthMm)} x ${number(v.heightMm)} mm; check the size before drawing`,
   'user-unit-assumed': (v) =>
     `the page has a physical size and no viewBox, so lengths without a unit were read at ${v.pxPerInch} per inch; some older editors meant 90: check a known length, and say --px-per-inch 90 if it is off by 6.7 %`,
+  'font-unit-assumed': (v) =>
+    `${v.attribute}=${quoted(v.found)} is measured by a font's letters, here taken to be half as large as the font${times(v)}`,
   'coordinate-overflow': (v) => `${some(v.count, 'stroke')} left out: coordinates beyond any number`,
   'use-missing': (v) => `<use> refers to ${quoted(v.href)}, which is not there${times(v)}`,
   'use-external': (v) => `<use> refers to another file, ${quoted(v.href)}: not fetched${times(v)}`,
