@@ -36,6 +36,8 @@ interface Applied {
   readonly element: SvgElement;
   readonly map: Affine;
   readonly context: Context;
+  /** Where it is not that of what it holds. */
+  readonly box: Bounds | null;
 }
 
 interface Known {
@@ -58,12 +60,18 @@ export class ClipRegions {
 
   /**
    * What the `clip-path` on an element leaves of it; null where it clips nothing, `unread` where it
-   * cannot be evaluated. `context` is that of what stands inside the element.
+   * cannot be evaluated. `context` is that of what stands inside the element; `box`, its box in that user
+   * space, is worked out where it is null.
    */
-  regionFor(element: SvgElement, value: string, context: Context): Region | null | 'unread' {
+  regionFor(
+    element: SvgElement,
+    value: string,
+    context: Context,
+    box: Bounds | null = null,
+  ): Region | null | 'unread' {
     const { map } = context;
     try {
-      return this.session.cascade.apart(() => this.valueRegion(value, { element, map, context }));
+      return this.session.cascade.apart(() => this.valueRegion(value, { element, map, context, box }));
     } catch (error) {
       if (error instanceof NotRead) return 'unread';
       throw error;
@@ -186,7 +194,9 @@ export class ClipRegions {
     }
     if (found.length === 0) return;
     const clip =
-      own === '' ? null : this.valueRegion(own, { element: child, map: inside.map, context: inside });
+      own === ''
+        ? null
+        : this.valueRegion(own, { element: child, map: inside.map, context: inside, box: null });
     parts.push(bothOf(found[0], clip) ?? found[0]);
   }
 
@@ -225,8 +235,9 @@ export class ClipRegions {
     if (work.left < 0) throw new NotRead();
   }
 
-  private boundsOf({ element, context }: Applied, withStrokes = false): Bounds {
+  private boundsOf({ element, context, box }: Applied, withStrokes = false): Bounds {
     this.asksForBox = true;
+    if (box) return box;
     this.spend(CLIP_WORK);
     const bounds = boundsInside(this.session, element, context, withStrokes);
     if (bounds === 'unknown') throw new NotRead();

@@ -2,31 +2,29 @@ import { type Affine, applyX, applyY } from '../geometry/affine.js';
 import { Outline } from '../geometry/outline.js';
 import { bothOf, type Region } from '../geometry/region.js';
 import { SegmentBuilder } from '../geometry/segments.js';
-import type { Style } from './computedStyle.js';
+import type { Bounds } from './elementBounds.js';
 import { type Context, type Session, shown } from './session.js';
 import type { Clipping } from './strokeClipper.js';
 import type { SvgElement } from './svgTree.js';
 import type { ViewBox } from './viewBox.js';
 
 /**
- * What is left of an element within the clip around it and its own `clip-path`. `map` and `style` are the
- * element's.
+ * What is left of an element within the clip around it and its own `clip-path`, whose value is given.
+ * `inside` is where its content stands: past the x and y of a `use` and the viewBox of a viewport, which is
+ * user space as browsers have it. `box` is its box there, where it is not that of what it holds.
  */
 export function clipWithin(
   session: Session,
   element: SvgElement,
   value: string | undefined,
-  map: Affine,
-  style: Style,
-  context: Context,
+  inside: Context,
+  box: Bounds | null = null,
 ): Region | null {
-  if (value === undefined || session.rules.clips === 'ignore') return context.clip;
-  const own = session.clips.regionFor(element, value, map, { ...context, style });
-  if (own === 'unread') {
-    session.report('clip-not-applied', element, { clip: shown(value) });
-    return context.clip;
-  }
-  return bothOf(context.clip, own);
+  if (value === undefined || session.rules.clips === 'ignore') return inside.clip;
+  const own = session.clips.regionFor(element, value, inside, box);
+  if (own !== 'unread') return bothOf(inside.clip, own);
+  session.report('clip-not-applied', element, { clip: shown(value) });
+  return inside.clip;
 }
 
 /** The clip inside a viewport: its own rectangle too, unless what overflows it is shown. */

@@ -1,7 +1,9 @@
 import { type Affine, IDENTITY, multiply, scaling } from '../geometry/affine.js';
 import type { Specified } from './cascade.js';
+import { clipWithin } from './clipping.js';
 import { INITIAL_STYLE, readOpacity, type Style } from './computedStyle.js';
 import { NO_LAYER } from './drawing.js';
+import type { Bounds } from './elementBounds.js';
 import { type PageSize, pageSize } from './pageSize.js';
 import type { Context, Session } from './session.js';
 import { styleOf } from './styleReading.js';
@@ -49,11 +51,16 @@ export function rootContext(session: Session): Root {
   }
   const map = rootTransform(session, specified, style, outside);
   const aspect = aspectOf(session, root);
-  if (!viewBox) return { page, inside: { ...styled, map: multiply(map, scaling(unitMm, unitMm)) } };
+  // The outermost svg is a CSS box to its own clip path: in px, whatever the viewBox.
+  const inPx = { ...styled, map: multiply(map, scaling(unitMm, unitMm)) };
+  const { viewportWidth, viewportHeight } = outside;
+  const box: Bounds = [0, 0, viewportWidth, viewportHeight];
+  const clip = clipWithin(session, root, specified.get('clip-path'), inPx, box);
+  if (!viewBox) return { page, inside: { ...inPx, clip } };
   if (viewBox.width === 0 || viewBox.height === 0) return { page, inside: null };
   // The viewport is in mm here, so that a viewBox in mm comes out with a scale of exactly 1.
   const rectangle = { x: 0, y: 0, width: page.widthMm, height: page.heightMm };
-  return { page, inside: contextInside(styled, map, rectangle, viewBox, aspect) };
+  return { page, inside: contextInside({ ...styled, clip }, map, rectangle, viewBox, aspect) };
 }
 
 /** Asked only where the size is in units of the font: styles need the page's size, and it theirs. */

@@ -134,7 +134,9 @@ class Walk {
       case 'symbol': {
         const entered = enterViewport(session, element, specified, inner, frame.useSize);
         if (!entered) break;
-        this.enter(element.children, { ...entered, clip: within(entered) });
+        // A viewport's own clip path takes the place of its rectangle in Chromium.
+        const own = clipPath === undefined ? context.clip : within({ ...entered, clip: context.clip });
+        this.enter(element.children, own === context.clip ? entered : { ...entered, clip: own });
         break;
       }
       case 'switch':
