@@ -39,7 +39,7 @@ const d = DEFAULT_SETTINGS;
 
 export function addNetworkOptions(command: Command): Command {
   return addLineOptions(command).addOption(
-    choice('--junctions <where>', 'where lines join', ['ends', 'touching'], d.junctions),
+    choice('--junctions <where>', 'where lines join', ['ends', 'touching', 'crossing'], d.junctions),
   );
 }
 

@@ -33,6 +33,15 @@ export interface Ordered {
   readonly tours: readonly Tour[];
   readonly before: { readonly program: Program; readonly measure: Measure };
   readonly after: { readonly program: Program; readonly measure: Measure };
+  /** With junctions at crossings: what both ways came to. The better one was kept. */
+  readonly crossings: Crossings | null;
+}
+
+export interface Crossings {
+  readonly count: number;
+  readonly without: Measure;
+  readonly with: Measure;
+  readonly kept: boolean;
 }
 
 /**
@@ -47,6 +56,17 @@ export function orderDrawing(
 ): Ordered {
   const drawing = choosePens(whole, settings.pens, settings);
   if (drawing.strokes.count === 0) throw new RangeError('the drawing has no stroke');
+  if (settings.junctions !== 'crossing') return orderOnce(drawing, settings, profile, hooks);
+  // Junctions at crossings cost vertices, and with them search: they have to pay.
+  const without = orderOnce(drawing, { ...settings, junctions: 'touching' }, profile, hooks);
+  const crossed = orderOnce(drawing, settings, profile, hooks);
+  const count = crossed.networks.reduce((sum, network) => sum + network.crossings, 0);
+  const kept = isWorse(without.after.measure, crossed.after.measure, settings);
+  const crossings = { count, without: without.after.measure, with: crossed.after.measure, kept };
+  return { ...(kept ? crossed : without), settings, crossings };
+}
+
+function orderOnce(drawing: Drawing, settings: Settings, profile: MachineProfile, hooks: Hooks): Ordered {
   const plan = planPens(drawing, settings.pens, settings);
   const strokesOfPen = strokesOfPens(plan);
   const [homeX, homeY] = settings.homeMm ?? [0, drawing.heightMm];
@@ -83,7 +103,7 @@ export function orderDrawing(
   const all = networks.every(drawsAll);
   const after =
     all && isWorse(measured, before.measure, settings) ? before : { program: found, measure: measured };
-  return { drawing, settings, profile, plan, networks, tours, before, after };
+  return { drawing, settings, profile, plan, networks, tours, before, after, crossings: null };
 }
 
 export interface Written {

@@ -2,9 +2,10 @@ import type { AuditResult } from './audit/audit.js';
 import type { Finding } from './finding.js';
 import { segmentLength } from './geometry/length.js';
 import { programBounds } from './measure/bounds.js';
+import { MOST_CROSSINGS } from './network/crossings.js';
 import { fewestRuns } from './network/fewestRuns.js';
 import { overhang } from './overhang.js';
-import type { Ordered } from './pipeline.js';
+import type { Crossings, Ordered } from './pipeline.js';
 import { makeReport, type Report } from './report/report.js';
 import { ROUNDING } from './tour/lowerBound.js';
 import { wideStrokes } from './wideStrokes.js';
@@ -74,7 +75,7 @@ function boundOf({ settings, networks, tours, before, after }: Ordered): Report[
 }
 
 /** What the network and the program have to say besides the figures. */
-function findingsOf({ drawing, settings, networks, before, after }: Ordered): Finding[] {
+function findingsOf({ drawing, settings, networks, before, after, crossings }: Ordered): Finding[] {
   const findings: Finding[] = [];
   const note = (code: string, values: Finding['values']) =>
     findings.push({ code, severity: 'note', place: null, values });
@@ -91,6 +92,16 @@ function findingsOf({ drawing, settings, networks, before, after }: Ordered): Fi
   const { drawn } = programBounds(after.program);
   if (drawn) findings.push(...overhang(drawn, drawing));
   findings.push(...wideStrokes(drawing, settings.penWidthMm));
+  if (crossings) note(...crossingNote(crossings));
   if (after === before) note('order-kept', {});
   return findings;
+}
+
+/** What junctions at crossings saved. */
+function crossingNote(crossings: Crossings): [string, Finding['values']] {
+  const { count, without, kept } = crossings;
+  if (count > MOST_CROSSINGS) return ['too-many-crossings', { limit: MOST_CROSSINGS }];
+  const runs = without.runs - crossings.with.runs;
+  const travelMm = without.travelMm - crossings.with.travelMm;
+  return [kept ? 'crossings-paid' : 'crossings-not-worth', { count, runs, travelMm }];
 }

@@ -2,6 +2,7 @@ import type { Drawing } from '../drawing/drawing.js';
 import { derivativeAt, pointAt } from '../geometry/evaluate.js';
 import { segmentLength } from '../geometry/length.js';
 import { findComponents } from './components.js';
+import { splitWhereLinesCross } from './crossings.js';
 import { sortDots } from './dots.js';
 import { addEntries } from './entries.js';
 import { strokeEnds } from './marks.js';
@@ -33,6 +34,8 @@ export function buildNetwork(drawing: Drawing, strokes: Uint32Array, options: Ne
       splitWhereLinesOverlap(marks, drawing, pieces, options.repeatToleranceMm, options.snapMm);
     }
   }
+  const crossings =
+    options.junctions === 'crossing' ? splitWhereLinesCross(marks, drawing, pieces, options.snapMm) : 0;
   const snapped = snapMarks(marks, options.snapMm);
   const spans = cutAtMarks(marks, snapped, drawing, strokes, options.snapMm);
 
@@ -46,7 +49,8 @@ export function buildNetwork(drawing: Drawing, strokes: Uint32Array, options: Ne
 
   const vertexX = Array.from(snapped.vertexX);
   const vertexY = Array.from(snapped.vertexY);
-  const edges = addEntries(without(spans, repeated), drawing, lengthOfPiece, vertexX, vertexY);
+  const joined = options.junctions === 'crossing';
+  const edges = addEntries(without(spans, repeated), drawing, lengthOfPiece, vertexX, vertexY, joined);
 
   const dots = sortDots(drawing, strokes, pieces, options);
   for (const stroke of dots.kept) {
@@ -81,6 +85,7 @@ export function buildNetwork(drawing: Drawing, strokes: Uint32Array, options: Ne
     snapMaxMm: snapped.snapMaxMm,
     dotsOnLines: dots.onLines,
     repeatedDots: dots.repeated,
+    crossings,
   };
 }
 

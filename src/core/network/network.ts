@@ -35,10 +35,12 @@ export interface Network {
   readonly dotsOnLines: number;
   /** Dots left out because they stand on another dot. */
   readonly repeatedDots: number;
+  /** Places found where lines cross, 0 where they were not looked for. */
+  readonly crossings: number;
 }
 
-/** Crossings are not looked for yet. */
-export type JunctionRule = 'ends' | 'touching';
+/** Where lines join: at their ends, also where an end touches another line, also where lines cross. */
+export type JunctionRule = 'ends' | 'touching' | 'crossing';
 
 export interface NetworkOptions {
   /** Ends at most this far apart meet, mm. */

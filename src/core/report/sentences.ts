@@ -31,6 +31,13 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'too-large': () => 'the drawing is larger than can be held in memory',
   'nothing-stroked': () => 'nothing in the drawing has a stroke: there is nothing to draw',
 
+  'crossings-paid': (v) =>
+    `joining lines at ${some(v.count, 'crossing')} saved ${some(v.runs, 'run')} and ${number(v.travelMm)} mm of travel`,
+  'crossings-not-worth': (v) =>
+    Number(v.count) > 0
+      ? `joining lines at ${some(v.count, 'crossing')} saved nothing: the order without is kept`
+      : 'no lines cross',
+  'too-many-crossings': (v) => `more than ${v.limit} crossings: lines were not joined there`,
   'wider-than-pen': (v) =>
     `${some(v.count, 'stroke')} wider than ${v.penMm} mm, up to ${number(v.widestMm)} mm: each is drawn as one line along its middle; a mill would mill such a track away`,
   'pens-left-out': (v) => `pens left out as asked: ${v.pens} (${some(v.count, 'stroke')})`,
