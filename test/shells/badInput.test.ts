@@ -24,7 +24,7 @@ const FILES: [string, string | Buffer, RegExp][] = [
   ['truncated.svg', svgOf('<g><path d="M0 0L10 10"/><path d="M5 5').slice(0, 150), /cut off.*line 1/],
   ['picture.svg', PNG, /not text/],
   ['packed.svg', Buffer.from([0x1f, 0x8b, 8, 0, 0]), /compressed/],
-  ['latin.svg', Buffer.from(svgOf('<title>\u00e9</title>'), 'latin1'), /not text in utf-8.*encoding/],
+  ['latin.svg', Buffer.from(svgOf('<title>\u00e9</title>'), 'latin1'), /not text in UTF-8: byte .*encoding/],
   ['strange.svg', `<?xml version="1.0" encoding="x-none"?>${svgOf('')}`, /encoding.*x-none/],
   ['letters.svg', svgOf('<text>Hi</text>', 'width="9mm" height="9mm"'), /nothing.*stroke[\s\S]*1 text/],
   ['page.svg', '<html><body>no drawing</body></html>', /not SVG.*html/],
