@@ -24,6 +24,8 @@ export interface BrowserStroke {
   readonly boxPx: readonly [number, number, number, number];
   readonly arcs: boolean;
   readonly dot: boolean;
+  /** `#rrggbb`; null where it is a paint server. */
+  readonly colour: string | null;
 }
 
 export interface BrowserDrawing {

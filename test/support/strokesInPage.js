@@ -41,6 +41,7 @@
         boxPx: box,
         arcs: arcs.length > 0,
         dot: length === 0,
+        colour: shown.colour,
       });
     }
   }
@@ -53,7 +54,27 @@
     const matrix = shape.getScreenCTM();
     const regular = matrix && matrix.a * matrix.d !== matrix.b * matrix.c;
     if (!regular || !isStroked(shape, style)) return { tag, id, shown: null };
-    return { tag, id, shown: { cap: style.strokeLinecap }, matrix, ...outlineOf(shape, style) };
+    return {
+      tag,
+      id,
+      shown: { cap: style.strokeLinecap, colour: bytesOf(style.stroke) },
+      matrix,
+      ...outlineOf(shape, style),
+    };
+  }
+
+  /** The colour as it comes out on a screen, `#rrggbb`; null for paint servers. */
+  function bytesOf(stroke) {
+    if (stroke.startsWith('url(')) return null;
+    const canvas = document.createElementNS('http://www.w3.org/1999/xhtml', 'canvas');
+    canvas.width = 1;
+    canvas.height = 1;
+    const context = canvas.getContext('2d', { willReadFrequently: true });
+    // Opaque: bytes under a transparent colour lose their exactness.
+    context.fillStyle = stroke.replace(/^rgba\((.*), [^,]*\)$/, 'rgb($1)').replace(/ \/ [^)]*\)$/, ')');
+    context.fillRect(0, 0, 1, 1);
+    const bytes = [...context.getImageData(0, 0, 1, 1).data].slice(0, 3);
+    return `#${bytes.map((byte) => byte.toString(16).padStart(2, '0')).join('')}`;
   }
 
   /**
@@ -133,7 +154,7 @@
     if (shape.getClientRects().length === 0) return false;
     if (!shape.checkVisibility({ visibilityProperty: true, opacityProperty: true })) return false;
     for (let svg = shape.ownerSVGElement; svg?.ownerSVGElement; svg = svg.ownerSVGElement) {
-      if (svg.width.baseVal.value === 0 || svg.height.baseVal.value === 0) return false;
+      if (!(svg.width.baseVal.value > 0 && svg.height.baseVal.value > 0)) return false;
     }
     const { stroke } = style;
     const server = /^url\("#([^"]*)"\)\s*(.*)$/.exec(stroke);

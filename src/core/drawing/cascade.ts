@@ -85,23 +85,38 @@ export class Cascade {
 
   private fill(specified: SpecifiedValues, element: SvgElement, copy: CopyAround | null): void {
     const { attributes } = this.tree;
-    let inherits: string[] | null = null;
+    let references: string[] | null = null;
     for (let i = attributes.begin(element.number), end = attributes.end(element.number); i < end; i++) {
       const number = attributes.nameNumberAt(i);
       if (attributes.prefixes[number] !== null) continue;
       const name = attributes.names[number];
       const value = attributes.valueAt(i);
       specified.set(name, name === 'display' ? value.trim().toLowerCase() : value);
-      if (value === 'inherit') inherits = [...(inherits ?? []), name];
+      // Few attributes of a drawing refer to the parent or to a custom property, and none of its long ones.
+      if (value.length < LONGEST_REFERENCE && (value === 'inherit' || value.includes('var('))) {
+        references = [...(references ?? []), name];
+      }
     }
     const style = specified.get('style');
+    for (const name of references ?? []) this.refer(specified, name, element, copy);
     for (const declaration of this.declarationsOn(element, style, copy)) {
       this.declare(specified, declaration, element, copy);
     }
-    for (const name of inherits ?? []) {
-      const property = specified.get(name) === 'inherit' ? PROPERTIES.get(name) : undefined;
-      if (property && !property.inherited) this.inherit(specified, name, element, copy);
-    }
+  }
+
+  /** A presentation attribute that refers to another value. */
+  private refer(
+    specified: SpecifiedValues,
+    name: string,
+    element: SvgElement,
+    copy: CopyAround | null,
+  ): void {
+    const value = specified.get(name) ?? '';
+    const property = OF_SVG_GRAMMAR.has(name) ? undefined : PROPERTIES.get(name);
+    if (!property) return;
+    if (value !== 'inherit')
+      this.declare(specified, { name, value, important: false, kind: 'var' }, element, copy);
+    else if (!property.inherited && !SIZES.has(name)) this.inherit(specified, name, element, copy);
   }
 
   /** In the order of the cascade: rules, style attribute, important rules, important style attribute. */
@@ -235,6 +250,13 @@ export class Cascade {
 }
 
 const NONE: readonly Declaration[] = [];
+const LONGEST_REFERENCE = 400;
+/** Attributes that are read by a grammar of SVG, which has no such references. */
+const OF_SVG_GRAMMAR: ReadonlySet<string> = new Set([
+  ...['transform', 'd', 'translate', 'rotate', 'scale', 'transform-box', 'offset-path'],
+]);
+/** Attributes that are lengths of SVG, where `inherit` is no length. */
+const SIZES: ReadonlySet<string> = new Set(['x', 'y', 'width', 'height', 'cx', 'cy', 'r', 'rx', 'ry']);
 
 /** Browsers take the place and size of a viewport inside the drawing, and the size of a copy, from attributes only. */
 const IN_ATTRIBUTES: ReadonlySet<string> = new Set(['x', 'y', 'width', 'height']);

@@ -53,6 +53,23 @@ export function splitOutside(text: string, mark: string): string[] {
   return parts;
 }
 
+/** With the brackets closed that the end of the text leaves open, as the end of a sheet does. */
+export function withBracketsClosed(text: string): string {
+  if (!text.includes('(')) return text;
+  let open = '';
+  for (let at = 0; at < text.length; ) {
+    const c = text[at];
+    const next = afterUnit(text, at);
+    if (c === '(') open += ')';
+    else if (c === ')') open = open.slice(1);
+    else if ((c === '"' || c === "'") && next === text.length && (next === at + 1 || text[next - 1] !== c)) {
+      return text + c + open;
+    }
+    at = next;
+  }
+  return text + open;
+}
+
 /** Words parted by white space outside quotes and brackets. O(text). */
 export function wordsOf(text: string): string[] {
   const words: string[] = [];

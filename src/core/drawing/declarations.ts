@@ -1,4 +1,4 @@
-import { splitOutside, withoutComments } from './cssText.js';
+import { splitOutside, withBracketsClosed, withoutComments } from './cssText.js';
 import { PROPERTIES, pathDataIn } from './properties.js';
 
 export { splitOutside } from './cssText.js';
@@ -49,7 +49,7 @@ export function readDeclaration(
   const raw = withoutComments(text.slice(colon + 1)).trim();
   const bang = raw.lastIndexOf('!');
   const important = bang >= 0 && /^!\s*important$/i.test(raw.slice(bang));
-  const value = important ? raw.slice(0, bang).trimEnd() : raw;
+  const value = withBracketsClosed(important ? raw.slice(0, bang).trimEnd() : raw);
   if (isCustom) return [{ name, value, important, kind: 'plain' }];
   if (value === '') return [];
   const declarations = SHORTHANDS.has(name)

@@ -18,8 +18,9 @@ export interface LengthContext {
 export interface WrittenLength {
   readonly value: number;
   readonly unit: LengthUnit | '%' | 'em' | 'ex' | 'ch' | 'rem' | '' | 'calc';
-  /** Of unit `calc`, whose value is 0 here: what is to be worked out. */
+  /** Of unit `calc`, whose value is 0 here: what is to be worked out, and whether it is a plain number. */
   readonly sum?: string;
+  readonly isNumber?: boolean;
 }
 
 /** A number of CSS: no trailing point, nothing between it and its unit. */
@@ -30,7 +31,11 @@ const LONGEST = 400;
 /** null for anything but a finite number and a unit known here. */
 export function readLength(text: string): WrittenLength | null {
   const trimmed = text.trim();
-  if (isMath(trimmed)) return isLengthSum(trimmed) ? { value: 0, unit: 'calc', sum: trimmed } : null;
+  if (isMath(trimmed)) {
+    const kind = kindOfSum(trimmed);
+    if (kind === null || kind === 'angle') return null;
+    return { value: 0, unit: 'calc', sum: trimmed, isNumber: kind === 'number' };
+  }
   const match = trimmed.length > LONGEST ? null : SHAPE.exec(trimmed);
   if (!match) return null;
   const value = Number(match[1]) + 0;
@@ -46,10 +51,10 @@ function unitOf(text: string): WrittenLength['unit'] | null {
 }
 
 /** Worked out with lengths of no size, which shows whether it can be worked out at all. */
-function isLengthSum(sum: string): boolean {
+function kindOfSum(sum: string): Quantity['kind'] | null {
   const reader = (value: number, unit: string): Quantity | null =>
     unitOf(unit) === null ? null : { kind: unit === '' ? 'number' : 'length', value };
-  return (evaluate(sum, reader)?.kind ?? 'angle') !== 'angle';
+  return evaluate(sum, reader)?.kind ?? null;
 }
 
 function isUnit(unit: string): unit is WrittenLength['unit'] {

@@ -113,6 +113,10 @@ export class MarkupLexer {
     const target = this.name();
     if (!isPlainName(target) || (this.at < end && !this.skipSpace())) throw this.fail('xml-bad-tag', start);
     if (target.toLowerCase() === 'xml') this.notStrict('an XML declaration not at the very start', start);
+    if (target === 'xml-stylesheet') {
+      const sheet = this.text.slice(this.at, end).replace(/\s+/g, ' ').trim().slice(0, 60);
+      this.log.add('style-sheet-not-read', () => this.placeAt(start), { type: `${target} ${sheet}` });
+    }
     this.at = end + 2;
   }
 

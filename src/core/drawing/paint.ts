@@ -1,4 +1,5 @@
 import { readColour } from './colour.js';
+import { withBracketsClosed } from './cssText.js';
 
 /** What a line is drawn or an area filled with, before `currentColor` is looked up. */
 export type Paint =
@@ -28,8 +29,8 @@ export function readPaint(
   text: string,
   isServer: (id: string) => boolean,
 ): { readonly paint: Paint; readonly exact: boolean } | null {
-  const t = text.trim();
-  if (t.length > LONGEST) return null;
+  if (text.length > LONGEST) return null;
+  const t = withBracketsClosed(text.trim());
   const lower = t.toLowerCase();
   if (lower === 'none') return { paint: NONE, exact: true };
   if (lower === 'currentcolor') return { paint: { kind: 'current' }, exact: true };

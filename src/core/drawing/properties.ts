@@ -29,6 +29,7 @@ function lengths(options: { numbers?: boolean; negative?: boolean; auto?: boolea
     if (options.auto && value.toLowerCase() === 'auto') return true;
     const length = readLength(value);
     if (!length || (length.value < 0 && !options.negative)) return false;
+    if (length.isNumber) return options.numbers === true;
     return length.unit !== '' || length.value === 0 || inAttribute || options.numbers === true;
   };
 }

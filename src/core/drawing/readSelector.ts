@@ -153,7 +153,7 @@ class SelectorReader {
     ]);
     const prefix = prefixes.get(uri);
     const flags = node.flags?.toLowerCase() ?? '';
-    if (prefix === undefined || !['', 'i', 's'].includes(flags)) throw new NotRead();
+    if (prefix === undefined || !['', 'i'].includes(flags)) throw new NotRead();
     const { value } = node;
     return {
       kind: 'attribute',
@@ -205,8 +205,9 @@ class SelectorReader {
       case 'has':
         return this.has(argument, tests);
       case 'lang': {
-        const words = childrenOf(node).filter(({ type }) => type === 'Identifier' || type === 'String');
-        if (words.length === 0) throw new NotRead();
+        // Browsers take names here, not strings.
+        const words = childrenOf(node).filter(({ type }) => type !== 'Operator');
+        if (words.length === 0 || words.some(({ type }) => type !== 'Identifier')) throw new NotRead();
         tests.push({ kind: 'lang', ranges: words.map((word) => textIn(word).toLowerCase()) });
         return CLASS_WEIGHT;
       }
