@@ -19,8 +19,41 @@ export function candidateEdges(layout: Layout, costs: IntegerCosts): EdgeList {
   const edges = new EdgeList(16 + Math.ceil(EXPECTED * layout.n));
   placeEdges(layout, edges);
   costs.fill(edges);
-  if (layout.placed < layout.n) specialPartners(layout, costs, edges);
+  wayEdges(layout, costs.scale, (u, v, cost) => edges.add(u, v, cost));
+  const { hints } = layout.problem;
+  if (hints !== undefined) hintEdges(layout, hints, costs, edges);
+  else if (layout.placed < layout.n) specialPartners(layout, costs, edges);
   return edges;
+}
+
+/** The working vertex of each of the problem's vertices. */
+function workingOf(layout: Layout): Int32Array {
+  const working = new Int32Array(layout.n);
+  for (let v = 0; v < layout.n; v++) working[layout.original[v]] = v;
+  return working;
+}
+
+/** Calls back for the problem's other ways, as working vertices with whole costs. */
+export function wayEdges(
+  layout: Layout,
+  scale: number,
+  add: (u: number, v: number, cost: number) => void,
+): void {
+  const { ways } = layout.problem;
+  if (ways === undefined || ways.cost.length === 0) return;
+  const working = workingOf(layout);
+  for (let i = 0; i < ways.cost.length; i++) {
+    add(working[ways.u[i]], working[ways.v[i]], 2 * Math.floor(scale * ways.cost[i]));
+  }
+}
+
+function hintEdges(layout: Layout, hints: Int32Array, costs: IntegerCosts, edges: EdgeList): void {
+  const working = workingOf(layout);
+  for (let i = 0; i < hints.length; i += 2) {
+    const u = working[hints[i]];
+    const v = working[hints[i + 1]];
+    edges.add(u, v, costs.between(u, v));
+  }
 }
 
 function placeEdges(layout: Layout, edges: EdgeList): void {

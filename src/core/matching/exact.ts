@@ -55,7 +55,7 @@ function solve(
   const { n, placed } = layout;
   const f = new Forest(n, buildGraph(n, candidateEdges(layout, costs)));
   firstDuals(f, placed);
-  contractPlaces(f, layout);
+  contractPlaces(f, layout, costs);
   raiseExposed(f);
   let exposed = exposedSets(f);
   const watch = watchOf(options, exposed.length);

@@ -1,5 +1,5 @@
 import type { Ancestry } from './ancestry.js';
-import { pairCost } from './cost.js';
+import { pairCostOf } from './cost.js';
 import { type Forest, pairRing, split } from './forest.js';
 import type { IntegerCosts, Layout } from './layout.js';
 import type { Certificate } from './problem.js';
@@ -72,10 +72,11 @@ export function tallies(
   layout: Layout,
   costs: IntegerCosts,
 ): boolean {
+  const cost = pairCostOf(layout.problem);
   const sum = new IntegerSum();
   for (let v = 0; v < layout.n; v++) {
     const u = layout.original[v];
-    if (u < mate[u]) sum.add(-2 * Math.floor(costs.scale * pairCost(layout.problem, u, mate[u])));
+    if (u < mate[u]) sum.add(-2 * Math.floor(costs.scale * cost(u, mate[u])));
     sum.add(certificate.vertexDual[u]);
   }
   for (const dual of certificate.setDual) sum.add(dual);

@@ -1,4 +1,5 @@
 import { NearestSearch } from '../structures/nearest.js';
+import { wayEdges } from './candidates.js';
 import { greedyMatching } from './greedy.js';
 import type { IntegerCosts, Layout } from './layout.js';
 import type { CertifiedMatching } from './problem.js';
@@ -48,5 +49,9 @@ function halfNearest(layout: Layout, costs: IntegerCosts): Float64Array {
     const cost = q < 0 ? 0 : costs.between(first[p], first[q]);
     for (let v = first[p]; v < first[p + 1]; v++) dual[v] = cost / 2;
   }
+  wayEdges(layout, costs.scale, (u, v, cost) => {
+    dual[u] = Math.min(dual[u], cost / 2);
+    dual[v] = Math.min(dual[v], cost / 2);
+  });
   return dual;
 }

@@ -1,5 +1,5 @@
 import { type BoxTree, buildBoxTree } from '../structures/boxTree.js';
-import { pairCost } from './cost.js';
+import { type PairCost, pairCostOf } from './cost.js';
 import type { MatchingProblem } from './problem.js';
 
 /**
@@ -98,21 +98,23 @@ export class IntegerCosts {
   /** Places of the working vertices. */
   readonly px: Float64Array;
   readonly py: Float64Array;
+  private readonly pairCost: PairCost;
 
   constructor(layout: Layout, scale: number) {
     this.layout = layout;
     this.scale = scale;
+    this.pairCost = pairCostOf(layout.problem);
     const { original, placed, problem } = layout;
     const alone = layout.tree.x.length === placed;
     this.px = alone ? layout.tree.x : pick(problem.x, original.subarray(0, placed));
     this.py = alone ? layout.tree.y : pick(problem.y, original.subarray(0, placed));
   }
 
-  /** c(u, v) = 2·floor(scale·cost). */
+  /** c(u, v) = 2·floor(scale·cost); of placed vertices without regard to other ways. */
   between(u: number, v: number): number {
     const { layout, px, py, scale } = this;
     if (u >= layout.placed || v >= layout.placed) {
-      return 2 * Math.floor(scale * pairCost(layout.problem, layout.original[u], layout.original[v]));
+      return 2 * Math.floor(scale * this.pairCost(layout.original[u], layout.original[v]));
     }
     const dx = px[u] - px[v];
     const dy = py[u] - py[v];

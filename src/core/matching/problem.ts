@@ -5,6 +5,9 @@
  * where `weigh` is nondecreasing and at least 0, so that boxes of points can be priced. The last
  * `special` vertices have costs of their own, given by `specialCost` (either index may be special);
  * they are few (home, its copy, the free end) and are priced one by one.
+ *
+ * `ways` lists pairs of placed vertices that may also be had at another price (an edge path drawn again in
+ * place of a lift): such a pair costs the lower of the two.
  */
 export interface MatchingProblem {
   readonly n: number;
@@ -13,6 +16,16 @@ export interface MatchingProblem {
   weigh(distance: number): number;
   readonly special: number;
   specialCost(i: number, j: number): number;
+  readonly ways?: Ways;
+  /** Pairs to look at first, u0 v0 u1 v1 …: they save time where costs are a table, and never change the optimum. */
+  readonly hints?: Int32Array;
+}
+
+/** Pair i joins u[i] and v[i] at cost[i]. */
+export interface Ways {
+  readonly u: Int32Array;
+  readonly v: Int32Array;
+  readonly cost: Float64Array;
 }
 
 /** A perfect matching: `mate[v]` is v's partner; `total` the sum of costs in the problem's own unit. */

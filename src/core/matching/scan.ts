@@ -24,7 +24,9 @@ export function scanGrown(f: Forest, from: number, to: number, s: number): void 
       if (side > 0) {
         // The other end has grown by `time` too: half of what is left, from now.
         const when = (time + slack) / 2;
-        if (when < best) events.push(when, f.promises++, arc);
+        if (when >= best) continue;
+        events.key = when;
+        events.put(f.promises++, arc);
         continue;
       }
       const when = time + slack;
@@ -36,7 +38,8 @@ export function scanGrown(f: Forest, from: number, to: number, s: number): void 
       } else if (reachRound[r] !== round || when < reach[r]) {
         reachRound[r] = round;
         reach[r] = when;
-        events.push(when, f.promises++, arc);
+        events.key = when;
+        events.put(f.promises++, arc);
       }
     }
     if (v === to) break;
@@ -63,7 +66,8 @@ export function scanReleased(f: Forest, s: number): void {
         earliest = when;
         reachRound[s] = round;
         reach[s] = when;
-        events.push(when, f.promises++, arc);
+        events.key = when;
+        events.put(f.promises++, arc);
       }
     }
     if (v === f.lastVertex[node]) break;

@@ -1,5 +1,5 @@
 import type { Forest } from './forest.js';
-import type { Layout } from './layout.js';
+import type { IntegerCosts, Layout } from './layout.js';
 import { mergeRing } from './shrink.js';
 
 /**
@@ -28,12 +28,13 @@ export function firstDuals(f: Forest, placed: number): void {
  * Vertices on one place all have edges of one cost between them, tight from the start: an odd number of them
  * is a blossom already, and of an even number the last is left over as its mate.
  */
-export function contractPlaces(f: Forest, layout: Layout): void {
+export function contractPlaces(f: Forest, layout: Layout, costs: IntegerCosts): void {
   const { first } = layout;
   for (let p = 0; p + 1 < first.length; p++) {
     const start = first[p];
     const size = first[p + 1] - start;
     const odd = size % 2 === 0 ? size - 1 : size;
+    if (size > 1 && !tight(f, start, start + size, costs.between(start, start + 1))) continue;
     let s = start;
     if (odd >= 3) {
       f.ring.length = 0;
@@ -49,6 +50,12 @@ export function contractPlaces(f: Forest, layout: Layout): void {
     if (odd !== size) matchAlong(f, start, start + odd);
     else f.mateOut[s] = -1;
   }
+}
+
+/** Whether the edges between vertices on one place are tight: another way from one of them may be cheaper. */
+function tight(f: Forest, start: number, end: number, cost: number): boolean {
+  for (let v = start; v < end; v++) if (2 * f.pi[v] !== cost) return false;
+  return true;
 }
 
 /** Raises every exposed set's dual until an edge is tight, and matches where that one's other end is exposed too. */

@@ -10,7 +10,7 @@ export class PairHeap {
   private as = new Int32Array(START);
   private bs = new Int32Array(START);
   size = 0;
-  /** The entry taken out last. */
+  /** The entry taken out last, or the key of the one put in after it. */
   key = 0;
   a = 0;
   b = 0;
@@ -25,8 +25,14 @@ export class PairHeap {
   }
 
   push(key: number, a: number, b: number): void {
+    this.key = key;
+    this.put(a, b);
+  }
+
+  /** Pushes the entry (`this.key`, a, b): a double set as a field need not be boxed for the call. */
+  put(a: number, b: number): void {
     if (this.size === this.keys.length) this.grow();
-    const { keys, as, bs } = this;
+    const { keys, as, bs, key } = this;
     let hole = this.size++;
     while (hole > 0) {
       const up = (hole - 1) >> 1;
