@@ -52,6 +52,15 @@ export function segmentsOf(built: Segments): Segment[] {
   }));
 }
 
+/** The chains of a line set, to take apart. */
+export function chainsOf({ segments, count, first, pen, dot }: LineSet): Chain[] {
+  const all = segmentsOf(segments);
+  return Array.from({ length: count }, (_, c) => {
+    const chain = { pen: pen[c], segments: all.slice(first[c], first[c + 1]) };
+    return dot[c] ? { ...chain, dot: true } : chain;
+  });
+}
+
 /** The segments that `build` adds. */
 export function built(build: (builder: SegmentBuilder) => void): Segment[] {
   const builder = new SegmentBuilder();

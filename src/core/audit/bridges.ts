@@ -29,7 +29,10 @@ const MOST_POINTS = 64;
  *   where the run starts or ends, its free end is there as well;
  * - at most two of the legs are bridges: the others lie within `matchMm` of wanted lines all along;
  * - an end of a wanted stroke, or a crossing of two wanted lines, lies within snap distance and match
- *   tolerance of it. In the midst of neighbours there is nothing to bridge.
+ *   tolerance of it. In the midst of neighbours there is nothing to bridge;
+ * - where all of it lies beside wanted lines, so that it may as well be a line drawn too far, it leads
+ *   from one place where a bridge may start to another: an end of a stroke, a crossing, or the point of a
+ *   wanted line that is nearest to a stroke's end.
  */
 export class BridgeInspector {
   private ends: { index: BoxIndex; boxes: Float64Array; pen: Uint32Array } | null = null;
@@ -43,16 +46,38 @@ export class BridgeInspector {
     const { snapMm, matchMm } = this.tolerances;
     if (stretch.atStart && stretch.atEnd) return false;
     if (stretch.lengthMm > MOST_LEGS * (snapMm + 2 * matchMm) || stretch.x.length > MOST_POINTS) return false;
-    return this.hasLegs(stretch) && (this.isNearEnd(stretch) || this.isNearCrossing(stretch));
+    const bridges = this.fewestBridges(stretch);
+    if (bridges > MOST_BRIDGES) return false;
+    if (bridges === 0) return this.isAnchor(stretch, 0) && this.isAnchor(stretch, stretch.x.length - 1);
+    const reach = snapMm + matchMm;
+    return this.isNearEnd(stretch, reach) || this.isNearCrossing(stretch, reach);
   }
 
-  /** Whether it falls into legs; the fewest bridges by dynamic programming over its points. */
-  private hasLegs(stretch: Stretch): boolean {
+  /** Whether a bridge may start at point k of a stretch. */
+  private isAnchor({ x, y, pen }: Stretch, k: number): boolean {
+    const { snapMm, matchMm, hairMm } = this.tolerances;
+    const reach = matchMm + hairMm;
+    const at = { x: [x[k], x[k]], y: [y[k], y[k]], pen };
+    if (this.isNearEnd(at, reach) || this.isNearCrossing(at, reach)) return true;
+    let found = false;
+    this.visitEnds(x[k], y[k], x[k], y[k], pen, snapMm + matchMm, (px, py) => {
+      visitPieces(this.wanted, this.wanted.index, pen, x[k], y[k], x[k], y[k], reach, (v) => {
+        const foot = footOn(this.wanted, v, px, py);
+        found = foot !== null && between(foot[0], foot[1], x[k], y[k]) <= reach;
+        return found;
+      });
+      return found;
+    });
+    return found;
+  }
+
+  /** The fewest bridges among the legs that it falls into, by dynamic programming over its points. */
+  private fewestBridges(stretch: Stretch): number {
     const { x, y, pen, atStart, atEnd } = stretch;
     const { matchMm } = this.tolerances;
     const last = x.length - 1;
     const joint = x.map((_, k) => isNear(x[k], y[k], this.wanted, pen, matchMm));
-    if ((atStart && !joint[0]) || (atEnd && !joint[last])) return false;
+    if ((atStart && !joint[0]) || (atEnd && !joint[last])) return Number.POSITIVE_INFINITY;
     // The fewest bridges among the legs that lead to each point, by the number of legs.
     let fewest = new Float64Array(last + 1).fill(Number.POSITIVE_INFINITY);
     fewest[0] = 0;
@@ -69,7 +94,7 @@ export class BridgeInspector {
       }
       fewest = next;
     }
-    return fewest[last] <= MOST_BRIDGES;
+    return fewest[last];
   }
 
   /** 1 for a straight leg that is a bridge, 0 for one beside wanted lines, else infinite. */
@@ -81,33 +106,41 @@ export class BridgeInspector {
     return pathLength(leg.x, leg.y) - near > hairMm ? 1 : 0;
   }
 
-  private isNearEnd(stretch: Stretch): boolean {
-    this.ends ??= strokeEnds(this.wanted);
-    const { index, boxes, pen } = this.ends;
-    const reach = this.tolerances.snapMm + this.tolerances.matchMm;
-    const { x, y } = stretch;
+  private isNearEnd({ x, y, pen }: Way, reach: number): boolean {
     let near = false;
     for (let k = 0; k + 1 < x.length && !near; k++) {
-      index.visit(
-        Math.min(x[k], x[k + 1]) - reach,
-        Math.min(y[k], y[k + 1]) - reach,
-        Math.max(x[k], x[k + 1]) + reach,
-        Math.max(y[k], y[k + 1]) + reach,
-        (i) => {
-          const px = boxes[4 * i];
-          const py = boxes[4 * i + 1];
-          near = pen[i] === stretch.pen && distanceToLine(px, py, x[k], y[k], x[k + 1], y[k + 1]) <= reach;
-          return near;
-        },
-      );
+      this.visitEnds(x[k], y[k], x[k + 1], y[k + 1], pen, reach, () => {
+        near = true;
+        return true;
+      });
     }
     return near;
   }
 
-  private isNearCrossing(stretch: Stretch): boolean {
+  /** Calls `visit` with the stroke ends within reach of a line, until it returns true. */
+  private visitEnds(
+    ax: number,
+    ay: number,
+    bx: number,
+    by: number,
+    ofPen: number,
+    reach: number,
+    visit: (x: number, y: number) => boolean,
+  ): void {
+    this.ends ??= strokeEnds(this.wanted);
+    const { index, boxes, pen } = this.ends;
+    const [minX, minY] = [Math.min(ax, bx) - reach, Math.min(ay, by) - reach];
+    const [maxX, maxY] = [Math.max(ax, bx) + reach, Math.max(ay, by) + reach];
+    index.visit(minX, minY, maxX, maxY, (i) => {
+      const px = boxes[4 * i];
+      const py = boxes[4 * i + 1];
+      if (pen[i] !== ofPen || distanceToLine(px, py, ax, ay, bx, by) > reach) return false;
+      return visit(px, py);
+    });
+  }
+
+  private isNearCrossing({ x, y, pen }: Way, reach: number): boolean {
     const { wanted } = this;
-    const reach = this.tolerances.snapMm + this.tolerances.matchMm;
-    const { x, y, pen } = stretch;
     const pieces: number[] = [];
     for (let k = 0; k + 1 < x.length; k++) {
       visitPieces(wanted, wanted.index, pen, x[k], y[k], x[k + 1], y[k + 1], reach, (v) => {
@@ -127,6 +160,9 @@ export class BridgeInspector {
     return false;
   }
 }
+
+/** Points joined by straight lines. */
+type Way = Pick<Stretch, 'x' | 'y' | 'pen'>;
 
 /** Both ends of every wanted chain that is not a dot. */
 function strokeEnds(side: Side): { index: BoxIndex; boxes: Float64Array; pen: Uint32Array } {
@@ -180,9 +216,19 @@ function distanceToLine(px: number, py: number, ax: number, ay: number, bx: numb
   const squared = dx * dx + dy * dy;
   const along = squared > 0 ? ((px - ax) * dx + (py - ay) * dy) / squared : 0;
   const t = Math.max(0, Math.min(1, along));
-  const ex = ax + t * dx - px;
-  const ey = ay + t * dy - py;
-  return Math.sqrt(ex * ex + ey * ey);
+  return between(ax + t * dx, ay + t * dy, px, py);
+}
+
+function between(ax: number, ay: number, bx: number, by: number): number {
+  return Math.sqrt((bx - ax) * (bx - ax) + (by - ay) * (by - ay));
+}
+
+/** The foot of a point on piece v, null where it lies beyond its ends. */
+function footOn(side: Side, v: number, px: number, py: number): [number, number] | null {
+  const dx = side.x[v + 1] - side.x[v];
+  const dy = side.y[v + 1] - side.y[v];
+  const t = ((px - side.x[v]) * dx + (py - side.y[v]) * dy) / (dx * dx + dy * dy);
+  return t >= 0 && t <= 1 ? [side.x[v] + t * dx, side.y[v] + t * dy] : null;
 }
 
 /** Whether two pieces that are not neighbours on a chain cross or touch, and where. */

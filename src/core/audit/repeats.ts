@@ -9,10 +9,11 @@ import { type Stretch, unpairedStretches } from './stretches.js';
 import type { Tolerances } from './tolerances.js';
 
 /**
- * A line may be excused by one at up to 60° from it: where two lines meet at a narrow angle, the tips
- * that lie within the tolerance of each other repeat each other, however short they are.
+ * A line may be excused by one at up to 20° from it, as pieces of flattened curves may turn from each
+ * other. So where two lines meet at a narrower angle, the tips that lie within the tolerance of each other
+ * repeat each other, however short they are; at a wider angle a tip that is not drawn is missed.
  */
-const EXCUSE_COSINE = 0.5;
+const EXCUSE_COSINE = 0.94;
 /** To count as drawn twice, lines must run in nearly the same direction. */
 const PARALLEL_COSINE = 0.98;
 
