@@ -57,6 +57,7 @@ export const READING_FINDINGS = {
   'use-limit': 'warning', // limit: its name; value
   'text-cut': 'warning', // element; limit, value
   'switch-without-match': 'warning',
+  'language-assumed': 'note', // asked: the first languages that a switch asks for
 
   // Read, and not drawn, or drawn otherwise than on a screen.
   'filled-not-stroked': 'warning', // outlineMm: sum

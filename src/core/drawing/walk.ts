@@ -156,9 +156,10 @@ class Walk {
   }
 
   private enterSwitch(element: SvgElement, context: Context): void {
-    const { chosen, passedOver } = firstThatHolds(element, (child) =>
+    const { chosen, passedOver, languages } = firstThatHolds(element, (child) =>
       this.session.cascade.specifiedOn(child, context.copies),
     );
+    if (languages !== null) this.session.report('language-assumed', element, { asked: shown(languages) });
     for (const foreign of passedOver) this.session.report('foreign-object-not-drawn', foreign);
     // A title or defs before them all is chosen too, and nothing drawn: so says SVG 2, and browsers do.
     if (chosen && !NOT_RENDERED.has(chosen.name)) this.enter([chosen], context);

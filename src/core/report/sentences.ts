@@ -53,7 +53,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
     'the root does not name the SVG name space: read all the same; a browser shows nothing',
   'undeclared-prefix': (v) => `the prefix ${quoted(v.prefix)} is not declared${times(v)}`,
   'style-rule-not-read': (v) => `a style rule was not understood${times(v)}, first: ${quoted(v.rule)}`,
-  'style-sheet-not-read': () => 'a style sheet was not read: colours and strokes set there are missing',
+  'style-sheet-not-read': (v) =>
+    `a style sheet was not read: colours and strokes set there are missing (${v.type})${times(v)}`,
   'path-error': (v) =>
     `path data is wrong at character ${v.offset}, ${quoted(v.found)}: drawn up to there${times(v)}`,
   'points-error': (v) =>
@@ -82,6 +83,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
     `style not understood, and left aside: ${v.property}: ${quoted(v.found)}${times(v)}`,
   'motion-path-not-applied': (v) => `a path of motion is not applied: ${quoted(v.motion)}${times(v)}`,
   'style-limit': (v) => `style rules beyond ${v.limit} steps of matching were left aside`,
+  'language-assumed': (v) =>
+    `a <switch> chooses by language (${quoted(v.asked)} first): English was taken${times(v)}`,
   'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
   'shape-error': (v) => `a shape is left out: ${v.attribute}=${quoted(v.found)}${times(v)}`,
 

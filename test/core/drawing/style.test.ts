@@ -188,15 +188,17 @@ describe('what is not drawn is counted', () => {
     ]);
   });
 
-  test('clips, masks and markers are said where a stroke is drawn without them', () => {
+  test('masks and markers are said where a stroke is drawn without them', () => {
     const drawing = readBody(
-      `<marker id="m"/><clipPath id="c"/><mask id="k"/><g stroke="red" fill="none"><path ${LINE} clip-path="url(#c)" mask="url(#k)"/>
-       <path ${LINE} marker-end="url(#m)"/>
+      `<marker id="m"/><mask id="k"/><g stroke="red" fill="none"><path ${LINE} mask="url(#k)"/>
+       <path ${LINE} marker-end="url(#m)"/><path ${LINE} style="marker:url(#m)"/><path ${LINE} marker="url(#m)"/>
        <path ${LINE} stroke-dasharray="0 0" marker-end="url(#missing)" clip-path="url(#missing)"/></g>`,
     );
-    expect(drawing.strokes.count).toBe(3);
-    expect(codesOf(drawing)).toEqual(['clip-not-applied', 'mask-not-applied', 'markers-not-drawn']);
-    for (const finding of drawing.findings) expect(finding.values.count).toBe(1);
+    expect(drawing.strokes.count).toBe(5);
+    expect(drawing.findings.map((f) => [f.code, f.values.count])).toEqual([
+      ['mask-not-applied', 1],
+      ['markers-not-drawn', 2],
+    ]);
   });
 });
 
