@@ -2,8 +2,9 @@ import { describe, expect, test } from 'vitest';
 import { checkCertificate } from '../../../src/core/matching/certificate.ts';
 import { exactMatching } from '../../../src/core/matching/exact.ts';
 import type { Certificate, CertifiedMatching } from '../../../src/core/matching/problem.ts';
-import { createRandom } from '../../../src/core/structures/random.ts';
-import { plane, pointSets } from '../../support/matchingProblems.ts';
+import { createRandom, randomBelow } from '../../../src/core/structures/random.ts';
+import { provesByDefinition } from '../../support/certificateByPairs.ts';
+import { plane, pointSets, smallProblem } from '../../support/matchingProblems.ts';
 
 const problem = plane(pointSets.clustered(40, createRandom(12)));
 const sound = exactMatching(problem);
@@ -21,6 +22,7 @@ function changed<T extends Float64Array | Uint32Array | Int32Array>(column: T, i
 function reason(matching: CertifiedMatching): string | null {
   const { ok, reason: why } = checkCertificate(problem, matching);
   expect(ok).toBe(why === null);
+  if (ok) expect(provesByDefinition(problem, matching)).toBe(true);
   return why;
 }
 
@@ -54,6 +56,44 @@ describe('rejects a spoilt certificate', () => {
         /integer/,
       );
     }
+  });
+
+  test('a set left out, given away or merged with another', () => {
+    const sets = certificate.setDual.length;
+    for (let i = 0; i < sets; i++) {
+      const without = (column: Float64Array | Uint32Array): number[] => [...column].filter((_, k) => k !== i);
+      const spoilt = withCertificate({
+        setDual: Float64Array.from(without(certificate.setDual)),
+        setFirst: Uint32Array.from(without(certificate.setFirst)),
+        setEnd: Uint32Array.from(without(certificate.setEnd)),
+      });
+      expect(reason(spoilt)).not.toBe(null);
+      const first = certificate.setFirst[i];
+      expect(reason(withCertificate({ setFirst: changed(certificate.setFirst, i, first + 2) }))).not.toBe(
+        null,
+      );
+      expect(reason(withCertificate({ setEnd: changed(certificate.setEnd, i, first + 1) }))).toMatch(
+        /not odd/,
+      );
+    }
+  });
+
+  test('two members of the list of members swapped, one of them in a set', () => {
+    const { setMembers, setFirst, setEnd } = certificate;
+    const sizes = [...setEnd].map((end, i) => end - setFirst[i]);
+    const i = sizes.indexOf(Math.min(...sizes));
+    let tried = 0;
+    for (let a = setFirst[i]; a < setEnd[i]; a++) {
+      for (let b = 0; b < setMembers.length; b++) {
+        if (b >= setFirst[i] && b < setEnd[i]) continue;
+        const swapped = changed(changed(setMembers, a, setMembers[b]), b, setMembers[a]);
+        const spoilt = withCertificate({ setMembers: swapped });
+        // Where both lie in the same sets that have a dual nothing is spoilt.
+        expect(reason(spoilt) === null).toBe(provesByDefinition(problem, spoilt));
+        tried++;
+      }
+    }
+    expect(tried).toBeGreaterThan(20);
   });
 
   test('mates swapped between any two pairs', () => {
@@ -103,6 +143,66 @@ describe('rejects a spoilt certificate', () => {
     );
     expect(reason({ ...sound, total: sound.total * (1 + 1e-9) })).toMatch(/total/);
   });
+});
+
+test('agrees with the definition, pair by pair, on 300 problems with one number spoilt', () => {
+  const random = createRandom(77);
+  let rejected = 0;
+  for (let round = 0; round < 300; round++) {
+    const small = smallProblem(random, 16);
+    const matching = exactMatching(small);
+    const { vertexDual, setDual } = matching.certificate;
+    const step = [-2, -1, 1, 2][randomBelow(random, 4)];
+    const v = randomBelow(random, small.n);
+    const w = randomBelow(random, small.n);
+    // One dual, two against each other, or a set's dual against that of one of its vertices.
+    const duals = changed(vertexDual, v, vertexDual[v] + step);
+    const kind = randomBelow(random, 3);
+    if (kind > 0) duals[w] -= step;
+    const sets = setDual.slice();
+    if (kind === 2 && sets.length > 0) sets[randomBelow(random, sets.length)] += step;
+    const spoilt = {
+      ...matching,
+      certificate: { ...matching.certificate, vertexDual: duals, setDual: sets },
+    };
+    const { ok } = checkCertificate(small, spoilt);
+    expect(ok).toBe(provesByDefinition(small, spoilt));
+    expect(checkCertificate(small, matching).ok && provesByDefinition(small, matching)).toBe(true);
+    if (!ok) rejected++;
+  }
+  expect(rejected).toBeGreaterThan(150);
+});
+
+test('larger sets: every pair of 200, and one dual spoilt far from anything', () => {
+  for (const kind of [
+    'odd tight clusters',
+    '500 copies on a place',
+    'exponential spread',
+    'lattice with holes',
+  ]) {
+    const large = plane(pointSets[kind](200, createRandom(3)));
+    const matching = exactMatching(large);
+    expect(checkCertificate(large, matching).reason).toBe(null);
+    expect(provesByDefinition(large, matching)).toBe(true);
+    const { vertexDual } = matching.certificate;
+    const raised = changed(vertexDual, 17, vertexDual[17] + 1);
+    raised[150]--;
+    const spoilt = { ...matching, certificate: { ...matching.certificate, vertexDual: raised } };
+    expect(checkCertificate(large, spoilt).ok).toBe(provesByDefinition(large, spoilt));
+  }
+});
+
+test('a matching that is not said to be optimal is checked for its bound alone', () => {
+  const early = exactMatching(problem, { shouldStop: () => true });
+  expect(checkCertificate(problem, early).reason).toBe(null);
+  expect(checkCertificate(problem, { ...early, optimal: true }).ok).toBe(false);
+  const { vertexDual } = early.certificate;
+  const raised = { ...early.certificate, vertexDual: vertexDual.map((dual) => 3 * dual) };
+  expect(checkCertificate(problem, { ...early, certificate: raised }).reason).toMatch(
+    /negative reduced cost/,
+  );
+  const boast = { ...early.certificate, lowerBound: sound.total };
+  expect(checkCertificate(problem, { ...early, certificate: boast }).reason).toMatch(/lower bound/);
 });
 
 test('a bound is never above the total, and within a hair of it', () => {

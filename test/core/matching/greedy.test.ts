@@ -51,8 +51,8 @@ function worstLine(k: number, epsilon: number): number[] {
 
 test("Reingold & Tarjan's lines: greedy pays (4/3)·n^lg 1.5 − 1 times the optimum", () => {
   // Reingold & Tarjan, "On a greedy heuristic for complete matching", SIAM J. Comput. 10, 1981.
-  for (let k = 1; k <= 8; k++) {
-    const problem = plane(worstLine(k, 1e-7).map((x): [number, number] => [x, 0]));
+  for (let k = 1; k <= 12; k++) {
+    const problem = plane(worstLine(k, 1e-9).map((x): [number, number] => [x, 0]));
     const n = 2 ** k;
     const best = exactMatching(problem);
     expect(best.total).toBeCloseTo(n / 2, 6);

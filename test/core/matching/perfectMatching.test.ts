@@ -80,6 +80,25 @@ describe('the forms of the input', () => {
     }
   });
 
+  test('candidates, good or bad, do not change the optimum', () => {
+    const random = createRandom(19);
+    for (let round = 0; round < 60; round++) {
+      const n = 2 + 2 * (round % 7);
+      const table = Array.from({ length: n * n }, () => Math.floor(100 * random()));
+      const cost = (i: number, j: number): number => table[n * i + j];
+      const candidates = Array.from({ length: round % 9 }, (): [number, number] => {
+        const i = Math.floor(n * random());
+        return [i, (i + 1 + Math.floor((n - 1) * random())) % n];
+      });
+      const found = perfectMatching(n, cost, { candidates });
+      expect(found.total).toBe(bruteForce(n, cost));
+      expect(found.optimal).toBe(true);
+    }
+    expect(() => perfectMatching(4, () => 1, { candidates: [[0, 4]] })).toThrow(RangeError);
+    expect(() => perfectMatching(4, () => 1, { candidates: [[1, 1]] })).toThrow(RangeError);
+    expect(() => perfectMatching(4, () => 1, { candidates: [[0.5, 1]] })).toThrow(RangeError);
+  });
+
   test('a few hundred vertices under costs without geometry', () => {
     const random = createRandom(18);
     const n = 300;
