@@ -2,8 +2,8 @@ import type { Drawing } from './drawing/drawing.js';
 import type { Finding } from './finding.js';
 import type { Bounds } from './measure/bounds.js';
 
-/** Rounding of coordinates is no overhang. */
-const LEAST_OVERHANG_MM = 1e-6;
+/** Cutting at the edge of the page leaves ends that lie this near outside as they are. */
+const LEAST_OVERHANG_MM = 0.005;
 
 /** A warning where lines pass the edge of the page, with how far. */
 export function overhang(lines: Bounds, { widthMm, heightMm }: Drawing): Finding[] {

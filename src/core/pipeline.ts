@@ -137,7 +137,8 @@ export function writeAudited(ordered: Ordered, kind: 'svg' | 'gcode', showTravel
 /** The lines that a written text draws, by an independent reading of it. */
 function readBack(text: string, kind: 'svg' | 'gcode'): LineSet {
   if (kind === 'gcode') return linesOfProgram(readGcode(text).program);
-  const drawing = readDrawing(withoutTravel(text));
+  // Whatever was written is to be seen, past the edge of the page too.
+  const drawing = readDrawing(withoutTravel(text), { pageEdge: 'ignore' });
   return linesOfDrawing(drawing, planPens(drawing, 'layer'));
 }
 

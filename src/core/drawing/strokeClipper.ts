@@ -1,10 +1,16 @@
 import type { Work } from '../geometry/boxChain.js';
-import { cutByRegion, isInRegion } from '../geometry/cutByRegion.js';
+import { cutByRegion, EDGE_TOLERANCE_MM, isInRegion } from '../geometry/cutByRegion.js';
 import type { Region } from '../geometry/region.js';
 import type { Segments } from '../geometry/segments.js';
 
 /** About ten seconds: a drawing in earnest takes a fraction of one. */
 const MOST_WORK = 1e9;
+
+/**
+ * Lines this near outside the page are on its edge: a frame that was written with four decimals, as ours
+ * are, must not be lost on being read again.
+ */
+const PAGE_TOLERANCE_MM = 1e-3;
 
 /** What one kind of edge took away. */
 export interface Removed {
@@ -42,8 +48,8 @@ export class StrokeClipper {
     sums: Clipping,
     keep: Keep,
   ): void {
-    this.cut(segments, closed, dot, clip, sums.byClip, sums, (inside, insideClosed) =>
-      this.cut(inside, insideClosed, dot, this.page, sums.byPage, sums, keep),
+    this.cut(segments, closed, dot, clip, EDGE_TOLERANCE_MM, sums.byClip, sums, (inside, insideClosed) =>
+      this.cut(inside, insideClosed, dot, this.page, PAGE_TOLERANCE_MM, sums.byPage, sums, keep),
     );
   }
 
@@ -52,6 +58,7 @@ export class StrokeClipper {
     closed: boolean,
     dot: boolean,
     region: Region | null,
+    tolerance: number,
     removed: Removed,
     sums: Clipping,
     keep: Keep,
@@ -62,11 +69,12 @@ export class StrokeClipper {
     }
     if (dot) {
       const { data, offset } = segments;
-      if (isInRegion(region, data[offset[0]], data[offset[0] + 1], this.work)) keep(segments, closed);
+      if (isInRegion(region, data[offset[0]], data[offset[0] + 1], this.work, tolerance))
+        keep(segments, closed);
       else removed.strokes++;
       return;
     }
-    const cut = this.work.left < 0 ? null : cutByRegion(segments, closed, region, this.work);
+    const cut = this.work.left < 0 ? null : cutByRegion(segments, closed, region, this.work, tolerance);
     if (!cut) sums.gaveUp++;
     if (!cut || cut.kept === 'all') {
       keep(segments, closed);

@@ -61,8 +61,14 @@ export function cutByRegion(
 }
 
 /** Whether a dot is kept. */
-export function isInRegion(region: Region, x: number, y: number, work: Work): boolean {
-  return sideOf(region, x, y, EDGE_TOLERANCE_MM, work) >= 0;
+export function isInRegion(
+  region: Region,
+  x: number,
+  y: number,
+  work: Work,
+  tolerance = EDGE_TOLERANCE_MM,
+): boolean {
+  return sideOf(region, x, y, tolerance, work) >= 0;
 }
 
 function whole(): Cut {
