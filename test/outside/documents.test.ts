@@ -2,11 +2,15 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { readDrawing } from '../../src/core/index.ts';
 import { CHROMIUM, drawInBrowser, useBrowser } from '../support/browser.ts';
-import { anyDocument } from '../support/randomDocuments.ts';
+import { comparePictures, wrongPicture } from '../support/pixels.ts';
+import { anyDocument, withThinLines } from '../support/randomDocuments.ts';
 import { disagreement, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /** Groups, viewports, copies, conditions, styles and shapes put together by chance, read as Chromium shows them. */
-const COUNT = 50;
+const COUNT = 500;
+const PICTURES = 40;
+/** Share of the ink. */
+const TOLERANCE = 0.02;
 const ALLOWED = { length: 1e-4, boxMm: 0.005 };
 const browser = useBrowser();
 
@@ -26,5 +30,19 @@ describe.runIf(CHROMIUM !== null)('documents put together by chance', () => {
     expect(Math.min(strokes, copies)).toBeGreaterThan(COUNT);
     expect(wrong).toEqual([]);
     expect(Math.max(...outside.map(({ copiesDiffer }) => copiesDiffer))).toBeLessThan(1e-3);
+  });
+
+  test('are painted as a browser paints them: dashes, clip paths and viewports too', async () => {
+    const texts = fc.sample(anyDocument, { numRuns: PICTURES, seed: 12 }).map(withThinLines);
+    const jobs = texts.map((text, i) => ({ name: `random ${i}`, text, drawing: readDrawing(text) }));
+    const found = await comparePictures(browser(), jobs);
+    const wrong = found.flatMap((one, i) => {
+      const difference = wrongPicture(one, TOLERANCE);
+      return difference ? [[jobs[i].name, difference, texts[i]]] : [];
+    });
+    const inked = found.filter(({ inkPx }) => inkPx > 0).length;
+    console.log(`${PICTURES} random documents painted, ${inked} with ink`);
+    expect(inked).toBeGreaterThan(PICTURES / 2);
+    expect(wrong).toEqual([]);
   });
 });

@@ -40,18 +40,20 @@ async ({ original, ours, widthMm, heightMm, pxPerMm, strokesOnly, keepPicture })
   }
 
   /**
-   * An image has a size in whole px. A drawing whose size is none is given the picture's own: by its
-   * viewBox, or by one that says what its units are without.
+   * An image has a size in whole px, and none by a style. A drawing of another size is given the picture's
+   * own: by its viewBox, or by one that says what its units are without.
    */
   function prepared() {
     const parsed = new DOMParser().parseFromString(original, 'image/svg+xml');
     const root = parsed.documentElement;
     const sidesPx = [widthMm, heightMm].map((mm) => (mm * 96) / 25.4);
-    if (sidesPx.some((px) => Math.abs(px - Math.round(px)) > 1e-6)) {
+    const byStyle = root.style.width !== '' || root.style.height !== '';
+    if (byStyle || sidesPx.some((px) => Math.abs(px - Math.round(px)) > 1e-6)) {
       if (!root.hasAttribute('viewBox')) {
         root.setAttribute('viewBox', `0 0 ${sidesPx.join(' ')}`);
         root.setAttribute('preserveAspectRatio', 'none');
       }
+      for (const side of ['width', 'height']) root.style.removeProperty(side);
       root.setAttribute('width', widthPx);
       root.setAttribute('height', heightPx);
     }
