@@ -173,11 +173,14 @@ export class Cascade {
     element: SvgElement,
     copy: CopyAround | null,
   ): void {
-    if (keyword === 'revert-layer') return; // What is weaker stands already.
+    if (keyword === 'revert-layer') return; // From a var(): what is weaker stands already.
     const isInherited = PROPERTIES.get(name)?.inherited === true;
     specified.styled.delete(name);
     if (isInherited && keyword === 'initial') specified.set(name, keyword);
-    else if (!isInherited && keyword === 'inherit') this.inherit(specified, name, element, copy);
+    else if (name === 'transform-origin' && (keyword === 'initial' || keyword === 'unset')) {
+      // Its initial value is the middle: that it is the corner here is a rule of browsers' own.
+      specified.set(name, '50% 50%');
+    } else if (!isInherited && keyword === 'inherit') this.inherit(specified, name, element, copy);
     else specified.delete(name);
   }
 

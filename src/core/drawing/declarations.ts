@@ -29,9 +29,28 @@ const LONGEST_NAME = 200;
  */
 export function readDeclarations(text: string, misread: (what: Misread) => void): Declaration[] {
   const declarations: Declaration[] = [];
-  for (const part of splitOutside(withoutComments(text), ';'))
-    declarations.push(...readDeclaration(part, misread, true));
-  return declarations;
+  let goesBack = false;
+  for (const part of splitOutside(withoutComments(text), ';')) {
+    for (const declaration of readDeclaration(part, misread, true)) {
+      declarations.push(declaration);
+      goesBack ||= isBack(declaration);
+    }
+  }
+  return goesBack ? withoutLayer(declarations) : declarations;
+}
+
+function isBack({ kind, value }: Declaration): boolean {
+  return kind === 'wide' && value === 'revert-layer';
+}
+
+/** A style attribute is a layer of its own, which `revert-layer` goes back before (CSS Cascade Level 5). */
+function withoutLayer(declarations: readonly Declaration[]): Declaration[] {
+  return declarations.filter((d, i) => {
+    const later = declarations.slice(i).filter(({ name }) => name === d.name);
+    const earlier = declarations.slice(0, i).filter(({ name }) => name === d.name);
+    const isGone = later.some((other) => isBack(other) && (other.important || !d.important));
+    return !isGone && !(!d.important && earlier.some((other) => isBack(other) && other.important));
+  });
 }
 
 /** One declaration as written, comments included; none where it is not read or of another property. */

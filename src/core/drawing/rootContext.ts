@@ -26,7 +26,7 @@ export function rootContext(session: Session): Root {
   const unitMm = 25.4 / units;
   const specified = session.cascade.specifiedOn(root);
   const viewBox = viewBoxOf(session, root);
-  const [width, height] = [specified.get('width') ?? null, specified.get('height') ?? null];
+  const [width, height] = [rootSize(session, specified, 'width'), rootSize(session, specified, 'height')];
   const fontSize = rootFontSize(session, specified, units, `${width} ${height}`);
   const page = pageSize(width, height, viewBox, units, fontSize);
   if (page.physical && !viewBox && pxPerInch === null) {
@@ -61,6 +61,13 @@ export function rootContext(session: Session): Root {
   // The viewport is in mm here, so that a viewBox in mm comes out with a scale of exactly 1.
   const rectangle = { x: 0, y: 0, width: page.widthMm, height: page.heightMm };
   return { page, inside: contextInside({ ...styled, clip }, map, rectangle, viewBox, aspect) };
+}
+
+/** A size that style takes back, or sets to `auto`, is still the natural size of the drawing. */
+function rootSize(session: Session, specified: Specified, name: 'width' | 'height'): string | null {
+  const text = specified.get(name);
+  if (text !== undefined && text.trim().toLowerCase() !== 'auto') return text;
+  return session.tree.attributeOf(session.tree.root, name);
 }
 
 /** Asked only where the size is in units of the font: styles need the page's size, and it theirs. */

@@ -107,36 +107,49 @@ function isPlain(selector: Selector): boolean {
   );
 }
 
-/** Of one property: what stands, in which layer, and what stood before that layer. */
-interface Standing {
-  readonly declaration: Declaration | null;
-  readonly layer: Layer;
-  readonly before: Declaration | null;
-}
+/** What stands for one property, layer by layer: the last entry is that of the strongest layer so far. */
+type Standing = { readonly layer: Layer; declaration: Declaration | null }[];
 
 /** Layers turn round for what is important; specificity and order come after them. */
 function sorted(rules: Rule[]): Declaration[] {
-  const strongest = new Map<string, Standing>();
-  for (const important of [false, true]) {
-    const sign = important ? -1 : 1;
-    rules.sort(
-      (a, b) =>
-        sign * (a.layer.rank - b.layer.rank) ||
-        a.selector.specificity - b.selector.specificity ||
-        a.order - b.order,
-    );
-    for (const { declarations, layer } of rules) {
-      for (const d of declarations) {
-        if (d.important !== important) continue;
-        const slot = important ? `!${d.name}` : d.name;
-        const standing = strongest.get(slot);
-        const before = standing?.layer === layer ? standing.before : (standing?.declaration ?? null);
-        const goesBack = d.kind === 'wide' && d.value === 'revert-layer';
-        // Taken out first, so that the order of the list is that of the cascade.
-        strongest.delete(slot);
-        strongest.set(slot, { declaration: goesBack ? before : d, layer, before });
-      }
+  const plain = new Map<string, Standing>();
+  cascaded(rules, false, plain, (standing) => standing.pop());
+  const important = new Map<string, Standing>();
+  cascaded(rules, true, important, (standing, { name }, layer) => {
+    // Back before the same layer in what is not important, and nothing important stands.
+    standing.length = 0;
+    const weaker = plain.get(name)?.filter((entry) => entry.layer.rank < layer.rank);
+    if (weaker) plain.set(name, weaker);
+  });
+  return [...plain.values(), ...important.values()].flatMap(
+    (standing) => standing[standing.length - 1]?.declaration ?? [],
+  );
+}
+
+/** `goBack` takes a layer away again, the last of those that stand (CSS Cascade Level 5, "revert-layer"). */
+function cascaded(
+  rules: Rule[],
+  important: boolean,
+  strongest: Map<string, Standing>,
+  goBack: (standing: Standing, declaration: Declaration, layer: Layer) => void,
+): void {
+  const sign = important ? -1 : 1;
+  rules.sort(
+    (a, b) =>
+      sign * (a.layer.rank - b.layer.rank) ||
+      a.selector.specificity - b.selector.specificity ||
+      a.order - b.order,
+  );
+  for (const { declarations, layer } of rules) {
+    for (const d of declarations) {
+      if (d.important !== important) continue;
+      const standing = strongest.get(d.name) ?? [];
+      // Taken out first, so that the order of the list is that of the cascade.
+      strongest.delete(d.name);
+      strongest.set(d.name, standing);
+      if (standing[standing.length - 1]?.layer !== layer) standing.push({ layer, declaration: null });
+      if (d.kind === 'wide' && d.value === 'revert-layer') goBack(standing, d, layer);
+      else standing[standing.length - 1].declaration = d;
     }
   }
-  return [...strongest.values()].flatMap(({ declaration }) => declaration ?? []);
 }
