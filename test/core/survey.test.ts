@@ -50,4 +50,39 @@ describe('survey', () => {
     expect(surveyOf(specs, 0.25).nearMisses.count).toBe(0);
     expect(surveyTable(surveyOf(specs))).toMatch(/1 nearly meet, gaps of 0\.2000 mm; first at \(10, 0\)/);
   });
+
+  test('and ends that stop just short of the middle of a line or curve', () => {
+    const specs: StrokeSpec[] = [
+      {
+        line: [
+          [10, 10],
+          [50, 10],
+        ],
+      },
+      {
+        line: [
+          [30, 10.2],
+          [30, 40],
+        ],
+      },
+      { circle: [70, 30, 10] },
+      {
+        line: [
+          [70, 19.7],
+          [70, 5],
+        ],
+      },
+      {
+        line: [
+          [10, 60],
+          [50, 60],
+        ],
+      },
+    ];
+    const { nearMisses } = surveyOf(specs);
+    expect(nearMisses.count).toBe(2);
+    expect(nearMisses.leastMm).toBeCloseTo(0.2, 9);
+    expect(nearMisses.greatestMm).toBeCloseTo(0.3, 3);
+    expect(surveyOf(specs, 0.35).nearMisses.count).toBe(0);
+  });
 });
