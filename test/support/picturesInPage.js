@@ -60,8 +60,10 @@ async ({ original, ours, widthMm, heightMm, pxPerMm, strokesOnly, keepPicture })
     if (strokesOnly) {
       const sheet = parsed.createElementNS(SVG, 'style');
       sheet.textContent =
-        '*{fill:none!important;marker:none!important}text,image,foreignObject{display:none!important}';
+        '*{fill:none!important;marker:none!important;background:none!important}text,image{display:none!important}';
       root.append(sheet);
+      // A canvas with one in it cannot be read any more.
+      for (const foreign of parsed.querySelectorAll('foreignObject')) foreign.remove();
     }
     return new XMLSerializer().serializeToString(parsed);
   }
