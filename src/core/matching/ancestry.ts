@@ -7,7 +7,7 @@ import type { Forest } from './forest.js';
  */
 export interface Ancestry {
   /** Blossoms, outer ones before those inside them. */
-  readonly blossoms: readonly number[];
+  readonly blossoms: number[];
   /** By vertex: the innermost blossom around it, or −1. */
   readonly inner: Int32Array;
   /** By node. */
@@ -18,34 +18,48 @@ export interface Ancestry {
   readonly zSum: Float64Array;
 }
 
-/** Reads the forest between searches; linear time. */
-export function nestsOf(f: Forest): Ancestry {
-  const { n, set, node } = f;
+/**
+ * Room for the nests of a forest, to be read anew after every change: what is thrown away between rounds takes
+ * the code compiled for it along in some engines.
+ */
+export function roomForNests(f: Forest): Ancestry {
   const nodes = f.z.length;
-  const nests = {
-    blossoms: [] as number[],
-    inner: new Int32Array(n).fill(-1),
+  return {
+    blossoms: [],
+    inner: new Int32Array(f.n),
     outermost: new Int32Array(nodes),
-    parent: new Int32Array(nodes).fill(-1),
+    parent: new Int32Array(nodes),
     depth: new Int32Array(nodes),
     skip: new Int32Array(nodes),
     zSum: new Float64Array(nodes),
   };
+}
+
+/** Reads the forest between searches; linear time. */
+export function readNests(f: Forest, nests: Ancestry): void {
+  const { n, set, node } = f;
   const { blossoms } = nests;
+  blossoms.length = 0;
+  nests.inner.fill(-1);
   let known = 0;
   for (let v = 0; v < n; v++) {
     const top = node[set[v]];
     if (top < n || f.firstVertex[top] !== v) continue;
-    nests.outermost[top] = top;
-    nests.skip[top] = top;
-    nests.zSum[top] = f.z[top];
-    blossoms.push(top);
+    enterOutermost(f, nests, top);
     while (known < blossoms.length) enterChildren(f, nests, blossoms[known++]);
   }
-  return nests;
 }
 
-function enterChildren(f: Forest, nests: Ancestry & { blossoms: number[] }, blossom: number): void {
+function enterOutermost(f: Forest, nests: Ancestry, top: number): void {
+  nests.outermost[top] = top;
+  nests.parent[top] = -1;
+  nests.depth[top] = 0;
+  nests.skip[top] = top;
+  nests.zSum[top] = f.z[top];
+  nests.blossoms.push(top);
+}
+
+function enterChildren(f: Forest, nests: Ancestry, blossom: number): void {
   const { n, z, firstChild, sibling } = f;
   const { blossoms, inner, outermost, parent, depth, skip, zSum } = nests;
   const far = skip[blossom];

@@ -1,17 +1,16 @@
-import { nestsOf } from './ancestry.js';
+import { readNests, roomForNests } from './ancestry.js';
 import { candidateEdges } from './candidates.js';
 import { largestCost, powerScale } from './cost.js';
-import { certificateOf, matesOf, tallies } from './extract.js';
+import { certificateOf, matesOf, provenTotal } from './extract.js';
 import { Forest } from './forest.js';
 import { addEdges, buildGraph, EdgeList } from './graph.js';
 import { interrupted } from './interrupted.js';
 import { IntegerCosts, type Layout, layOut } from './layout.js';
 import { exposedSets, matchExposed, type Watch } from './passes.js';
-import { priceAllPairs } from './pricing.js';
+import { Pricer } from './pricing.js';
 import type { CertifiedMatching, MatchingProblem } from './problem.js';
 import { makeRoom } from './repair.js';
 import { contractPlaces, firstDuals, raiseExposed } from './start.js';
-import { totalOf } from './total.js';
 
 /** Bits of the largest cost; the rest of 53 is room for duals to grow beyond it. Fewer where that is too little. */
 const COST_BITS = [43, 33, 23, 13];
@@ -59,17 +58,21 @@ function solve(
   raiseExposed(f);
   let exposed = exposedSets(f);
   const watch = watchOf(options, exposed.length);
+  const nests = roomForNests(f);
+  const missed = new EdgeList();
+  const pricer = new Pricer(f, layout, costs, nests, missed);
   for (;;) {
     if (!matchExposed(f, exposed, watch)) return 'stopped';
-    const nests = nestsOf(f);
-    const missed = new EdgeList();
-    priceAllPairs(f, layout, costs, nests, missed);
+    readNests(f, nests);
+    missed.count = 0;
+    pricer.priceAllPairs();
     if (missed.count === 0) {
       const certificate = certificateOf(f, layout, costs.scale, nests);
       const mate = matesOf(f, layout);
-      if (!tallies(certificate, mate, layout, costs)) return 'inexact';
+      const total = provenTotal(certificate, mate, layout.problem);
+      if (total === null) return 'inexact';
       options.onProgress?.(1);
-      return { mate, total: totalOf(layout.problem, mate), certificate, optimal: true };
+      return { mate, total, certificate, optimal: true };
     }
     if (watch.stop()) return 'stopped';
     exposed = [];

@@ -20,35 +20,20 @@ interface Summary {
 }
 
 /**
- * Adds to `edges` pairs of the complete graph with negative slack, and leaves it empty only where there are none.
- * Pairs of boxes are passed over where even the nearest and highest of their vertices have slack; special
- * vertices are priced one by one.
+ * Looks for pairs of the complete graph with negative slack: `priceAllPairs` adds them to `edges`, which stays empty
+ * only where there are none. Pairs of boxes are passed over where even the nearest and highest of their vertices
+ * have slack; special vertices are priced one by one.
  *
  * A pair that had slack in an earlier round is looked at again only where one of its ends has risen since. While
  * both lie in one set their slack does not change: π rises or falls by t in both and z by 2t. While they lie in
  * two, it falls only where π rises in one of them, that is while that one is grown, and scanned (scan.ts).
+ *
+ * One pricer serves all rounds, and its loops are made of small steps: code once compiled then stays so.
  */
-export function priceAllPairs(
-  f: Forest,
-  layout: Layout,
-  costs: IntegerCosts,
-  nests: Ancestry,
-  edges: EdgeList,
-): void {
-  const value = new Float64Array(f.n);
-  for (let v = 0; v < f.n; v++) value[v] = f.pi[v] + f.off[f.set[v]];
-  const pricer = new Pricer(layout, costs, nests, value, f.risen.slice(), edges);
-  // What stays behind for the next round is marked again on the way.
-  f.risen.fill(0);
-  if (layout.tree.root >= 0) pricer.walkBoxes(f.risen);
-  for (let s = layout.placed; s < f.n; s++) pricer.special(s);
-}
-
-/**
- * The walk over pairs of boxes, a step at a time: a function called often is compiled once and stays so through
- * all rounds, a long loop is compiled anew in each.
- */
-class Pricer {
+export class Pricer {
+  private readonly n: number;
+  private readonly value: Float64Array;
+  private readonly risen: Uint8Array;
   private readonly places: Summary;
   private readonly boxes: Summary;
   private readonly added: Uint8Array;
@@ -58,22 +43,44 @@ class Pricer {
   private count = 0;
 
   constructor(
+    private readonly f: Forest,
     private readonly layout: Layout,
     private readonly costs: IntegerCosts,
     private readonly nests: Ancestry,
-    private readonly value: Float64Array,
-    risen: Uint8Array,
     private readonly edges: EdgeList,
   ) {
+    this.n = layout.n;
+    this.value = new Float64Array(layout.n);
+    this.risen = new Uint8Array(layout.n);
     this.added = new Uint8Array(layout.n);
-    this.places = placeSummary(layout, nests, value, risen);
-    this.boxes = boxSummary(layout, nests, this.places);
+    const places = layout.tree.x.length;
+    this.places =
+      places === layout.placed
+        ? { highest: this.value, blossom: nests.inner, risen: this.risen }
+        : roomForSummary(places);
+    this.boxes = roomForSummary(layout.tree.root + 1);
+  }
+
+  /** Expects the nests as they are now. */
+  priceAllPairs(): void {
+    const { f, layout, value } = this;
+    for (let v = 0; v < this.n; v++) value[v] = f.pi[v] + f.off[f.set[v]];
+    this.risen.set(f.risen);
+    // What stays behind for the next round is marked again on the way.
+    f.risen.fill(0);
+    this.added.fill(0);
+    if (layout.tree.root >= 0) this.walkBoxes(f.risen);
+    for (let s = layout.placed; s < this.n; s++) this.special(s);
   }
 
   /** Marks in `behind` the vertices that may have more such pairs than this round takes. */
-  walkBoxes(behind: Uint8Array): void {
+  private walkBoxes(behind: Uint8Array): void {
     const { stack, layout } = this;
     const { root } = layout.tree;
+    if (this.places.highest !== this.value) {
+      for (let p = 0; p < layout.tree.x.length; p++) this.summarisePlace(p);
+    }
+    for (let node = 0; node <= root; node++) this.summariseBox(node);
     stack.push(root, root);
     while (stack.length > 0) {
       const b = stack.pop() as number;
@@ -82,6 +89,27 @@ class Pricer {
       if (this.count > BATCH - LEAF * LEAF) this.settle(behind);
     }
     this.settle(behind);
+  }
+
+  private summarisePlace(p: number): void {
+    const { first } = this.layout;
+    const vertices = { highest: this.value, blossom: this.nests.inner, risen: this.risen };
+    take(this.places, p, vertices, first[p]);
+    for (let v = first[p] + 1; v < first[p + 1]; v++) join(this.nests, this.places, p, vertices, v);
+  }
+
+  private summariseBox(node: number): void {
+    const { tree } = this.layout;
+    const { nests, boxes, places } = this;
+    if (node >= tree.leaves) {
+      take(boxes, node, boxes, tree.left[node]);
+      if (tree.right[node] >= 0) join(nests, boxes, node, boxes, tree.right[node]);
+      return;
+    }
+    const start = LEAF * node;
+    const end = Math.min(tree.x.length, start + LEAF);
+    take(boxes, node, places, start);
+    for (let p = start + 1; p < end; p++) join(nests, boxes, node, places, p);
   }
 
   private boxPair(a: number, b: number): void {
@@ -214,46 +242,12 @@ class Pricer {
   }
 }
 
-function placeSummary(layout: Layout, nests: Ancestry, value: Float64Array, risen: Uint8Array): Summary {
-  const { first } = layout;
-  const places = first.length - 1;
-  if (places === layout.placed) return { highest: value, blossom: nests.inner, risen };
-  const highest = new Float64Array(places);
-  const blossom = new Int32Array(places);
-  const anyRisen = new Uint8Array(places);
-  for (let p = 0; p < places; p++) {
-    highest[p] = value[first[p]];
-    blossom[p] = nests.inner[first[p]];
-    anyRisen[p] = risen[first[p]];
-    for (let v = first[p] + 1; v < first[p + 1]; v++) {
-      if (value[v] > highest[p]) highest[p] = value[v];
-      blossom[p] = commonBlossom(nests, blossom[p], nests.inner[v]);
-      anyRisen[p] |= risen[v];
-    }
-  }
-  return { highest, blossom, risen: anyRisen };
-}
-
-function boxSummary(layout: Layout, nests: Ancestry, places: Summary): Summary {
-  const { tree } = layout;
-  const nodes = tree.root + 1;
-  const boxes = {
-    highest: new Float64Array(nodes),
-    blossom: new Int32Array(nodes),
-    risen: new Uint8Array(nodes),
+function roomForSummary(groups: number): Summary {
+  return {
+    highest: new Float64Array(groups),
+    blossom: new Int32Array(groups),
+    risen: new Uint8Array(groups),
   };
-  for (let node = 0; node < nodes; node++) {
-    if (node < tree.leaves) {
-      const start = LEAF * node;
-      const end = Math.min(tree.x.length, start + LEAF);
-      take(boxes, node, places, start);
-      for (let p = start + 1; p < end; p++) join(nests, boxes, node, places, p);
-    } else {
-      take(boxes, node, boxes, tree.left[node]);
-      if (tree.right[node] >= 0) join(nests, boxes, node, boxes, tree.right[node]);
-    }
-  }
-  return boxes;
 }
 
 function take(into: Summary, i: number, from: Summary, j: number): void {
