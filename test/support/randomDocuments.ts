@@ -84,7 +84,7 @@ const viewport = allOf([
   some('x', LENGTHS),
   some('y', LENGTHS),
   some('width', ['60', '50%', '2cm', '0', 'auto', '8em']),
-  some('height', ['40', '80%', '100%', '-5%', '3em']),
+  some('height', ['40', '80%', '100%', '3em']),
   viewBox,
   aspect,
   some('overflow', ['visible', 'hidden']),

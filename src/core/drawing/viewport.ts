@@ -34,7 +34,8 @@ export function enterViewport(
   const at = (name: string, axis: 'x' | 'y'): number =>
     lengthOf(session, element, specified, name, axis, style, outer) ?? 0;
   const size = (name: 'width' | 'height', axis: 'x' | 'y'): number => {
-    const text = useSize?.[name] ?? specified.get(name) ?? 'auto';
+    const ofUse = useSize?.[name]?.trim() ?? 'auto';
+    const text = ofUse === 'auto' ? (specified.get(name) ?? 'auto') : ofUse;
     const length = text.trim() === 'auto' ? null : readLength(text);
     if (!length && text.trim() !== 'auto') {
       session.report('length-error', element, { attribute: name, found: shown(text) });

@@ -116,6 +116,8 @@ describe('use', () => {
       '<defs><svg id="v" x="1" width="10" height="10" viewBox="0 0 10 10"><path d="M1 1h1"/></svg></defs>';
     expectSame(`${svg}<use href="#v"/>`, '<path d="M2 1h1"/>');
     expectSame(`${svg}<use href="#v" width="20" height="20"/>`, '<path d="M3 2h2"/>');
+    // SVG 2, "The use element": auto is as if the use said nothing.
+    expectSame(`${svg}<use href="#v" width="auto" height="20"/>`, '<path d="M2 7h1"/>');
   });
 
   test('in use, eight deep: 2⁸ copies', () => {
