@@ -117,7 +117,7 @@ describe('use', () => {
     expectSame(`${svg}<use href="#v"/>`, '<path d="M2 1h1"/>');
     expectSame(`${svg}<use href="#v" width="20" height="20"/>`, '<path d="M3 2h2"/>');
     // SVG 2, "The use element": auto is as if the use said nothing.
-    expectSame(`${svg}<use href="#v" width="auto" height="20"/>`, '<path d="M2 7h1"/>');
+    expectSame(`${svg}<use href="#v" width="auto" height="20"/>`, '<path d="M2 6h1"/>');
   });
 
   test('in use, eight deep: 2⁸ copies', () => {
