@@ -1,6 +1,6 @@
 import { type Affine, determinant, multiply, scaling, translation } from '../geometry/affine.js';
 import { Outline } from '../geometry/outline.js';
-import { bothOf, NOWHERE, type Region } from '../geometry/region.js';
+import { bothOf, NOWHERE, outlinesIn, type Region } from '../geometry/region.js';
 import { traceBasicShape } from './basicShape.js';
 import { readClipValue } from './clipValue.js';
 import { INITIAL_STYLE } from './computedStyle.js';
@@ -16,10 +16,14 @@ import { transformOf } from './transformOf.js';
 /** What a clip path costs to build, in steps of `Work` per segment. */
 const SEGMENT_WORK = 50;
 
-/** And beyond its segments. */
-const CLIP_WORK = 1000;
+/** And beyond its segments; more where it is asked for by another, since there are no billions of these. */
+const CLIP_WORK = 2000;
+const INNER_CLIP_WORK = 10_000;
 /** Clip paths clipped by clip paths, deeper than any drawing in earnest. */
 const MOST_DEEP = 64;
+
+/** Shapes in one clip. */
+const MOST_PARTS = 50_000;
 
 /** A clip that cannot be evaluated. */
 class NotRead extends Error {}
@@ -54,7 +58,8 @@ export class ClipRegions {
   /** The last one of each clipPath: many elements in a row share one in the same user space. */
   private readonly known = new Map<SvgElement, Known>();
   private readonly active = new Set<SvgElement>();
-  private asksForBox = false;
+  /** What is being evaluated depends on more than the map: on a box, or on where a loop was entered. */
+  private isPeculiar = false;
 
   constructor(private readonly session: Session) {}
 
@@ -77,6 +82,7 @@ export class ClipRegions {
       throw error;
     } finally {
       this.active.clear();
+      this.isPeculiar = false;
     }
   }
 
@@ -128,14 +134,16 @@ export class ClipRegions {
   }
 
   private clipPathRegion(clipPath: SvgElement, applied: Applied): Region | null {
-    if (this.active.has(clipPath)) throw new Loop(this.latestSince(clipPath));
-    this.spend(CLIP_WORK);
-    if (this.active.size > MOST_DEEP) throw new NotRead();
+    if (this.active.has(clipPath)) {
+      this.isPeculiar = true;
+      throw new Loop(this.latestSince(clipPath));
+    }
     const known = this.known.get(clipPath);
-    if (known && this.active.size === 0 && known.map.every((v, k) => v === applied.map[k]))
-      return known.region;
-    const before = this.asksForBox;
-    this.asksForBox = false;
+    if (known?.map.every((v, k) => v === applied.map[k])) return known.region;
+    this.spend(this.active.size > 0 ? INNER_CLIP_WORK : CLIP_WORK);
+    if (this.active.size > MOST_DEEP) throw new NotRead();
+    const before = this.isPeculiar;
+    this.isPeculiar = false;
     this.active.add(clipPath);
     let region: Region | null;
     try {
@@ -143,9 +151,17 @@ export class ClipRegions {
     } finally {
       this.active.delete(clipPath);
     }
-    if (!this.asksForBox && this.active.size === 0) this.known.set(clipPath, { map: applied.map, region });
-    this.asksForBox ||= before;
+    if (region) this.spend(this.sizeOf(region));
+    if (!this.isPeculiar) this.known.set(clipPath, { map: applied.map, region });
+    this.isPeculiar ||= before;
     return region;
+  }
+
+  /** Shared parts multiply where clip paths ask for one another twice. */
+  private sizeOf(region: Region): number {
+    const size = outlinesIn(region, MOST_PARTS);
+    if (size >= MOST_PARTS) throw new NotRead();
+    return size;
   }
 
   private evaluate(clipPath: SvgElement, applied: Applied): Region | null {
@@ -236,7 +252,7 @@ export class ClipRegions {
   }
 
   private boundsOf({ element, context, box }: Applied, withStrokes = false): Bounds {
-    this.asksForBox = true;
+    this.isPeculiar = true;
     if (box) return box;
     this.spend(CLIP_WORK);
     const bounds = boundsInside(this.session, element, context, withStrokes);

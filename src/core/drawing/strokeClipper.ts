@@ -3,8 +3,8 @@ import { cutByRegion, EDGE_TOLERANCE_MM, isInRegion } from '../geometry/cutByReg
 import type { Region } from '../geometry/region.js';
 import type { Segments } from '../geometry/segments.js';
 
-/** About ten seconds: a drawing in earnest takes a fraction of one. */
-const MOST_WORK = 1e9;
+/** Some seconds: a drawing in earnest takes a fraction of one. */
+const MOST_WORK = 5e8;
 
 /**
  * Lines this near outside the page are on its edge: a frame that was written with four decimals, as ours

@@ -45,3 +45,14 @@ export function eachOutline(region: Region, visit: (outline: Outline) => void): 
   if (region.kind === 'outline') visit(region.outline);
   else for (const part of region.parts) eachOutline(part, visit);
 }
+
+/** How many outlines and combinations the region is made of, those that are shared counted each time; at most `most`. */
+export function outlinesIn(region: Region, most: number): number {
+  if (region.kind === 'outline') return 1;
+  let count = 1;
+  for (const part of region.parts) {
+    if (count >= most) return most;
+    count += outlinesIn(part, most - count);
+  }
+  return Math.min(count, most);
+}
