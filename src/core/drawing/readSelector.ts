@@ -48,12 +48,29 @@ export function readSelectorList(text: string, scope: SelectorScope): Selector[]
 /** One selector of Selectors Level 4, read with css-tree; null where it is wrong or not read here. */
 export function readSelector(text: string, scope: SelectorScope): Selector | null {
   if (text.length > LONGEST) return null;
+  const plain = scope.nesting === null && !scope.namespaces.has('') ? readPlain(text.trim()) : null;
+  if (plain) return plain;
   try {
     return new SelectorReader(scope).complex(parse(text, { context: 'selector' }), scope.nesting !== null);
   } catch {
     // The parser throws for what is no selector, as does what is not read here.
     return null;
   }
+}
+
+const PLAIN = /^(?:([a-z][\w-]*)|\.([a-z_][\w-]*)|#([a-z_][\w-]*))$/i;
+
+/** What most selectors of drawings are, one type, class or id, without the trouble of parsing. */
+function readPlain(text: string): Selector | null {
+  const match = PLAIN.exec(text);
+  if (!match) return null;
+  const [, type, name, id] = match;
+  const [test, specificity]: [Test, number] = type
+    ? [{ kind: 'type', name: type }, TYPE_WEIGHT]
+    : name
+      ? [{ kind: 'class', name }, CLASS_WEIGHT]
+      : [{ kind: 'id', id }, ID_WEIGHT];
+  return { compounds: [[test]], combinators: [], specificity };
 }
 
 class SelectorReader {

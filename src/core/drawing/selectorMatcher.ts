@@ -19,7 +19,7 @@ export class SelectorMatcher {
 
   constructor(private readonly tree: SvgTree) {
     this.siblings = new Siblings(tree.elementCount);
-    this.most = 20_000_000 + 200 * tree.elementCount;
+    this.most = 20_000_000 + 50 * tree.elementCount;
   }
 
   matches(selector: Selector, element: SvgElement, top: SvgElement | null): boolean {

@@ -36,6 +36,9 @@ export interface CopyOf {
   readonly outer: CopyOf | null;
 }
 
+/** Least x and y, greatest x and y; null where it is empty, 'unknown' where it cannot be told. */
+export type Box = readonly [number, number, number, number] | null | 'unknown';
+
 type Values = Readonly<Record<string, string | number>>;
 
 /** One reading of one drawing: what it has gathered so far. */
@@ -48,6 +51,10 @@ export class Session {
   readonly layers: Layer[] = [];
   readonly places: Place[] = [];
   elementCount = 0;
+  /** Boxes that transforms were measured by, of elements that are in no copy. */
+  readonly boxes = new Map<SvgElement, Box>();
+  /** How many boxes are being measured inside one another. */
+  measuring = 0;
   private readonly colourNumbers = new Map<string, number>();
   /** By element number, plus one; 0 where the element has no place yet. */
   private readonly placeNumbers: Uint32Array;

@@ -35,6 +35,12 @@ const NO_STYLE: ReadonlySet<string> = new Set([
   ...['starting-style', 'position-try', 'viewport', '-ms-viewport'],
 ]);
 
+/** Rules whose selectors are not read, after which no more are tried: each costs more than one that is. */
+const MOST_WRONG = 10_000;
+
+/** Layers within layers in one name. */
+const MOST_LEVELS = 16;
+
 /** Where in the sheet a block stands. */
 interface Scope {
   readonly layer: Layer;
@@ -48,6 +54,7 @@ export class SheetReader {
   private readonly top: Layer = newLayer();
   private unnamed = 0;
   private order = 0;
+  private wrong = 0;
   private namespaces = new Map<string, string>();
 
   constructor(private readonly findings: SheetFindings) {}
@@ -96,9 +103,13 @@ export class SheetReader {
   }
 
   private rule(prelude: string, items: readonly StyleItem[], at: number, scope: Scope): void {
-    const selectors = readSelectorList(prelude, { namespaces: this.namespaces, nesting: scope.nesting });
+    const names = { namespaces: this.namespaces, nesting: scope.nesting };
+    const selectors = this.wrong < MOST_WRONG ? readSelectorList(prelude, names) : null;
     if (selectors) this.items(items, { ...scope, nesting: selectors });
-    else this.findings.unread(prelude, at);
+    else {
+      this.wrong++;
+      this.findings.unread(prelude, at);
+    }
   }
 
   private atRule(
@@ -120,7 +131,7 @@ export class SheetReader {
         within(this.supports(prelude));
         break;
       case 'layer':
-        this.layer(prelude, items, scope);
+        this.layer(prelude, items, scope, at);
         break;
       case 'import':
         this.findings.elsewhere(prelude, at);
@@ -149,8 +160,12 @@ export class SheetReader {
     return supportHolds(prelude, declared, selects);
   }
 
-  private layer(prelude: string, items: readonly StyleItem[] | null, scope: Scope): void {
+  private layer(prelude: string, items: readonly StyleItem[] | null, scope: Scope, at: number): void {
     const names = prelude === '' ? [` ${this.unnamed++}`] : prelude.split(',').map((name) => name.trim());
+    if (names.some((name) => name.split('.', MOST_LEVELS + 1).length > MOST_LEVELS)) {
+      this.findings.unread(`@layer ${prelude.slice(0, 100)}`, at);
+      return;
+    }
     const layers = names.map((name) => name.split('.').reduce(layerIn, scope.layer));
     if (items && layers.length === 1) this.items(items, { ...scope, layer: layers[0] });
   }

@@ -7,11 +7,11 @@ import type { SvgElement, SvgTree } from './svgTree.js';
 /** The style sheets of a drawing as one; null where it has none that say anything about lines. */
 export function sheetsOf(tree: SvgTree, log: FindingLog): StyleSheet | null {
   if (tree.sheets.length === 0) return null;
-  let text = '';
   let element: SvgElement = tree.sheets[0];
+  let lineStarts: readonly number[] = [0];
   const place = (at: number): (() => Place) => {
-    const [here, within] = [element, text.slice(0, at)];
-    return () => placeIn(tree.placeOf(here), within);
+    const [here, starts] = [element, lineStarts];
+    return () => placeIn(tree.placeOf(here), starts, at);
   };
   const sheet = new StyleSheet({
     unread: (rule, at) => log.add('style-rule-not-read', place(at), { rule: oneLine(rule) }),
@@ -26,7 +26,8 @@ export function sheetsOf(tree: SvgTree, log: FindingLog): StyleSheet | null {
     }
     const media = tree.attributeOf(element, 'media')?.trim() ?? '';
     const before = media === '' ? '' : `@media ${media}{`;
-    text = before + rawText(element) + (media === '' ? '' : '}');
+    const text = before + rawText(element) + (media === '' ? '' : '}');
+    lineStarts = lineStartsOf(text);
     sheet.add(text);
   }
   return sheet.isEmpty ? null : sheet;
@@ -48,11 +49,22 @@ function rawText(element: SvgElement): string {
   return element.children.map((child) => (typeof child === 'string' ? child : '')).join('');
 }
 
-/** `within`: the text of the sheet before the place. */
-function placeIn(start: Place, within: string): Place {
-  const lines = within.split('\n');
-  if (lines.length === 1 || start.line === null) return start;
-  return { ...start, line: start.line + lines.length - 1, column: lines[lines.length - 1].length + 1 };
+function lineStartsOf(text: string): number[] {
+  const starts = [0];
+  for (let at = text.indexOf('\n'); at >= 0; at = text.indexOf('\n', at + 1)) starts.push(at + 1);
+  return starts;
+}
+
+/** Where a character of the sheet stands in the drawing; on the first line of the sheet, its element stands for it. */
+function placeIn(start: Place, lineStarts: readonly number[], at: number): Place {
+  let [low, high] = [0, lineStarts.length];
+  while (high - low > 1) {
+    const middle = (low + high) >> 1;
+    if (lineStarts[middle] <= at) low = middle;
+    else high = middle;
+  }
+  if (low === 0 || start.line === null) return start;
+  return { ...start, line: start.line + low, column: at - lineStarts[low] + 1 };
 }
 
 function oneLine(text: string): string {

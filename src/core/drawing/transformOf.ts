@@ -3,7 +3,7 @@ import type { Specified } from './cascade.js';
 import type { Style } from './computedStyle.js';
 import { cssTransform } from './cssTransform.js';
 import { toUserUnits, type WrittenLength } from './length.js';
-import { type Context, type Session, shown } from './session.js';
+import { type Box, type Context, type Session, shown } from './session.js';
 import type { SvgElement } from './svgTree.js';
 import { readTransformList } from './transformList.js';
 import { type Origin, readTransformOrigin } from './transformOrigin.js';
@@ -16,13 +16,11 @@ interface ReferenceBox {
   readonly height: number;
 }
 
-/** Least x and y, greatest x and y of what an element fills, in its own user space. */
-export type BoundsOf = (
-  session: Session,
-  element: SvgElement,
-  context: Context,
-) => readonly [number, number, number, number] | null | 'unknown';
+/** The box of what an element fills, in its own user space. */
+export type BoundsOf = (session: Session, element: SvgElement, context: Context) => Box;
 
+/** Elements measured by their own boxes inside one another; real ones have one or two. */
+const DEEPEST_BOXES = 16;
 const CORNER: Origin = { x: { value: 0, unit: '' }, y: { value: 0, unit: '' } };
 const MIDDLE: Origin = { x: { value: 50, unit: '%' }, y: { value: 50, unit: '%' } };
 const NOWHERE: ReferenceBox = { x: 0, y: 0, width: 0, height: 0 };
@@ -124,7 +122,7 @@ function referenceBox(
   if (keyword === 'view-box') {
     return { x: 0, y: 0, width: context.viewportWidth, height: context.viewportHeight };
   }
-  const bounds = session.cascade.apart(() => boundsOf(session, element, context));
+  const bounds = boxOf(session, element, context, boundsOf);
   if (bounds === null) return NOWHERE;
   const widened = keyword === 'stroke-box' || keyword === 'border-box';
   const spread = widened && style.stroke.kind !== 'none' ? style.strokeWidth / 2 : 0;
@@ -141,4 +139,15 @@ function referenceBox(
     width: right - left + 2 * spread,
     height: bottom - top + 2 * spread,
   };
+}
+
+function boxOf(session: Session, element: SvgElement, context: Context, boundsOf: BoundsOf): Box {
+  const known = context.copies ? undefined : session.boxes.get(element);
+  if (known !== undefined) return known;
+  if (session.measuring >= DEEPEST_BOXES) return 'unknown';
+  session.measuring++;
+  const box = session.cascade.apart(() => boundsOf(session, element, context));
+  session.measuring--;
+  if (!context.copies) session.boxes.set(element, box);
+  return box;
 }
