@@ -7,6 +7,7 @@ import type { LineSet } from './lineSet.js';
 import { nearParts } from './nearness.js';
 import { pairAlongThreads } from './pairing.js';
 import { drawnAgainMm, excuseRepeats } from './repeats.js';
+import { pairSections } from './sections.js';
 import { Side } from './side.js';
 import { middleOf, type Stretch, unpairedStretches } from './stretches.js';
 import { type AuditOptions, fringeMm, type Tolerances, tolerancesFor } from './tolerances.js';
@@ -54,6 +55,7 @@ export function auditLines(wanted: LineSet, drawn: LineSet, options: AuditOption
   requireFinite(wanted);
   requireFinite(drawn);
   const whole = pairWholeSegments(wanted, drawn, tolerances.sameMm);
+  pairSections(wanted, drawn, whole, tolerances);
   const wantedSide = new Side(wanted, whole.wanted, tolerances);
   const drawnSide = new Side(drawn, whole.drawn, tolerances);
   const once = options.repeats === 'once';

@@ -62,8 +62,7 @@ export class BridgeInspector {
     let found = false;
     this.visitEnds(x[k], y[k], x[k], y[k], pen, snapMm + matchMm, (px, py) => {
       visitPieces(this.wanted, this.wanted.index, pen, x[k], y[k], x[k], y[k], reach, (v) => {
-        const foot = footOn(this.wanted, v, px, py);
-        found = foot !== null && between(foot[0], foot[1], x[k], y[k]) <= reach;
+        found = Math.abs(alongPiece(this.wanted, v, px - x[k], py - y[k])) <= reach;
         return found;
       });
       return found;
@@ -223,12 +222,11 @@ function between(ax: number, ay: number, bx: number, by: number): number {
   return Math.sqrt((bx - ax) * (bx - ax) + (by - ay) * (by - ay));
 }
 
-/** The foot of a point on piece v, null where it lies beyond its ends. */
-function footOn(side: Side, v: number, px: number, py: number): [number, number] | null {
+/** How far a vector goes along piece v. */
+function alongPiece(side: Side, v: number, x: number, y: number): number {
   const dx = side.x[v + 1] - side.x[v];
   const dy = side.y[v + 1] - side.y[v];
-  const t = ((px - side.x[v]) * dx + (py - side.y[v]) * dy) / (dx * dx + dy * dy);
-  return t >= 0 && t <= 1 ? [side.x[v] + t * dx, side.y[v] + t * dy] : null;
+  return (x * dx + y * dy) / side.pieceLength(v);
 }
 
 /** Whether two pieces that are not neighbours on a chain cross or touch, and where. */

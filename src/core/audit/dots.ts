@@ -37,14 +37,16 @@ export function specksOf(side: Side, hairMm: number): Specks {
 }
 
 function isTinyAndLoose(side: Side, chain: number, hairMm: number): boolean {
-  const { firstOfChain, boxes } = side.spans;
+  const { firstOfChain } = side.spans;
   let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity];
   for (let span = firstOfChain[chain]; span < firstOfChain[chain + 1]; span++) {
+    if (side.touched[span] === 1) return false;
+    const { boxes } = side;
     minX = Math.min(minX, boxes[4 * span]);
     minY = Math.min(minY, boxes[4 * span + 1]);
     maxX = Math.max(maxX, boxes[4 * span + 2]);
     maxY = Math.max(maxY, boxes[4 * span + 3]);
-    if (maxX - minX > 2 * hairMm || maxY - minY > 2 * hairMm || side.touched[span] === 1) return false;
+    if (maxX - minX > 2 * hairMm || maxY - minY > 2 * hairMm) return false;
   }
   return true;
 }

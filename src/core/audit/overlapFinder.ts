@@ -33,7 +33,7 @@ export class OverlapFinder {
   /** Gathers the unpaired wanted spans about a drawn span; false where there are none. */
   lookAbout(span: number): boolean {
     const { wanted, drawn } = this;
-    const { boxes } = drawn.spans;
+    const { boxes } = drawn;
     const reach = this.tolerances.matchMm;
     const pen = drawn.penOf(span);
     const near: number[] = [];
@@ -135,7 +135,7 @@ export class OverlapFinder {
     const minY = Math.min(ay, by) - reach;
     const maxX = Math.max(ax, bx) + reach;
     const maxY = Math.max(ay, by) + reach;
-    const { boxes } = wanted.spans;
+    const { boxes } = wanted;
     if (boxes[4 * w] > maxX || boxes[4 * w + 2] < minX) return;
     if (boxes[4 * w + 1] > maxY || boxes[4 * w + 3] < minY) return;
     const first = wanted.flatten(w);

@@ -1,5 +1,6 @@
 import { LINE } from '../geometry/segments.js';
 import { BoxIndex } from './boxIndex.js';
+import { spansWithCompany } from './company.js';
 import { addInterval, type Intervals } from './intervals.js';
 import { isNear, visitPieces } from './nearness.js';
 import { deviationOf } from './sameSegment.js';
@@ -7,6 +8,7 @@ import type { Side } from './side.js';
 import { findOverlap, newOverlap } from './sideBySide.js';
 import { type Stretch, unpairedStretches } from './stretches.js';
 import type { Tolerances } from './tolerances.js';
+import { twinsOfPaired } from './wholeSegments.js';
 
 /**
  * A line may be excused by one at up to 20° from it, as pieces of flattened curves may turn from each
@@ -16,6 +18,8 @@ import type { Tolerances } from './tolerances.js';
 const EXCUSE_COSINE = 0.94;
 /** To count as drawn twice, lines must run in nearly the same direction. */
 const PARALLEL_COSINE = 0.98;
+/** Curves that touch run together within the tolerance for a while: 0.2 mm, in tolerances. */
+const MEETING = 20;
 
 /**
  * Takes what is wanted but unpaired as drawn where it repeats a wanted line that is paired.
@@ -24,10 +28,11 @@ const PARALLEL_COSINE = 0.98;
  * stand for others, if a drawn line lies within both tolerances. Cost: a search for each unpaired piece.
  */
 export function excuseRepeats(wanted: Side, drawn: Side, tolerances: Tolerances): void {
+  excuseTwins(wanted, tolerances);
   for (let pass = 0; pass < 2; pass++) {
     const stretches = unpairedStretches(wanted, 0);
     if (stretches.length === 0) return;
-    const paired = new PairedSpans(wanted);
+    const paired = new PairedSpans(wanted, wanted.touched);
     const excuses: { span: number; piece: number; parts: Intervals }[] = [];
     for (const stretch of stretches) {
       for (let k = 0; k < stretch.piece.length; k++) {
@@ -41,6 +46,19 @@ export function excuseRepeats(wanted: Side, drawn: Side, tolerances: Tolerances)
       for (let i = 0; i < parts.length; i += 2) {
         wanted.pair(span, piece, parts[i], parts[i + 1], tolerances.repeatMm);
       }
+    }
+  }
+}
+
+/** Most repeats are whole segments that stand twice: borders that two shapes share. */
+function excuseTwins(wanted: Side, { sameMm, repeatMm }: Tolerances): void {
+  if (repeatMm < sameMm || !wanted.wholeSegment.includes(0)) return;
+  const { lines, spans } = wanted;
+  const twins = twinsOfPaired(lines, wanted.wholeSegment, sameMm);
+  for (let i = 0; i < twins.length; i++) {
+    if (twins[i] < 0) continue;
+    for (let span = spans.firstOfSegment[i]; span < spans.firstOfSegment[i + 1]; span++) {
+      wanted.excuse(span, twins[i]);
     }
   }
 }
@@ -75,25 +93,30 @@ function repeatedParts(paired: PairedSpans, stretch: Stretch, k: number, toleran
 
 /**
  * The length that is drawn again on a place where something is drawn already: paired wanted lines beside
- * others that are paired as well, each pair counted once. Lines that run together for less than ten
+ * others that are paired as well, each pair counted once. Lines that run together for less than twenty
  * tolerances merely meet or cross, unless that is the whole of them. Of curves that were paired whole,
  * only those are seen that repeat each other whole.
  */
 export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
   const { spans, lines } = wanted;
-  const paired = new PairedSpans(wanted);
+  const { repeatMm } = tolerances;
+  const counts = (a: number, b: number): boolean => mayRepeat(wanted, a, b, repeatMm) !== 'none';
+  const company = spansWithCompany(wanted, repeatMm, PARALLEL_COSINE, counts);
+  if (!company.includes(1)) return 0;
+  // Whoever has company is company.
+  const paired = new PairedSpans(wanted, company);
   let sum = 0;
   for (let chain = 0; chain < lines.count; chain++) {
     let together = 0;
     let whole = true;
     let chainSum = 0;
     const close = (): void => {
-      if (together >= 10 * tolerances.repeatMm) chainSum += together;
+      if (together >= MEETING * repeatMm) chainSum += together;
       together = 0;
     };
     for (let span = spans.firstOfChain[chain]; span < spans.firstOfChain[chain + 1]; span++) {
-      const company = wanted.touched[span] === 1 ? companyOf(paired, span, tolerances.repeatMm) : 'none';
-      if (company === 'none') {
+      const beside = company[span] === 1 ? companyOf(paired, span, repeatMm) : 'none';
+      if (beside === 'none') {
         close();
         whole = false;
         continue;
@@ -101,7 +124,7 @@ export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
       const first = wanted.flatten(span);
       for (let v = first; v < first + wanted.pieceCount(span); v++) {
         const length = wanted.pieceLength(v);
-        const parts = company === 'twin' ? [0, 1] : againParts(paired, span, v, lines.pen[chain], tolerances);
+        const parts = beside === 'twin' ? [0, 1] : againParts(paired, span, v, lines.pen[chain], tolerances);
         if (parts.length === 2 && parts[0] <= 1e-9 && parts[1] >= 1 - 1e-9) {
           together += length;
           continue;
@@ -130,25 +153,31 @@ export function drawnAgainMm(wanted: Side, tolerances: Tolerances): number {
  */
 function companyOf(paired: PairedSpans, span: number, reach: number): 'none' | 'some' | 'twin' {
   const { side } = paired;
-  const { boxes, chain, segment } = side.spans;
-  const { segments } = side.lines;
-  const own = segment[span];
-  if (segments.kind[own] === LINE) return 'some';
-  const pen = side.penOf(span);
+  const { boxes } = side;
+  const { segment } = side.spans;
+  if (side.lines.segments.kind[segment[span]] === LINE) return 'some';
   const o = 4 * span;
   let found: 'none' | 'some' | 'twin' = 'none';
   paired.visit(boxes[o] - reach, boxes[o + 1] - reach, boxes[o + 2] + reach, boxes[o + 3] + reach, (w) => {
-    const other = segment[w];
-    if (other === own || side.penOf(w) !== pen) return false;
-    if (side.wholeSegment[own] === 1 && side.wholeSegment[other] === 1 && segments.kind[other] !== LINE) {
-      if (other < own && deviationOf(segments, other, segments, own, reach) <= reach) found = 'twin';
-      return found === 'twin';
-    }
-    const joined = chain[w] === chain[span] && Math.abs(other - own) <= 1;
-    if (!joined || foldsBack(side, other, own)) found = 'some';
-    return false;
+    const next = mayRepeat(side, span, w, reach);
+    if (next === 'some' || (next === 'twin' && segment[w] < segment[span])) found = next;
+    return found === 'twin';
   });
   return found;
+}
+
+/** What span `other` may be to a span, of which one is no line: nothing, beside it, or the same curve. */
+function mayRepeat(side: Side, span: number, other: number, reach: number): 'none' | 'some' | 'twin' {
+  const { chain, segment } = side.spans;
+  const { segments } = side.lines;
+  const [i, j] = [segment[span], segment[other]];
+  if (i === j || side.penOf(span) !== side.penOf(other)) return 'none';
+  const curves = segments.kind[i] !== LINE && segments.kind[j] !== LINE;
+  if (curves && side.wholeSegment[i] === 1 && side.wholeSegment[j] === 1) {
+    return deviationOf(segments, i, segments, j, reach) <= reach ? 'twin' : 'none';
+  }
+  const joined = chain[span] === chain[other] && Math.abs(i - j) <= 1;
+  return !joined || foldsBack(side, i, j) ? 'some' : 'none';
 }
 
 /** Whether two segments run in roughly opposite directions from end to end. */
@@ -192,16 +221,20 @@ function isEarlier(v: number, w: number): boolean {
   return w < v;
 }
 
-/** The spans of a side of which something is paired, for searching. */
+/** Those of a side's spans that belong, for searching. */
 class PairedSpans {
   private readonly index: BoxIndex;
   /** The span of each box; null where all are paired. */
   private readonly spanOf: number[] | null;
 
-  constructor(readonly side: Side) {
-    const { boxes, count } = side.spans;
+  constructor(
+    readonly side: Side,
+    belongs: Uint8Array,
+  ) {
+    const { boxes } = side;
+    const { count } = side.spans;
     const spans: number[] = [];
-    for (let span = 0; span < count; span++) if (side.touched[span] === 1) spans.push(span);
+    for (let span = 0; span < count; span++) if (belongs[span] === 1) spans.push(span);
     this.spanOf = spans.length === count ? null : spans;
     if (this.spanOf === null) {
       this.index = side.index;

@@ -3,7 +3,7 @@ import { flattenSegment } from '../geometry/flatten.js';
 import { BoxIndex } from './boxIndex.js';
 import { addInterval, gapsIn, type Intervals, partsIn } from './intervals.js';
 import type { LineSet } from './lineSet.js';
-import { cutToSpans, type Spans } from './spans.js';
+import { boxesOf, cutToSpans, type Spans } from './spans.js';
 import type { Tolerances } from './tolerances.js';
 
 const NOTHING: Intervals = [];
@@ -39,6 +39,7 @@ export class Side {
   private readonly pieces: Uint32Array;
   private readonly piecesLeft: Uint32Array;
   private boxIndex: BoxIndex | null = null;
+  private spanBoxes: Float64Array | null = null;
 
   /** @param wholeDeviation deviation of each segment that has a partner already, else −1. */
   constructor(
@@ -51,7 +52,8 @@ export class Side {
     this.deviation = new Float64Array(count);
     this.whole = new Uint8Array(count);
     this.touched = new Uint8Array(count);
-    this.wholeSegment = Uint8Array.from(wholeDeviation, (deviation) => (deviation < 0 ? 0 : 1));
+    this.wholeSegment = new Uint8Array(wholeDeviation.length);
+    for (let i = 0; i < wholeDeviation.length; i++) if (wholeDeviation[i] >= 0) this.wholeSegment[i] = 1;
     for (let span = 0; span < count; span++) {
       const deviation = wholeDeviation[segment[span]];
       if (deviation < 0) continue;
@@ -63,8 +65,14 @@ export class Side {
     this.piecesLeft = new Uint32Array(count);
   }
 
+  /** minX, minY, maxX, maxY of each span, never too small. */
+  get boxes(): Float64Array {
+    this.spanBoxes ??= boxesOf(this.spans, this.lines.segments, this.tolerances.flatMm);
+    return this.spanBoxes;
+  }
+
   get index(): BoxIndex {
-    if (this.boxIndex === null) this.boxIndex = new BoxIndex(this.spans.boxes);
+    if (this.boxIndex === null) this.boxIndex = new BoxIndex(this.boxes);
     return this.boxIndex;
   }
 
@@ -181,6 +189,12 @@ export class Side {
     this.pieceState[v] = DONE;
     this.piecesLeft[span]--;
     if (this.piecesLeft[span] === 0) this.whole[span] = 1;
+  }
+
+  /** Marks all of a span as paired. */
+  excuse(span: number, deviation: number): void {
+    if (deviation > this.deviation[span]) this.deviation[span] = deviation;
+    this.touched[span] = this.whole[span] = 1;
   }
 
   private push(x: number, y: number): void {

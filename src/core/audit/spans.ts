@@ -16,8 +16,6 @@ export interface Spans {
   readonly chain: Uint32Array;
   readonly firstOfChain: Uint32Array;
   readonly firstOfSegment: Uint32Array;
-  /** minX, minY, maxX, maxY of each, never too small. */
-  readonly boxes: Float64Array;
 }
 
 /**
@@ -45,9 +43,7 @@ export function cutToSpans(lines: LineSet, deviation: Float64Array, flatMm: numb
   const t0 = new Float64Array(count);
   const t1 = new Float64Array(count);
   const chain = new Uint32Array(count);
-  const boxes = new Float64Array(4 * count);
   const firstOfChain = new Uint32Array(lines.count + 1);
-  const box = new Float64Array(4);
   let at = 0;
   for (let c = 0; c < lines.count; c++) {
     firstOfChain[c] = at;
@@ -58,14 +54,23 @@ export function cutToSpans(lines: LineSet, deviation: Float64Array, flatMm: numb
         chain[at] = c;
         t0[at] = k / parts[i];
         t1[at] = (k + 1) / parts[i];
-        spanBox(segments, i, t0[at], t1[at], flatMm, box);
-        for (let j = 0; j < 4; j++) boxes[4 * at + j] = box[j];
         at++;
       }
     }
   }
   firstOfChain[lines.count] = at;
-  return { count, segment, t0, t1, chain, firstOfChain, firstOfSegment, boxes };
+  return { count, segment, t0, t1, chain, firstOfChain, firstOfSegment };
+}
+
+/** minX, minY, maxX, maxY of each span, never too small. O(spans). */
+export function boxesOf({ count, segment, t0, t1 }: Spans, segments: Segments, flatMm: number): Float64Array {
+  const boxes = new Float64Array(4 * count);
+  const box = new Float64Array(4);
+  for (let span = 0; span < count; span++) {
+    spanBox(segments, segment[span], t0[span], t1[span], flatMm, box);
+    for (let j = 0; j < 4; j++) boxes[4 * span + j] = box[j];
+  }
+  return boxes;
 }
 
 function partsOfSegments(lines: LineSet, deviation: Float64Array, flatMm: number): Uint32Array {
@@ -117,7 +122,7 @@ function roughPieces(segments: Segments, i: number, flatMm: number): number {
 }
 
 /** At least the length, and 0 only where the segment is a single point. */
-function roughLength(segments: Segments, i: number): number {
+export function roughLength(segments: Segments, i: number): number {
   const d = segments.data;
   const o = segments.offset[i];
   const kind = segments.kind[i];

@@ -37,6 +37,27 @@ export function pairWholeSegments(wanted: LineSet, drawn: LineSet, sameMm: numbe
   return pairs;
 }
 
+/**
+ * The unpaired wanted segments that are the same as a paired one of their pen from end to end within
+ * `sameMm`: their deviations from it, −1 for all others. O(segments), where few share a middle.
+ */
+export function twinsOfPaired(lines: LineSet, paired: Uint8Array, sameMm: number): Float64Array {
+  const twins = new Float64Array(paired.length).fill(-1);
+  const grid = new MiddleGrid(lines, sameMm, (i) => paired[i] === 0);
+  for (let c = 0; c < lines.count; c++) {
+    if (lines.dot[c]) continue;
+    for (let i = lines.first[c]; i < lines.first[c + 1]; i++) {
+      if (paired[i] === 0 || isPoint(lines.segments, i)) continue;
+      for (;;) {
+        const twin = grid.takeClosest(lines.segments, i, lines.pen[c]);
+        if (twin < 0) break;
+        twins[twin] = grid.deviation;
+      }
+    }
+  }
+  return twins;
+}
+
 function isPoint({ kind, offset, data: d }: Segments, i: number): boolean {
   const o = offset[i];
   return kind[i] === LINE && d[o] === d[o + 2] && d[o + 1] === d[o + 3];
@@ -58,6 +79,7 @@ class MiddleGrid {
   constructor(
     lines: LineSet,
     private readonly sameMm: number,
+    belongs: (i: number) => boolean = () => true,
   ) {
     this.segments = lines.segments;
     this.cell = CELL * sameMm;
@@ -72,7 +94,7 @@ class MiddleGrid {
       if (lines.dot[c]) continue;
       for (let i = lines.first[c]; i < lines.first[c + 1]; i++) {
         this.pen[i] = lines.pen[c];
-        if (isPoint(this.segments, i)) continue;
+        if (!belongs(i) || isPoint(this.segments, i)) continue;
         const o = offset[i];
         const bucket = this.bucketOf(
           Math.floor((d[o] + d[o + 2]) / 2 / this.cell),
