@@ -1,7 +1,7 @@
 // What the bench of pairing does in its own process: files for the others, and greedy against the optimum.
 import { writeFileSync } from 'node:fs';
 import { join } from 'node:path';
-import { candidateEdges } from '../../dist/core/matching/candidates.js';
+import { candidateGraph, edgesOf } from '../../dist/core/matching/candidates.js';
 import { largestCost, powerScale } from '../../dist/core/matching/cost.js';
 import { exactMatching } from '../../dist/core/matching/exact.js';
 import { improveByExchange } from '../../dist/core/matching/exchange.js';
@@ -26,7 +26,7 @@ export function writeLemonInput(folder, points, asGiven) {
   const { n } = problem;
   const layout = layOut(problem);
   const costs = new IntegerCosts(layout, powerScale(largestCost(problem), 43));
-  const edges = candidateEdges(layout, costs);
+  const edges = edgesOf(candidateGraph(layout, costs));
   const name = (v) => (asGiven ? layout.original[v] : v);
   const pairs = Array.from({ length: edges.count }, (_, i) => {
     const u = name(edges.from[i]);

@@ -1,5 +1,5 @@
 import { buildBoxTree } from '../structures/boxTree.js';
-import { EdgeList } from './graph.js';
+import { addEdges, buildGraph, EdgeList, type Graph, graphWithRoom, layEdge } from './graph.js';
 import type { IntegerCosts, Layout } from './layout.js';
 import { nearInQuadrants, QUADRANT_NEIGHBOURS } from './quadrants.js';
 
@@ -15,14 +15,31 @@ const EXPECTED = 5.5;
  * (once more among the places with an odd number of vertices),
  * a path through all vertices in working order, and partners for the special vertices.
  */
-export function candidateEdges(layout: Layout, costs: IntegerCosts): EdgeList {
-  const edges = new EdgeList(16 + Math.ceil(EXPECTED * layout.n));
-  placeEdges(layout, edges);
+export function candidateGraph(layout: Layout, costs: IntegerCosts): Graph {
+  const { n, placed, tree } = layout;
+  const near = nearInQuadrants(tree);
+  const alone = tree.x.length === placed && placed > 0;
+  const edges = new EdgeList(alone ? 1024 : 16 + Math.ceil(EXPECTED * n));
+  const graph = alone ? graphOfNear(n, near, costs) : null;
+  if (!alone) placeEdges(layout, near, edges);
+  for (let v = Math.max(0, placed - 1); v + 1 < n; v++) edges.join(v, v + 1);
   costs.fill(edges);
   wayEdges(layout, costs.scale, (u, v, cost) => edges.add(u, v, cost));
   const { hints } = layout.problem;
   if (hints !== undefined) hintEdges(layout, hints, costs, edges);
-  else if (layout.placed < layout.n) specialPartners(layout, costs, edges);
+  else if (placed < n) specialPartners(layout, costs, near, edges);
+  if (graph === null) return buildGraph(n, edges);
+  addEdges(graph, edges);
+  return graph;
+}
+
+/** The same edges as a list, lower end first. */
+export function edgesOf(graph: Graph): EdgeList {
+  const { first, tail, head, cost } = graph;
+  const edges = new EdgeList(first[first.length - 1] / 2 + 1);
+  for (let arc = 0; arc < first[first.length - 1]; arc++) {
+    if (tail[arc] < head[arc]) edges.add(tail[arc], head[arc], cost[arc]);
+  }
   return edges;
 }
 
@@ -56,21 +73,58 @@ function hintEdges(layout: Layout, hints: Int32Array, costs: IntegerCosts, edges
   }
 }
 
-function placeEdges(layout: Layout, edges: EdgeList): void {
+/** Where no two vertices are on one place, places are vertices: the arcs are laid straight from the lists. */
+function graphOfNear(n: number, near: Int32Array, costs: IntegerCosts): Graph {
+  const places = near.length / QUADRANT_NEIGHBOURS;
+  const first = new Int32Array(n + 1);
+  const along = new Uint8Array(places);
+  for (let p = 0; p < places; p++) countArcs(near, p, places, first, along);
+  const graph = graphWithRoom(first);
+  for (let p = places - 1; p >= 0; p--) layArcs(graph, near, p, along, costs);
+  return graph;
+}
+
+/** Strikes out of the list of p whoever lists p and comes first, and says whether the path to p + 1 is wanting. */
+function countArcs(near: Int32Array, p: number, places: number, first: Int32Array, along: Uint8Array): void {
+  const row = QUADRANT_NEIGHBOURS * p;
+  let joined = p + 1 === places;
+  for (let i = row; i < row + QUADRANT_NEIGHBOURS; i++) {
+    const q = near[i];
+    if (q < 0) continue;
+    if (q === p + 1) joined = true;
+    // A lower one's list still stands as it was where it names p: only lower names are struck out.
+    if (q < p && lists(near, q, p)) near[i] = -1;
+    else {
+      first[p]++;
+      first[q]++;
+    }
+  }
+  if (joined || lists(near, p + 1, p)) return;
+  along[p] = 1;
+  first[p]++;
+  first[p + 1]++;
+}
+
+function layArcs(graph: Graph, near: Int32Array, p: number, along: Uint8Array, costs: IntegerCosts): void {
+  const row = QUADRANT_NEIGHBOURS * p;
+  for (let i = row; i < row + QUADRANT_NEIGHBOURS; i++) {
+    if (near[i] >= 0) layEdge(graph, p, near[i], costs.between(p, near[i]));
+  }
+  if (along[p] === 1) layEdge(graph, p, p + 1, costs.between(p, p + 1));
+}
+
+function placeEdges(layout: Layout, near: Int32Array, edges: EdgeList): void {
   const { tree, first } = layout;
   const places = tree.x.length;
-  const near = nearInQuadrants(tree);
   const odd: number[] = [];
   for (let p = 0; p < places; p++) {
     const size = first[p + 1] - first[p];
     if (size % 2 === 1) odd.push(p);
     joinNear(near, p, first, edges);
-    if (size === 1 && p + 1 < places && joined(near, p, p + 1)) continue;
     // The copies on a place start as one odd set (start.ts): its cycle closes here.
     if (size >= 3) edges.join(first[p], first[p] + size - (size % 2 === 0 ? 2 : 1));
-    for (let v = first[p]; v < first[p + 1] && v + 1 < layout.n; v++) edges.join(v, v + 1);
+    for (let v = first[p]; v < first[p + 1] && v + 1 < layout.placed; v++) edges.join(v, v + 1);
   }
-  for (let v = layout.placed; v + 1 < layout.n; v++) edges.join(v, v + 1);
   if (odd.length < places) joinOdd(layout, odd, edges);
 }
 
@@ -116,24 +170,24 @@ function joinOdd(layout: Layout, odd: readonly number[], edges: EdgeList): void 
   }
 }
 
-function joined(near: Int32Array, p: number, q: number): boolean {
-  return lists(near, p, q) || lists(near, q, p);
-}
-
 function lists(near: Int32Array, p: number, q: number): boolean {
   const row = QUADRANT_NEIGHBOURS * p;
   for (let i = row; i < row + QUADRANT_NEIGHBOURS; i++) if (near[i] === q) return true;
   return false;
 }
 
-function specialPartners(layout: Layout, costs: IntegerCosts, edges: EdgeList): void {
-  const { n, placed, place } = layout;
+function specialPartners(layout: Layout, costs: IntegerCosts, near: Int32Array, edges: EdgeList): void {
+  const { n, placed, place, first } = layout;
   const cheapest = new Float64Array(n).fill(Number.POSITIVE_INFINITY);
-  for (let i = 0; i < edges.count; i++) {
-    const { from, to, cost } = edges;
-    if (from[i] >= placed || to[i] >= placed) continue;
-    if (cost[i] < cheapest[from[i]]) cheapest[from[i]] = cost[i];
-    if (cost[i] < cheapest[to[i]]) cheapest[to[i]] = cost[i];
+  for (let v = 0; n > COMPLETE && v < placed; v++) {
+    const row = QUADRANT_NEIGHBOURS * place[v];
+    for (let i = row; i < row + QUADRANT_NEIGHBOURS; i++) {
+      if (near[i] < 0) continue;
+      const w = first[near[i]];
+      cheapest[v] = Math.min(cheapest[v], costs.between(v, w));
+      cheapest[w] = Math.min(cheapest[w], costs.between(v, w));
+    }
+    if (first[place[v] + 1] - first[place[v]] > 1) cheapest[v] = costs.between(v, v);
   }
   const cost = new Float64Array(n);
   const rank = new Float64Array(n);

@@ -1,9 +1,9 @@
 import { readNests, roomForNests } from './ancestry.js';
-import { candidateEdges } from './candidates.js';
+import { candidateGraph } from './candidates.js';
 import { largestCost, powerScale } from './cost.js';
 import { certificateOf, matesOf, provenTotal } from './extract.js';
 import { Forest } from './forest.js';
-import { addEdges, buildGraph, EdgeList } from './graph.js';
+import { addEdges, EdgeList } from './graph.js';
 import { interrupted } from './interrupted.js';
 import { IntegerCosts, type Layout, layOut } from './layout.js';
 import { exposedSets, matchExposed, type Watch } from './passes.js';
@@ -52,7 +52,7 @@ function solve(
   options: ExactOptions,
 ): CertifiedMatching | 'stopped' | 'inexact' {
   const { n, placed } = layout;
-  const f = new Forest(n, buildGraph(n, candidateEdges(layout, costs)));
+  const f = new Forest(n, candidateGraph(layout, costs));
   firstDuals(f, placed);
   contractPlaces(f, layout, costs);
   raiseExposed(f);

@@ -56,30 +56,37 @@ export function buildGraph(n: number, edges: EdgeList): Graph {
     first[from[i]]++;
     first[to[i]]++;
   }
+  const graph = graphWithRoom(first);
+  for (let i = count - 1; i >= 0; i--) layEdge(graph, from[i], to[i], cost[i]);
+  return graph;
+}
+
+/** Takes the number of arcs at each vertex, and turns it into where its block ends: `layEdge` fills it from behind. */
+export function graphWithRoom(first: Int32Array): Graph {
   let sum = 0;
-  for (let v = 0; v < n; v++) {
+  for (let v = 0; v < first.length; v++) {
     sum += first[v];
     first[v] = sum;
   }
-  first[n] = sum;
   const capacity = sum + Math.ceil(sum * SPARE);
-  const tail = new Int32Array(capacity);
-  const head = new Int32Array(capacity);
-  const arcCost = new Float64Array(capacity);
-  // From the last edge to the first, each vertex's block is filled from behind: first[v] ends at its start.
-  for (let i = count - 1; i >= 0; i--) {
-    const u = from[i];
-    const v = to[i];
-    const there = --first[u];
-    tail[there] = u;
-    head[there] = v;
-    arcCost[there] = cost[i];
-    const back = --first[v];
-    tail[back] = v;
-    head[back] = u;
-    arcCost[back] = cost[i];
-  }
-  return { first, tail, head, cost: arcCost };
+  return {
+    first,
+    tail: new Int32Array(capacity),
+    head: new Int32Array(capacity),
+    cost: new Float64Array(capacity),
+  };
+}
+
+export function layEdge(graph: Graph, u: number, v: number, edgeCost: number): void {
+  const { first, tail, head, cost } = graph;
+  const there = --first[u];
+  tail[there] = u;
+  head[there] = v;
+  cost[there] = edgeCost;
+  const back = --first[v];
+  tail[back] = v;
+  head[back] = u;
+  cost[back] = edgeCost;
 }
 
 /** Adds edges: the blocks of arcs behind each new one move up. Time in the size of the graph, at the speed of copying. */
