@@ -20,8 +20,16 @@ export interface Style {
   /** Lengths of dashes and gaps by turns, user units, an even number; null where the line is solid. */
   readonly dashes: readonly number[] | null;
   readonly dashOffset: number;
+  /** What holds a share of the viewport, by property: inherited as such; null where nothing does. */
+  readonly shares: ReadonlyMap<string, Share> | null;
   /** One bit each for markers at the start, middle and end. */
   readonly markers: number;
+  readonly fontSize: number;
+}
+
+/** A value as written, and the font size that its em are of. */
+interface Share {
+  readonly value: string;
   readonly fontSize: number;
 }
 
@@ -38,6 +46,7 @@ export const INITIAL_STYLE: Style = {
   dots: false,
   dashes: null,
   dashOffset: 0,
+  shares: null,
   markers: 0,
   fontSize: 16,
 };
@@ -113,6 +122,34 @@ function markerSetter(bits: number): Setter {
   };
 }
 
+function keepShare(style: Writable, property: string, value: string): void {
+  const isShare = value.includes('%');
+  if (!isShare && !style.shares?.has(property)) return;
+  const shares = new Map(style.shares);
+  if (isShare) shares.set(property, { value, fontSize: style.fontSize });
+  else shares.delete(property);
+  style.shares = shares.size > 0 ? shares : null;
+}
+
+/**
+ * The style in a viewport inside: percentages of it are inherited as percentages (SVG 2, "Stroke
+ * properties", computed values), so that they are of the nearest viewport wherever they are used.
+ */
+export function styleInViewport(style: Style, inside: LengthContext): Style {
+  if (style.shares === null) return style;
+  const inner: Writable = { ...style };
+  const no = (): false => false;
+  const silent = { isPaintServer: no, isMarker: no, reportColour: no, reportLength: no };
+  for (const [property, setter] of SETTERS) {
+    const share = style.shares.get(property);
+    if (!share) continue;
+    inner.fontSize = share.fontSize;
+    setter(inner, share.value, style, { ...inside, ...silent });
+  }
+  inner.fontSize = style.fontSize;
+  return inner;
+}
+
 /** In this order: lengths in em need the font size of the same element. */
 const SETTERS: readonly (readonly [string, Setter])[] = [
   [
@@ -142,9 +179,10 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
     'stroke-width',
     (style, value, _parent, context) => {
       const length = readLength(value);
-      if (length && length.value >= 0)
+      if (length && length.value >= 0) {
         style.strokeWidth = Math.max(0, toUserUnits(length, 'other', context, style.fontSize));
-      else context.reportLength('stroke-width', value);
+        keepShare(style, 'stroke-width', value);
+      } else context.reportLength('stroke-width', value);
     },
   ],
   ['stroke-opacity', opacitySetter('strokeOpacity')],
@@ -162,15 +200,20 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
     (style, value, _parent, context) => {
       const dashes = readDashes(value, context, style.fontSize);
       if (dashes === undefined) context.reportLength('stroke-dasharray', value);
-      else style.dashes = dashes;
+      else {
+        style.dashes = dashes;
+        keepShare(style, 'stroke-dasharray', value);
+      }
     },
   ],
   [
     'stroke-dashoffset',
     (style, value, _parent, context) => {
       const length = readLength(value);
-      if (length) style.dashOffset = toUserUnits(length, 'other', context, style.fontSize);
-      else context.reportLength('stroke-dashoffset', value);
+      if (length) {
+        style.dashOffset = toUserUnits(length, 'other', context, style.fontSize);
+        keepShare(style, 'stroke-dashoffset', value);
+      } else context.reportLength('stroke-dashoffset', value);
     },
   ],
   [

@@ -1,5 +1,6 @@
 import { type Affine, multiply, translation } from '../geometry/affine.js';
 import { viewportClip } from './clipping.js';
+import { styleInViewport } from './computedStyle.js';
 import { lengthOf } from './drawElement.js';
 import { readLength, toUserUnits } from './length.js';
 import { type Context, type Session, shown } from './session.js';
@@ -69,12 +70,13 @@ export function contextInside(
   const inner = viewBox
     ? viewBoxTransform(viewBox, rectangle, aspect)
     : translation(rectangle.x, rectangle.y);
-  return {
+  const inside: Context = {
     ...outer,
     map: multiply(map, inner),
     viewportWidth: viewBox?.width ?? rectangle.width,
     viewportHeight: viewBox?.height ?? rectangle.height,
   };
+  return { ...inside, style: styleInViewport(outer.style, inside) };
 }
 
 /** null where there is none or it is wrong; one that is empty, and so draws nothing, is reported too. */

@@ -46,6 +46,11 @@ export const DASHES: Cases = {
   'dashes in a copied symbol': page(
     '<symbol id="s" viewBox="0 0 20 20"><path stroke-width=".3" stroke-dasharray="2 1" d="M2 2h15v15A12 12 0 0 1 2 2"/></symbol><use href="#s" width="120" height="120"/><use href="#s" x="110" y="60" width="80" height="80"/>',
   ),
+  'dashes in percent of the viewport they are in': dashed(
+    '<svg x="20" y="10" width="150" height="120" viewBox="0 0 40 30" stroke-width=".4"><path d="M1 1C40 0 0 30 38 28"/><path stroke-dasharray="inherit" d="M1 28L38 1"/></svg><path d="M5 150h190"/>',
+    '4% 2%',
+    'stroke-dashoffset="1%"',
+  ),
   'dashes longer than the line': dashed(CURVE, '5000 10', 'stroke-dashoffset="20"'),
   'dashes that all fall in a gap': dashed(
     '<path d="M10 10h50"/><path d="M10 30h190"/>',
