@@ -4,32 +4,20 @@ import type { FindingLog } from './findingLog.js';
 import { PROPERTIES } from './properties.js';
 import { SelectorMatcher } from './selectorMatcher.js';
 import { reportMisread, sheetsOf } from './sheets.js';
+import { type Specified, SpecifiedValues } from './specifiedValues.js';
 import type { StyleSheet } from './styleSheet.js';
 import type { SvgElement, SvgTree } from './svgTree.js';
 
+export type { Specified } from './specifiedValues.js';
+
 /** Distinct style attributes remembered; drawings repeat a few of them thousands of times. */
 const REMEMBERED = 4096;
-
-/** What is said of one element: its attributes, and over them its style. */
-export interface Specified extends ReadonlyMap<string, string> {
-  /** Names of those that are values of CSS properties, from a sheet or a style attribute. */
-  readonly styled: ReadonlySet<string>;
-}
 
 /** A `use` around an element, whose copy it is in. */
 export interface CopyAround {
   readonly target: SvgElement;
   readonly use: SvgElement;
   readonly outer: CopyAround | null;
-}
-
-class SpecifiedValues extends Map<string, string> implements Specified {
-  readonly styled = new Set<string>();
-
-  override clear(): void {
-    super.clear();
-    if (this.styled.size > 0) this.styled.clear();
-  }
 }
 
 interface Inline {
@@ -149,16 +137,14 @@ export class Cascade {
     }
     if (name.startsWith('--')) return;
     if (kind === 'plain') {
-      specified.set(name, value);
-      specified.styled.add(name);
+      specified.setStyled(name, value);
       return;
     }
     const given = substituted(value, this.customOn(element, copy));
     const keyword = given?.toLowerCase() ?? '';
     const checked = given === null || WIDE.has(keyword) ? null : checkedValue(name, given, false);
     if (checked !== null) {
-      specified.set(name, checked);
-      specified.styled.add(name);
+      specified.setStyled(name, checked);
       return;
     }
     if (!WIDE.has(keyword)) this.misread(element, { property: name, found: given ?? value });
@@ -175,7 +161,7 @@ export class Cascade {
   ): void {
     if (keyword === 'revert-layer') return; // From a var(): what is weaker stands already.
     const isInherited = PROPERTIES.get(name)?.inherited === true;
-    specified.styled.delete(name);
+    specified.unstyle(name);
     if (isInherited && keyword === 'initial') specified.set(name, keyword);
     else if (name === 'transform-origin' && (keyword === 'initial' || keyword === 'unset')) {
       // Its initial value is the middle: that it is the corner here is a rule of browsers' own.
@@ -197,8 +183,8 @@ export class Cascade {
       specified.delete(name);
       return;
     }
-    specified.set(name, value);
-    if (outer?.styled.has(name)) specified.styled.add(name);
+    if (outer?.styled.has(name)) specified.setStyled(name, value);
+    else specified.set(name, value);
   }
 
   private parentValues(element: SvgElement, copy: CopyAround | null): SpecifiedValues {

@@ -10,11 +10,16 @@ export class Column {
 
   push(value: number): number {
     if (this.length === this.values.length) {
-      const values = orTooLarge(() => new Uint32Array(this.length * (this.length < LARGE ? 4 : 2)));
-      values.set(this.values);
-      this.values = values;
+      this.values = grown(this.values);
     }
     this.values[this.length] = value;
     return this.length++;
   }
+}
+
+function grown(from: Uint32Array): Uint32Array<ArrayBuffer> {
+  const { length } = from;
+  const to = orTooLarge(() => new Uint32Array(length * (length < LARGE ? 4 : 2)));
+  to.set(from);
+  return to;
 }

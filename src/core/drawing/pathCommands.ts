@@ -45,9 +45,7 @@ export class PathCommands {
     }
     const at = this.used;
     if (at + 8 > this.numbers.length) {
-      const numbers = orTooLarge(() => new Float64Array(2 * this.numbers.length));
-      numbers.set(this.numbers);
-      this.numbers = numbers;
+      this.numbers = grown(this.numbers);
     }
     // A first `m` is absolute (SVG 2, "The moveto commands").
     this.codes[this.count] = !this.begun && code === M + 32 ? M : code === Z + 32 ? Z : code;
@@ -62,4 +60,10 @@ export class PathCommands {
     this.count--;
     this.used -= ARITY[this.codes[this.count]]!;
   }
+}
+
+function grown(from: Float64Array): Float64Array<ArrayBuffer> {
+  const to = orTooLarge(() => new Float64Array(2 * from.length));
+  to.set(from);
+  return to;
 }

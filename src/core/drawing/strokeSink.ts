@@ -212,7 +212,7 @@ export class StrokeSink implements PathSink {
     const { builder } = this;
     this.drawn.strokes++;
     this.first.push(builder.count);
-    orTooLarge(() => builder.append(segments));
+    addTo(builder, segments);
     this.closed.push(closed ? 1 : 0);
     this.dot.push(dot ? 1 : 0);
     this.dashed.push(properties.dashed ? 1 : 0);
@@ -230,4 +230,8 @@ export class StrokeSink implements PathSink {
 
 function nothingDrawn(): Drawn {
   return { strokes: 0, buttDots: 0, overflows: 0, undashed: 0, outlineMm: 0, clipping: nothingClipped() };
+}
+
+function addTo(builder: SegmentBuilder, segments: Segments): void {
+  orTooLarge(() => builder.append(segments));
 }

@@ -137,19 +137,8 @@ export class SubPath {
   private push(kind: number, x: number, y: number): number {
     const i = this.count++;
     const o = this.used;
-    if (i === this.kind.length) {
-      if (i >= this.limit) throw pastSegments(this.limit);
-      const length = Math.min(i * (i < LARGE ? 4 : 2), this.limit);
-      this.kind = grown(this.kind, new Uint8Array(length));
-      this.offset = grown(this.offset, new Uint32Array(length));
-    }
-    if (o + 12 > this.data.length) {
-      const { length } = this.data;
-      this.data = grown(
-        this.data,
-        orTooLarge(() => new Float64Array(length * (length < 4 * LARGE ? 4 : 2))),
-      );
-    }
+    if (i === this.kind.length) this.growSegments(i);
+    if (o + 12 > this.data.length) this.growData(this.data.length);
     this.kind[i] = kind;
     this.offset[i] = o;
     this.data[o] = this.x;
@@ -158,6 +147,18 @@ export class SubPath {
     this.data[o + 3] = this.y = y;
     this.used = o + SEGMENT_SIZE[kind];
     return o;
+  }
+
+  private growSegments(count: number): void {
+    if (count >= this.limit) throw pastSegments(this.limit);
+    const length = Math.min(count * (count < LARGE ? 4 : 2), this.limit);
+    this.kind = grown(this.kind, new Uint8Array(length));
+    this.offset = grown(this.offset, new Uint32Array(length));
+  }
+
+  private growData(length: number): void {
+    const data = orTooLarge(() => new Float64Array(length * (length < 4 * LARGE ? 4 : 2)));
+    this.data = grown(this.data, data);
   }
 }
 
