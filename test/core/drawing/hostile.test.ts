@@ -144,6 +144,30 @@ describe('files made to hurt', () => {
     ['attributes', (n: number) => `<g ${Array.from({ length: n / 10 }, (_, i) => `a${i}=""`).join(' ')}/>`],
     ['closepaths', (n: number) => `<path stroke="red" d="M1 1${'z'.repeat(n)}"/>`],
     ['rules', (n: number) => `<style>${'*{fill:red}'.repeat(n / 100)}</style>${'<path/>'.repeat(n / 100)}`],
+    ['rules that are wrong', (n: number) => `<style>${'a:::{x:y}'.repeat(n / 10)}</style>`],
+    ['declarations that are wrong', (n: number) => `<style>a{${'x;'.repeat(n / 2)}}</style>`],
+    ['compounds', (n: number) => `<style>${'a '.repeat(n / 2)}{fill:red}</style><path/>`],
+    ['selectors', (n: number) => `<style>${'.a,'.repeat(n / 10)}b{fill:red}</style><path/>`],
+    [
+      'ancestors asked for',
+      (n: number) =>
+        `<style>${'g '.repeat(30)}.a{fill:red}</style>${'<g>'.repeat(900)}${'<path/>'.repeat(n / 1000)}${'</g>'.repeat(900)}`,
+    ],
+    [
+      'rules in rules',
+      () => `<style>${'.a,.b,&amp;{'.repeat(30)}fill:red${'}'.repeat(30)}</style><path class="a"/>`,
+    ],
+    [
+      'variables',
+      () =>
+        `<style>path{${Array.from({ length: 30 }, (_, i) => `--a${i}:${`var(--a${i + 1})`.repeat(10)}`).join(';')};--a30:x;stroke:var(--a0)}</style><path/>`,
+    ],
+    ['layers', (n: number) => `<style>@layer ${'a.'.repeat(n / 2)}b{a{fill:red}}</style>`],
+    [
+      'boxes in boxes',
+      () =>
+        `<style>g{transform-box:fill-box;transform:rotate(3deg)}</style>${'<g>'.repeat(300)}<path d="M1 1h9"/>${'</g>'.repeat(300)}`,
+    ],
     ['open braces', (n: number) => `<style>${'a{'.repeat(n)}</style>`],
   ])('time grows no faster than the text: %s', (_, make) => {
     const seconds = (n: number): number => {

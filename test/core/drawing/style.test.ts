@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import type { Drawing } from '../../../src/core/drawing/drawing.ts';
-import { codesOf, findingOf, readBody } from '../../support/readStrokes.ts';
+import { readDrawing } from '../../../src/core/drawing/readDrawing.ts';
+import { codesOf, findingOf, IN_MM, readBody } from '../../support/readStrokes.ts';
 
 const LINE = 'd="M1 1L5 1"';
 
@@ -118,9 +119,55 @@ describe('style sheets', () => {
     expect(coloursOf(`${sheet('screen')}<path ${LINE} stroke="blue"/>`)).toEqual(['#ff0000']);
   });
 
+  test('sheets elsewhere are named, not fetched', () => {
+    const drawing = readDrawing(
+      `<?xml version="1.0"?><?xml-stylesheet href="a.css" type="text/css"?>\n<svg ${IN_MM}><style>@import url(b.css);</style><path ${LINE} stroke="red"/></svg>`,
+    );
+    const { values, places } = findingOf(drawing, 'style-sheet-not-read');
+    expect(values).toEqual({ type: 'xml-stylesheet href="a.css" type="text/css"', count: 2 });
+    expect(places?.map(({ line }) => line)).toEqual([1, 2]);
+  });
+
+  test('what is wrong or beyond this reader is said', () => {
+    const drawing = readBody(
+      `<style>.a{stroke-width:3vw}\n.b{stroke:rgb(from red r g b)}@property --x{syntax:"*"}</style>
+       <path ${LINE} class="a" stroke="red"/><path ${LINE} class="b" style="width:1px;offset-path:path('M0 0h9');transform:nope(2)"/>`,
+    );
+    expect(
+      drawing.findings.map(({ code, values, place }) => [code, values.found ?? values.rule, place?.line]),
+    ).toEqual([
+      ['style-value-not-read', '3vw', 1],
+      ['style-rule-not-read', '@property --x', 2],
+      ['colour-not-read', 'rgb(from red r g b)', 3],
+      ['motion-path-not-applied', undefined, 3],
+    ]);
+    expect(findingOf(drawing, 'style-value-not-read').values).toEqual({
+      property: 'stroke-width',
+      found: '3vw',
+      count: 2,
+    });
+  });
+
   test('a sheet in another language is not read', () => {
     const drawing = readBody(`<style type="text/less">.a{stroke:red}</style><path class="a" ${LINE}/>`);
     expect(findingOf(drawing, 'style-sheet-not-read').severity).toBe('warning');
+  });
+});
+
+describe('copies', () => {
+  // SVG 2, "The use-element shadow tree": inherited from the use, matched within the copy.
+  test('custom properties and inherit come from the use', () => {
+    const defs = `<defs style="--c:blue"><path id="p" ${LINE} style="stroke:var(--c);opacity:inherit"/></defs>`;
+    const use = '<use href="#p" style="--c:red"/><g style="--c:lime"><use href="#p"/></g>';
+    expect(coloursOf(`${defs}${use}`)).toEqual(['#ff0000', '#00ff00']);
+    expect(coloursOf(`${defs}<use href="#p" style="opacity:0"/>`)).toEqual([]);
+  });
+
+  test('the copied element is the first and only child', () => {
+    const defs = `<defs><rect/><path id="p" class="a" ${LINE}/></defs>`;
+    expect(
+      coloursOf(`<style>.a:only-child{stroke:red}rect+.a{stroke:blue}</style>${defs}<use href="#p"/>`),
+    ).toEqual(['#ff0000']);
   });
 });
 
