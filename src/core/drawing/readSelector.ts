@@ -1,6 +1,7 @@
 /// <reference path="./vendor.d.ts" />
 import parse, { type SelectorNode } from 'css-tree/selector-parser';
 import { splitOutside, unescaped } from './cssText.js';
+import { readPlainSelector } from './plainSelector.js';
 import { ALWAYS, isPseudoElement, NEVER } from './pseudoClasses.js';
 import {
   type AttributeTest,
@@ -8,11 +9,19 @@ import {
   type Combinator,
   highestSpecificity,
   ID_WEIGHT,
-  type NthTest,
   type Selector,
   type Test,
   TYPE_WEIGHT,
 } from './selector.js';
+import {
+  childrenOf,
+  combinatorOf,
+  mentionsNesting,
+  NotRead,
+  NTH_SHORT,
+  selectorsIn,
+  textIn,
+} from './selectorNodes.js';
 
 const SVG_NAMESPACE = 'http://www.w3.org/2000/svg';
 const XLINK_NAMESPACE = 'http://www.w3.org/1999/xlink';
@@ -31,9 +40,6 @@ export interface SelectorScope {
   readonly nesting: readonly Selector[] | null;
 }
 
-/** A selector that is wrong, or not among those read here. */
-class NotRead extends Error {}
-
 /** A list of selectors, all or none (Selectors Level 4, §3.9 "Invalid selectors"); null where one is not read. */
 export function readSelectorList(text: string, scope: SelectorScope): Selector[] | null {
   const list: Selector[] = [];
@@ -48,7 +54,7 @@ export function readSelectorList(text: string, scope: SelectorScope): Selector[]
 /** One selector of Selectors Level 4, read with css-tree; null where it is wrong or not read here. */
 export function readSelector(text: string, scope: SelectorScope): Selector | null {
   if (text.length > LONGEST) return null;
-  const plain = scope.nesting === null && !scope.namespaces.has('') ? readPlain(text.trim()) : null;
+  const plain = scope.nesting === null && !scope.namespaces.has('') ? readPlainSelector(text.trim()) : null;
   if (plain) return plain;
   try {
     return new SelectorReader(scope).complex(parse(text, { context: 'selector' }), scope.nesting !== null);
@@ -56,21 +62,6 @@ export function readSelector(text: string, scope: SelectorScope): Selector | nul
     // The parser throws for what is no selector, as does what is not read here.
     return null;
   }
-}
-
-const PLAIN = /^(?:([a-z][\w-]*)|\.([a-z_][\w-]*)|#([a-z_][\w-]*))$/i;
-
-/** What most selectors of drawings are, one type, class or id, without the trouble of parsing. */
-function readPlain(text: string): Selector | null {
-  const match = PLAIN.exec(text);
-  if (!match) return null;
-  const [, type, name, id] = match;
-  const [test, specificity]: [Test, number] = type
-    ? [{ kind: 'type', name: type }, TYPE_WEIGHT]
-    : name
-      ? [{ kind: 'class', name }, CLASS_WEIGHT]
-      : [{ kind: 'id', id }, ID_WEIGHT];
-  return { compounds: [[test]], combinators: [], specificity };
 }
 
 class SelectorReader {
@@ -295,49 +286,4 @@ class SelectorReader {
       }
     });
   }
-}
-
-const AT = { kind: 'nth', a: 0, b: 1, fromEnd: false, ofType: false, of: null } as const satisfies NthTest;
-
-const NTH_SHORT: ReadonlyMap<string, readonly NthTest[]> = new Map<string, readonly NthTest[]>([
-  ['first-child', [AT]],
-  ['last-child', [{ ...AT, fromEnd: true }]],
-  ['only-child', [AT, { ...AT, fromEnd: true }]],
-  ['first-of-type', [{ ...AT, ofType: true }]],
-  ['last-of-type', [{ ...AT, ofType: true, fromEnd: true }]],
-  [
-    'only-of-type',
-    [
-      { ...AT, ofType: true },
-      { ...AT, ofType: true, fromEnd: true },
-    ],
-  ],
-]);
-
-function childrenOf(node: SelectorNode): SelectorNode[] {
-  return node.children?.toArray() ?? [];
-}
-
-function selectorsIn(argument: SelectorNode | undefined): SelectorNode[] {
-  if (!argument) return [];
-  return argument.type === 'SelectorList' ? childrenOf(argument) : [argument];
-}
-
-function combinatorOf(node: SelectorNode): Combinator {
-  const name = String(node.name);
-  if (name === ' ' || name === '>' || name === '+' || name === '~') return name;
-  throw new NotRead();
-}
-
-function textIn(node: SelectorNode | string | null): string {
-  if (node === null || typeof node === 'string') return node ?? '';
-  return node.type === 'String' ? String(node.value) : unescaped(String(node.name));
-}
-
-function mentionsNesting(node: SelectorNode): boolean {
-  return (
-    node.type === 'NestingSelector' ||
-    childrenOf(node).some(mentionsNesting) ||
-    (node.type === 'Nth' && node.selector !== null && mentionsNesting(node.selector))
-  );
 }
