@@ -2,6 +2,7 @@ import { type CustomValues, customValues, substituted } from './customProperties
 import { checkedValue, type Declaration, type Misread, readDeclarations } from './declarations.js';
 import type { FindingLog } from './findingLog.js';
 import { PROPERTIES } from './properties.js';
+import { DEFAULT_LIMITS } from './readingLimits.js';
 import { SelectorMatcher } from './selectorMatcher.js';
 import { reportMisread, sheetsOf } from './sheets.js';
 import { type Specified, SpecifiedValues } from './specifiedValues.js';
@@ -44,9 +45,10 @@ export class Cascade {
   constructor(
     private readonly tree: SvgTree,
     private readonly log: FindingLog,
+    private readonly styleComparisons: number = DEFAULT_LIMITS.styleComparisons,
   ) {
     this.sheet = sheetsOf(tree, log);
-    this.matcher = this.sheet ? new SelectorMatcher(tree) : null;
+    this.matcher = this.sheet ? new SelectorMatcher(tree, styleComparisons) : null;
   }
 
   /**
@@ -119,7 +121,10 @@ export class Cascade {
     const ruled = this.sheet.declarationsFor(element, id, copy?.target ?? null, this.matcher);
     if (this.matcher.compared > this.matcher.most && !this.saidGivenUp) {
       this.saidGivenUp = true;
-      this.log.add('style-limit', () => this.tree.placeOf(element), { limit: this.matcher?.most ?? 0 });
+      this.log.add('style-limit', () => this.tree.placeOf(element), {
+        limit: 'styleComparisons',
+        value: this.styleComparisons,
+      });
     }
     return inOrder(ruled, inline);
   }

@@ -25,7 +25,7 @@ export interface ReadingLimits {
   readonly copiedElements: number;
   readonly copiedSegments: number;
   readonly copiedCharacters: number;
-  /** Comparisons of style rules with elements. */
+  /** Comparisons of style rules with elements, beside fifty for each element. */
   readonly styleComparisons: number;
 }
 

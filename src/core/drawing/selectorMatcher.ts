@@ -1,3 +1,4 @@
+import { DEFAULT_LIMITS } from './readingLimits.js';
 import type { AttributeTest, NthTest, Selector, Test } from './selector.js';
 import { Siblings } from './siblings.js';
 import type { SvgElement, SvgTree } from './svgTree.js';
@@ -17,9 +18,12 @@ export class SelectorMatcher {
   private top: SvgElement | null = null;
   private anchor: SvgElement | null = null;
 
-  constructor(private readonly tree: SvgTree) {
+  constructor(
+    private readonly tree: SvgTree,
+    most: number = DEFAULT_LIMITS.styleComparisons,
+  ) {
     this.siblings = new Siblings(tree.elementCount);
-    this.most = 20_000_000 + 50 * tree.elementCount;
+    this.most = most + 50 * tree.elementCount;
   }
 
   matches(selector: Selector, element: SvgElement, top: SvgElement | null): boolean {

@@ -66,7 +66,7 @@ export class Session {
     readonly limits: ReadingLimits = DEFAULT_LIMITS,
   ) {
     this.sink = new StrokeSink(limits.segments);
-    this.cascade = new Cascade(tree, log);
+    this.cascade = new Cascade(tree, log, limits.styleComparisons);
     this.placeNumbers = new Uint32Array(tree.elementCount);
   }
 

@@ -82,7 +82,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'style-value-not-read': (v) =>
     `style not understood, and left aside: ${v.property}: ${quoted(v.found)}${times(v)}`,
   'motion-path-not-applied': (v) => `a path of motion is not applied: ${quoted(v.motion)}${times(v)}`,
-  'style-limit': (v) => `style rules beyond ${v.limit} steps of matching were left aside`,
+  'style-limit': (v) => `the matching of style rules went ${pastLimit(v)}: the rest was left aside`,
   'language-assumed': (v) =>
     `a <switch> chooses by language (${quoted(v.asked)} first): English was taken${times(v)}`,
   'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
