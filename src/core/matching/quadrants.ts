@@ -69,12 +69,24 @@ class LeafSearch {
     while (depth > 0) {
       const node = stack[--depth];
       if (!this.mayHelp(node)) continue;
-      if (node < leaves) this.lookAt(node);
-      else {
-        if (right[node] >= 0) stack[depth++] = right[node];
-        stack[depth++] = left[node];
+      if (node < leaves) {
+        this.lookAt(node);
+        continue;
       }
+      const a = left[node];
+      const b = right[node];
+      const nearFirst = b < 0 || this.squaredTo(a) <= this.squaredTo(b);
+      if (b >= 0) stack[depth++] = nearFirst ? b : a;
+      stack[depth++] = nearFirst ? a : b;
     }
+  }
+
+  private squaredTo(node: number): number {
+    const { leaf } = this;
+    const { minX, minY, maxX, maxY } = this.tree;
+    const dx = Math.max(0, minX[node] - maxX[leaf], minX[leaf] - maxX[node]);
+    const dy = Math.max(0, minY[node] - maxY[leaf], minY[leaf] - maxY[node]);
+    return dx * dx + dy * dy;
   }
 
   /** Whether a node can hold a point of some quadrant nearer than what is known; strict where quadrants are open. */
