@@ -72,8 +72,9 @@ function sideOf(
   settings: CompareSettings,
   flags: ReadingFlags & { pageHeight?: number },
 ): ComparedSide {
-  const text = readText(path);
-  if (outputKind(path) !== 'gcode') return sideOfDrawing(drawingFrom(text, path, readingOf(flags)), settings);
+  const reading = readingOf(flags);
+  const text = readText(path, reading);
+  if (outputKind(path) !== 'gcode') return sideOfDrawing(drawingFrom(text, path, reading), settings);
   const pageHeightMm = flags.pageHeight;
   const { program, findings } = readGcode(text, pageHeightMm === undefined ? {} : { pageHeightMm });
   for (const finding of program ? findings : []) {

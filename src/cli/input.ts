@@ -2,7 +2,6 @@ import { basename } from 'node:path';
 import {
   choosePens,
   type Drawing,
-  type ReadingRules,
   readDrawing,
   type Settings,
   sentence,
@@ -11,11 +10,12 @@ import {
 import { decodeText, NotText } from '../node/decodeText.js';
 import { readBytes } from '../node/files.js';
 import { Ending, EXIT } from './exitCodes.js';
+import type { Reading } from './readingOptions.js';
 
 /** The text of an input, `-` for standard input; throws an Ending where it cannot be had. */
-export function readText(path: string): string {
+export function readText(path: string, { limits }: Reading): string {
   try {
-    return decodeText(readBytes(path));
+    return decodeText(readBytes(path), limits?.unpackedBytes);
   } catch (error) {
     if (error instanceof NotText) {
       throw new Ending(EXIT.notRead, `${shownName(path)} ${error.why}`);
@@ -25,9 +25,9 @@ export function readText(path: string): string {
 }
 
 /** The drawing in a text; throws an Ending where it cannot be read. The travel that we draw is no line of it. */
-export function drawingFrom(text: string, path: string, rules: Partial<ReadingRules>): Drawing {
+export function drawingFrom(text: string, path: string, reading: Reading): Drawing {
   const name = path === '-' ? 'drawing' : basename(path);
-  const drawing = readDrawing(withoutTravel(text), { ...rules, name });
+  const drawing = readDrawing(withoutTravel(text), { ...reading, name });
   const stop = drawing.findings.find((finding) => finding.severity === 'error');
   if (stop) {
     const { line, column } = stop.place ?? { line: null, column: null };
@@ -58,10 +58,10 @@ const WHY_NOTHING = [
 export function strokedDrawingFrom(
   text: string,
   path: string,
-  rules: Partial<ReadingRules>,
+  reading: Reading,
   settings: Settings,
 ): Drawing {
-  const drawing = drawingFrom(text, path, rules);
+  const drawing = drawingFrom(text, path, reading);
   if (drawing.strokes.count > 0) {
     const chosen = choosePens(drawing, settings.pens, settings);
     if (chosen.strokes.count > 0) return drawing;

@@ -1,6 +1,6 @@
 import type { Command } from 'commander';
-import { DEFAULT_READING, type ReadingRules } from '../core/index.js';
-import { positiveNumber } from './optionValues.js';
+import { DEFAULT_READING, type ReadingLimits, type ReadingRules, type ReadOptions } from '../core/index.js';
+import { positiveNumber, readingLimit } from './optionValues.js';
 import { choice } from './sharedOptions.js';
 
 /** Options that say how a drawing is to be taken; every command that reads one has them. */
@@ -10,12 +10,14 @@ export interface ReadingFlags {
   clips: ReadingRules['clips'];
   pageEdge: ReadingRules['pageEdge'];
   fills: ReadingRules['fills'];
+  limit?: Partial<ReadingLimits>;
 }
 
 const d = DEFAULT_READING;
 
 export function addReadingOptions(command: Command): Command {
   return command
+    .option('--limit <name=n>', 'raise or lower a limit that a message names; may be repeated', readingLimit)
     .option(
       '--px-per-inch <n>',
       'user units to the inch, 90 or 72 for some older editors (default: 96)',
@@ -27,7 +29,10 @@ export function addReadingOptions(command: Command): Command {
     .addOption(choice('--fills <how>', 'shapes filled but not stroked', ['skip', 'outline'], d.fills));
 }
 
-export function readingOf(flags: ReadingFlags): Partial<ReadingRules> {
+/** What `readDrawing` is asked for. */
+export type Reading = Omit<ReadOptions, 'name'>;
+
+export function readingOf(flags: ReadingFlags): Reading {
   const { dashes, clips, pageEdge, fills } = flags;
-  return { pxPerInch: flags.pxPerInch ?? null, dashes, clips, pageEdge, fills };
+  return { pxPerInch: flags.pxPerInch ?? null, dashes, clips, pageEdge, fills, limits: flags.limit ?? {} };
 }

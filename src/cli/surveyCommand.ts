@@ -30,7 +30,8 @@ export function surveyCommand(finish: (code: number) => void): Command {
     .addHelpText('after', EXAMPLES)
     .action((path: string, flags: NetworkFlags & ReadingFlags & { json?: boolean }) => {
       const settings = settingsOf(flags);
-      const drawing = strokedDrawingFrom(readText(path), path, readingOf(flags), settings);
+      const reading = readingOf(flags);
+      const drawing = strokedDrawingFrom(readText(path, reading), path, reading, settings);
       const survey = surveyDrawing(drawing, settings, version());
       const text = flags.json
         ? JSON.stringify(survey, null, 2)

@@ -3,7 +3,6 @@ import {
   findingLines,
   type MachineProfile,
   PEN_ON_Z,
-  type ReadingRules,
   type Report,
   reportOf,
   reportTable,
@@ -17,6 +16,7 @@ import { version } from '../node/version.js';
 import { Ending, EXIT } from './exitCodes.js';
 import { readText, reason, strokedDrawingFrom } from './input.js';
 import { ProgressLine } from './progressLine.js';
+import type { Reading } from './readingOptions.js';
 
 /** One drawing to order, and what to do with the result. */
 export interface TourJob {
@@ -24,7 +24,7 @@ export interface TourJob {
   /** Where to write; `-` is standard output. */
   readonly outputs: readonly string[];
   readonly settings: Settings;
-  readonly reading: Partial<ReadingRules>;
+  readonly reading: Reading;
   readonly showTravel: boolean;
   readonly json: boolean;
   readonly quiet: boolean;
@@ -48,7 +48,7 @@ export function outputKind(path: string): OutputKind | null {
 
 /** Reads, orders, writes, audits and reports one drawing; throws an Ending where that cannot be done. */
 export function runTourJob(job: TourJob): void {
-  const drawing = strokedDrawingFrom(readText(job.input), job.input, job.reading, job.settings);
+  const drawing = strokedDrawingFrom(readText(job.input, job.reading), job.input, job.reading, job.settings);
   const progress = new ProgressLine(!job.quiet && process.stderr.isTTY === true);
   const { settings } = job;
   const until = performance.now() + 1000 * (settings.seconds ?? Number.POSITIVE_INFINITY);
