@@ -34,10 +34,16 @@ export function curveMeetings(
   size: number,
   visit: (s: number, t: number) => void,
 ): void {
-  const solver = new MeetingSolver(a, i, b, j);
   const noise = 256 * Number.EPSILON * size;
   const rounding = 8 * Number.EPSILON * size;
   const margin = tolerance + noise;
+  const pending: [CurvePiece, CurvePiece][] = [];
+  const others = startPieces(b, j, rangeB);
+  for (const p of startPieces(a, i, rangeA)) {
+    for (const q of others) if (!areApart(p, q, margin)) pending.push([p, q]);
+  }
+  if (pending.length === 0) return;
+  const solver = new MeetingSolver(a, i, b, j);
   const stop = 4 * margin;
   const own = (p: CurvePiece, t: number): boolean => {
     const slack = SLACK * (p.t1 - p.t0) + 1e-12;
@@ -78,10 +84,6 @@ export function curveMeetings(
       (s, t) => touch(p, q, s, t),
     );
 
-  const pending: [CurvePiece, CurvePiece][] = [];
-  for (const p of startPieces(a, i, rangeA)) {
-    for (const q of startPieces(b, j, rangeB)) pending.push([p, q]);
-  }
   let budget = MOST_PAIRS;
   for (let pair = pending.pop(); pair; pair = pending.pop()) {
     const [p, q] = pair;

@@ -8,9 +8,9 @@ export interface CurvePiece {
   readonly t0: number;
   readonly t1: number;
   /** Points whose convex hull holds the piece: x, y, x, y … */
-  readonly hull: Float64Array;
+  readonly hull: readonly number[];
   /** Vectors whose cone holds every direction of the piece; none where it is a point. */
-  readonly cone: Float64Array;
+  readonly cone: readonly number[];
   /** The longer side of the hull's box. */
   readonly extent: number;
 }
@@ -35,15 +35,15 @@ export function curvePiece(segments: Segments, i: number, t0: number, t1: number
   const x1 = p[0];
   const y1 = p[1];
   if (kind === LINE) {
-    return finish(t0, t1, Float64Array.of(x0, y0, x1, y1), Float64Array.of(x1 - x0, y1 - y0));
+    return finish(t0, t1, [x0, y0, x1, y1], [x1 - x0, y1 - y0]);
   }
   if (kind === CUBIC) {
     const ax = blossom(d[o], d[o + 4], d[o + 6], d[o + 2], t0, t1);
     const ay = blossom(d[o + 1], d[o + 5], d[o + 7], d[o + 3], t0, t1);
     const bx = blossom(d[o], d[o + 4], d[o + 6], d[o + 2], t1, t0);
     const by = blossom(d[o + 1], d[o + 5], d[o + 7], d[o + 3], t1, t0);
-    const cone = Float64Array.of(ax - x0, ay - y0, bx - ax, by - ay, x1 - bx, y1 - by);
-    return finish(t0, t1, Float64Array.of(x0, y0, ax, ay, bx, by, x1, y1), cone);
+    const cone = [ax - x0, ay - y0, bx - ax, by - ay, x1 - bx, y1 - by];
+    return finish(t0, t1, [x0, y0, ax, ay, bx, by, x1, y1], cone);
   }
   const half = ((t1 - t0) * d[o + 11]) / 2;
   const sc = new Float64Array(2);
@@ -52,16 +52,13 @@ export function curvePiece(segments: Segments, i: number, t0: number, t1: number
   sinCos(d[o + 10] + t0 * d[o + 11] + half, sc);
   const qx = d[o + 4] + (d[o + 6] * sc[1] + d[o + 8] * sc[0]) / cosHalf;
   const qy = d[o + 5] + (d[o + 7] * sc[1] + d[o + 9] * sc[0]) / cosHalf;
-  const cone = new Float64Array(4);
-  derivativeAt(segments, i, t0, cone);
+  derivativeAt(segments, i, t0, sc);
   derivativeAt(segments, i, t1, p);
-  cone[2] = p[0];
-  cone[3] = p[1];
-  return finish(t0, t1, Float64Array.of(x0, y0, qx, qy, x1, y1), cone);
+  return finish(t0, t1, [x0, y0, qx, qy, x1, y1], [sc[0], sc[1], p[0], p[1]]);
 }
 
 /** Vectors that are no more than rounding have no direction and are left out. */
-function finish(t0: number, t1: number, hull: Float64Array, vectors: Float64Array): CurvePiece {
+function finish(t0: number, t1: number, hull: number[], vectors: number[]): CurvePiece {
   let minX = hull[0];
   let maxX = hull[0];
   let minY = hull[1];
@@ -80,7 +77,8 @@ function finish(t0: number, t1: number, hull: Float64Array, vectors: Float64Arra
     vectors[kept + 1] = vectors[k + 1];
     kept += 2;
   }
-  return { t0, t1, hull, cone: vectors.subarray(0, kept), extent: Math.max(maxX - minX, maxY - minY) };
+  vectors.length = kept;
+  return { t0, t1, hull, cone: vectors, extent: Math.max(maxX - minX, maxY - minY) };
 }
 
 /**

@@ -1,19 +1,20 @@
 import { segmentBox } from './box.js';
 import type { Work } from './boxChain.js';
 import { pointAt } from './evaluate.js';
+import { hullsApart } from './hullsApart.js';
 import { intersectSegments } from './intersect.js';
 import { segmentLength } from './length.js';
 import { isShort } from './overlaps.js';
 import { eachOutline, type Region, sideOf, sideOfBox } from './region.js';
-import { ARC, LINE, SEGMENT_SIZE, SegmentBuilder, type Segments } from './segments.js';
+import { ARC, SEGMENT_SIZE, SegmentBuilder, type Segments } from './segments.js';
 import { appendSpan } from './split.js';
 
 /** What lies no further outside is on the edge: rounding, on its way through files too. */
 export const EDGE_TOLERANCE_MM = 1e-6;
 
-/** About what one intersection costs, in steps of `Work`; what two lines that are apart do. */
+/** About what one intersection costs, in steps of `Work`; what telling that two are apart does. */
 const MEETING_WORK = 500;
-const APART_WORK = 5;
+const APART_WORK = 10;
 
 /** What is left of a chain of segments. */
 export interface Cut {
@@ -122,7 +123,7 @@ function cutSegment(
     for (const j of outline.segmentsNear(box, tolerance, work)) {
       work.left -= APART_WORK;
       if (work.left < 0) return;
-      if (areLinesApart(chain, i, outline.segments, j, tolerance)) continue;
+      if (hullsApart(chain, i, outline.segments, j, 4 * tolerance)) continue;
       work.left -= MEETING_WORK;
       intersectSegments(chain, i, outline.segments, j, tolerance, meet, (a0, a1) => cuts.push(a0, a1));
     }
@@ -140,23 +141,6 @@ function cutSegment(
     from = cuts[k];
   }
   return removedMm;
-}
-
-/** Both are lines, and one lies wholly to one side of the other: most pairs whose boxes meet. */
-function areLinesApart(a: Segments, i: number, b: Segments, j: number, tolerance: number): boolean {
-  if (a.kind[i] !== LINE || b.kind[j] !== LINE) return false;
-  const p = a.offset[i];
-  const q = b.offset[j];
-  return liesAside(a.data, p, b.data, q, tolerance) || liesAside(b.data, q, a.data, p, tolerance);
-}
-
-function liesAside(d: Float64Array, o: number, e: Float64Array, q: number, tolerance: number): boolean {
-  const ux = d[o + 2] - d[o];
-  const uy = d[o + 3] - d[o + 1];
-  const from = ux * (e[q + 1] - d[o + 1]) - uy * (e[q] - d[o]);
-  const to = ux * (e[q + 3] - d[o + 1]) - uy * (e[q + 2] - d[o]);
-  const reach = 4 * tolerance * (Math.abs(ux) + Math.abs(uy));
-  return (from > reach && to > reach) || (from < -reach && to < -reach);
 }
 
 /** Places on a piece at which it is asked for; one may by chance be a place where it touches the edge. */
