@@ -115,7 +115,10 @@ function drawLines(shape: Shape, colour: string): number {
   reportClipping(session, element, drawn.clipping);
   if (drawn.buttDots > 0) session.report('butt-dots-not-drawn', element, {}, drawn.buttDots);
   if (drawn.overflows > 0) session.report('coordinate-overflow', element, {}, drawn.overflows);
-  if (drawn.undashed > 0) session.report('too-many-dashes', element, {}, drawn.undashed);
+  if (drawn.undashed > 0) {
+    const values = { limit: 'dashes', value: session.limits.dashes };
+    session.report('too-many-dashes', element, values, drawn.undashed);
+  }
   const gone = drawn.clipping.byClip.strokes + drawn.clipping.byPage.strokes;
   if (drawn.strokes + gone + drawn.buttDots + drawn.overflows === 0 && !reported) {
     session.report('nothing-to-draw', element);

@@ -72,7 +72,7 @@ export const READING_FINDINGS = {
   'mask-not-applied': 'warning', // mask
   'filter-not-applied': 'note', // filter
   'dashes-drawn-solid': 'note',
-  'too-many-dashes': 'warning', // count: lines drawn solid for it
+  'too-many-dashes': 'warning', // count: lines drawn solid for it; limit: its name; value
   'fill-drawn-as-outline': 'note',
   'paint-server-drawn-as-line': 'note', // paint
   'fill-ignored': 'note',

@@ -17,6 +17,8 @@ export interface ReadingLimits {
   readonly textCharacters: number;
   /** Lines, curves and arcs. */
   readonly segments: number;
+  /** Dashes cut from dashed lines. */
+  readonly dashes: number;
   /** `use` in what `use` copies. */
   readonly copyDepth: number;
   /** Copies that `use` makes. */
@@ -38,6 +40,7 @@ export const DEFAULT_LIMITS: ReadingLimits = {
   entityCharacters: 4_000_000,
   textCharacters: 100_000,
   segments: 20_000_000,
+  dashes: 2_000_000,
   copyDepth: 256,
   copies: 100_000,
   copiedElements: 1_000_000,

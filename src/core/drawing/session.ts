@@ -65,7 +65,7 @@ export class Session {
     readonly rules: ReadingRules,
     readonly limits: ReadingLimits = DEFAULT_LIMITS,
   ) {
-    this.sink = new StrokeSink(limits.segments);
+    this.sink = new StrokeSink(limits);
     this.cascade = new Cascade(tree, log, limits.styleComparisons);
     this.placeNumbers = new Uint32Array(tree.elementCount);
   }

@@ -7,7 +7,7 @@ import { LINE, SegmentBuilder, type Segments } from '../geometry/segments.js';
 import { appendTransformed } from '../geometry/transform.js';
 import { Column } from './column.js';
 import type { Strokes } from './drawing.js';
-import { DEFAULT_LIMITS } from './readingLimits.js';
+import { DEFAULT_LIMITS, type ReadingLimits } from './readingLimits.js';
 import { type Clipping, nothingClipped, StrokeClipper } from './strokeClipper.js';
 import { isDrawable, pastSegments, SubPath } from './subPath.js';
 import { orTooLarge } from './tooLarge.js';
@@ -58,9 +58,6 @@ export interface Drawn {
   readonly clipping: Clipping;
 }
 
-/** Dashes in one drawing, about as many as would be worth drawing. */
-const MOST_DASHES = 2_000_000;
-
 /** Gathers the strokes of a drawing: one per sub-path, in the order in which they come. */
 export class StrokeSink implements PathSink {
   /** Segments drawn or measured so far. */
@@ -85,9 +82,9 @@ export class StrokeSink implements PathSink {
   private dashes = 0;
   private drawn: Drawn = nothingDrawn();
 
-  /** Throws Unreadable past `limit` segments, or where memory is short. */
-  constructor(private readonly limit: number = DEFAULT_LIMITS.segments) {
-    this.sub = new SubPath(limit);
+  /** Throws Unreadable past the limit of segments, or where memory is short. */
+  constructor(private readonly limits: Pick<ReadingLimits, 'segments' | 'dashes'> = DEFAULT_LIMITS) {
+    this.sub = new SubPath(limits.segments);
   }
 
   /** Begins an element; with `properties` null its paths are measured, not drawn. */
@@ -152,7 +149,7 @@ export class StrokeSink implements PathSink {
     const { sub, drawn } = this;
     if (!sub.started) return;
     this.segmentsSeen += sub.count;
-    if (this.segmentsSeen > this.limit) throw pastSegments(this.limit);
+    if (this.segmentsSeen > this.limits.segments) throw pastSegments(this.limits.segments);
     if (sub.count > 1 || (sub.count === 1 && sub.view().kind[0] !== LINE)) this.hasArea = true;
     if (!sub.drew) {
       // A lone moveto draws nothing, dots included (SVG 2, "Zero length path segments").
@@ -166,7 +163,7 @@ export class StrokeSink implements PathSink {
 
   private line(properties: StrokeProperties): void {
     const { sub, dash, drawn } = this;
-    const dashes = dash && cutDashes(sub.view(), sub.closed, dash.pattern, MOST_DASHES - this.dashes);
+    const dashes = dash && cutDashes(sub.view(), sub.closed, dash.pattern, this.limits.dashes - this.dashes);
     if (dash && !dashes) drawn.undashed++;
     if (!dashes || dashes.whole) {
       this.stroke(properties, this.mapped(sub.view(), 0, sub.count), sub.closed, false);
@@ -175,7 +172,7 @@ export class StrokeSink implements PathSink {
     const { first, dot, segments } = dashes;
     this.dashes += dot.length;
     this.segmentsSeen += dashes.segments.count;
-    if (this.segmentsSeen > this.limit) throw pastSegments(this.limit);
+    if (this.segmentsSeen > this.limits.segments) throw pastSegments(this.limits.segments);
     for (let k = 0; k < dot.length; k++) {
       if (dot[k] && !properties.dots) continue;
       this.stroke(properties, this.mapped(segments, first[k], first[k + 1]), false, dot[k]);

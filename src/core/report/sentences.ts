@@ -105,7 +105,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'mask-not-applied': (v) => `${some(v.count, 'mask')} not applied: what it hides is drawn whole`,
   'filter-not-applied': (v) => `${some(v.count, 'filter')} not applied`,
   'dashes-drawn-solid': (v) => `${some(v.count, 'dashed line')} drawn solid`,
-  'too-many-dashes': (v) => `${some(v.count, 'line')} with more dashes than can be drawn: drawn solid`,
+  'too-many-dashes': (v) => `the dashes of ${some(v.count, 'line')} go ${pastLimit(v)}: drawn solid`,
   'fill-drawn-as-outline': (v) => `${some(v.count, 'filled shape')} drawn as their outline`,
   'paint-server-drawn-as-line': (v) =>
     `${some(v.count, 'line')} stroked with ${v.paint}: drawn as plain lines`,
