@@ -2,15 +2,13 @@ import { AttributeDefaults } from './attributeDefaults.js';
 import type { AttributeTable } from './attributeTable.js';
 import type { Column } from './column.js';
 import { readDoctype } from './doctype.js';
+import { readBeginning } from './documentBeginning.js';
 import { type Decoded, Entities, referenceAt, shownReference } from './entities.js';
 import { Unreadable } from './findingLog.js';
 import type { MarkupLexer } from './markupLexer.js';
 import type { ReadingLimits } from './readingLimits.js';
 import type { SkeletonWriter } from './skeleton.js';
-import { findForbidden, isBlank, isXmlSpace } from './xmlCharacters.js';
-
-const XML_DECLARATION =
-  /^<\?xml[ \t\r\n]+version[ \t\r\n]*=[ \t\r\n]*(?:"1\.[0-9]+"|'1\.[0-9]+')(?:[ \t\r\n]+encoding[ \t\r\n]*=[ \t\r\n]*(?:"[A-Za-z][\w.-]*"|'[A-Za-z][\w.-]*'))?(?:[ \t\r\n]+standalone[ \t\r\n]*=[ \t\r\n]*(?:"(?:yes|no)"|'(?:yes|no)'))?[ \t\r\n]*\?>$/;
+import { isBlank } from './xmlCharacters.js';
 
 /** What the scan writes, by the elements' numbers, which follow document order. */
 export interface Scanned {
@@ -48,35 +46,11 @@ class MarkupScan {
 
   run(): void {
     const { lexer } = this;
-    this.beginning();
+    readBeginning(lexer);
     this.content();
     if (lexer.open.length > 0) throw lexer.cutOff('element');
     if (!this.rootDone) throw lexer.fail('not-xml', 0, { found: lexer.text.trim().slice(0, 20) });
     this.out.writer.finish();
-  }
-
-  private beginning(): void {
-    const { lexer } = this;
-    const { text } = lexer;
-    if (text.charCodeAt(0) === 0xfeff) lexer.at = 1;
-    let first = lexer.at;
-    while (isXmlSpace(text.charCodeAt(first))) first++;
-    if (first === text.length) throw new Unreadable('empty-input', null);
-    if (text[first] !== '<') {
-      // biome-ignore lint/suspicious/noControlCharactersInRegex: kept out of what people will read.
-      const found = text.slice(first, first + 20).replace(/[\0-\x1f\ufffd]/g, '?');
-      throw lexer.fail('not-xml', first, { found });
-    }
-    const bad = findForbidden(text);
-    if (bad >= 0) throw lexer.fail('xml-bad-character', bad, { codePoint: text.charCodeAt(bad) });
-    if (!/^<\?xml[ \t\r\n]/.test(text.slice(lexer.at, lexer.at + 6))) return;
-    const end = text.indexOf('?>', lexer.at);
-    if (end < 0) throw lexer.cutOff('processing instruction');
-    const declaration = text.slice(lexer.at, end + 2);
-    if (declaration.length > 1000 || !XML_DECLARATION.test(declaration)) {
-      lexer.notStrict('the XML declaration', lexer.at);
-    }
-    lexer.at = end + 2;
   }
 
   private content(): void {
