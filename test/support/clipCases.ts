@@ -191,6 +191,23 @@ export const CLIP_CASES: Readonly<Record<string, string>> = {
     'width="60mm" height="40mm" viewBox="5 5 30 30" preserveAspectRatio="xMidYMid slice"',
   ),
   'a page whose overflow is said to show': page(HATCH, 'width="30mm" height="20mm" overflow="visible"'),
+  'a page that is turned': page(HATCH, 'width="240" height="160" viewBox="0 0 60 40" transform="rotate(12)"'),
+  'a page that is moved': page(
+    HATCH,
+    'width="240" height="160" viewBox="0 0 60 40" transform="translate(30 20)"',
+  ),
+  'children whose conditions do not hold': page(
+    `${clip('<circle cx="12" cy="20" r="9" systemLanguage="xx"/><circle cx="48" cy="20" r="9" systemLanguage="en"/>')}${hatched(BY_C)}`,
+  ),
+  'a display that a child of a clipPath inherits not, a visibility that it does': page(
+    `<g display="none" visibility="hidden">${clip('<circle cx="12" cy="20" r="9"/><circle cx="48" cy="20" r="9" visibility="visible"/>')}</g>${hatched(BY_C)}`,
+  ),
+  'lengths in em of where the clipPath stands': page(
+    `<g font-size="4">${clip('<rect x="2em" y="1em" width="8em" height="5em"/>')}</g><g font-size="9">${hatched(BY_C)}</g>`,
+  ),
+  'a transform in a style, about the middle': page(
+    `${clip('<rect x="15" y="10" width="30" height="20" style="transform-box:fill-box;transform-origin:center;transform:rotate(30deg)"/>')}${hatched(BY_C)}`,
+  ),
   'a frame on the edge of the page': page('<path d="M0 0H60V40H0z"/><path d="M-3 0H63M0 -3V43"/>'),
 
   // Basic shapes.

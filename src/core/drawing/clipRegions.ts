@@ -4,6 +4,7 @@ import { bothOf, NOWHERE, outlinesIn, type Region } from '../geometry/region.js'
 import { traceBasicShape } from './basicShape.js';
 import { readClipValue } from './clipValue.js';
 import { INITIAL_STYLE } from './computedStyle.js';
+import { holds } from './conditions.js';
 import { lengthOf, SHAPES, type Shape, traceShapeInto } from './drawElement.js';
 import { type Bounds, boundsInside, boundsOf } from './elementBounds.js';
 import { OutlineSink } from './outlineSink.js';
@@ -190,7 +191,7 @@ export class ClipRegions {
     const isShape = SHAPES.has(child.name);
     if (!isShape && child.name !== 'use' && child.name !== 'text') return;
     const specified = session.cascade.specifiedOn(child, outer.copies);
-    if (specified.get('display') === 'none') return;
+    if (specified.get('display') === 'none' || !holds(specified)) return;
     const style = styleOf(session, child, specified, outer);
     const evenOdd = ruleOf(specified, outerEvenOdd);
     const transform = transformOf(session, child, specified, style, outer, boundsOf);

@@ -1,4 +1,4 @@
-import { type Affine, applyX, applyY } from '../geometry/affine.js';
+import { type Affine, applyX, applyY, IDENTITY } from '../geometry/affine.js';
 import { Outline } from '../geometry/outline.js';
 import { bothOf, type Region } from '../geometry/region.js';
 import { SegmentBuilder } from '../geometry/segments.js';
@@ -41,9 +41,9 @@ export function viewportClip(
 
 const SHOWN_OVERFLOW: ReadonlySet<string> = new Set(['visible', 'auto']);
 
-/** The paper. */
-export function pageRegion({ widthMm, heightMm }: { widthMm: number; heightMm: number }): Region {
-  return rectangle(0, 0, widthMm, heightMm, [1, 0, 0, 1, 0, 0]);
+/** The paper; or, where the outermost svg is transformed, what that makes of its box. */
+export function pageRegion(page: { widthMm: number; heightMm: number }, map: Affine = IDENTITY): Region {
+  return rectangle(0, 0, page.widthMm, page.heightMm, map);
 }
 
 function rectangle(x: number, y: number, width: number, height: number, map: Affine): Region {

@@ -6,7 +6,8 @@ import type { ReadingRules } from './readingRules.js';
  * A line drawing after reading. You may rely on:
  *
  * - lengths in mm, y down, the origin at the page's top left; every transform, viewBox and unit resolved;
- * - one stroke per sub-path, in document order; finite numbers only;
+ * - one stroke per sub-path, or per dash or piece that a clip or the edge of the page leaves of it, in
+ *   document order; finite numbers only;
  * - consecutive segments of a stroke share their joint bit for bit;
  * - no segment of zero length, except that a dot is one LINE from a point to itself;
  * - a closed stroke ends bit for bit where it starts (the closing line is a segment of its own);

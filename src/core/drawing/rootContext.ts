@@ -1,6 +1,7 @@
 import { type Affine, IDENTITY, multiply, scaling } from '../geometry/affine.js';
+import { bothOf } from '../geometry/region.js';
 import type { Specified } from './cascade.js';
-import { clipWithin } from './clipping.js';
+import { clipWithin, pageRegion } from './clipping.js';
 import { INITIAL_STYLE, readOpacity, type Style } from './computedStyle.js';
 import { NO_LAYER } from './drawing.js';
 import type { Bounds } from './elementBounds.js';
@@ -55,7 +56,9 @@ export function rootContext(session: Session): Root {
   const inPx = { ...styled, map: multiply(map, scaling(unitMm, unitMm)) };
   const { viewportWidth, viewportHeight } = outside;
   const box: Bounds = [0, 0, viewportWidth, viewportHeight];
-  const clip = clipWithin(session, root, specified.get('clip-path'), inPx, box);
+  const isCut = session.rules.pageEdge === 'cut' && page.guess !== 'extent';
+  const moved = isCut && map !== IDENTITY ? pageRegion(page, map) : null;
+  const clip = bothOf(moved, clipWithin(session, root, specified.get('clip-path'), inPx, box));
   if (!viewBox) return { page, inside: { ...inPx, clip } };
   if (viewBox.width === 0 || viewBox.height === 0) return { page, inside: null };
   // The viewport is in mm here, so that a viewBox in mm comes out with a scale of exactly 1.
