@@ -8,7 +8,7 @@ import { disagreement, WHOLE_LINES } from '../support/readerAndBrowser.ts';
 
 /** Groups, viewports, copies, conditions, styles and shapes put together by chance, read as Chromium shows them. */
 const COUNT = 500;
-const PICTURES = 40;
+const PICTURES = 30;
 /** Share of the ink. */
 const TOLERANCE = 0.02;
 const ALLOWED = { length: 1e-4, boxMm: 0.005 };

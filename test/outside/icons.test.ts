@@ -28,7 +28,7 @@ describe.runIf(CHROMIUM !== null)('icons read as a browser shows them', () => {
   test.each(Object.entries(ICON_SETS))('%s: each file by itself, and all on one sheet', async (set, from) => {
     const icons = spread(readIcons(set as keyof typeof ICON_SETS), 320);
     const text = sheetAsTheyAre(icons, COLUMNS);
-    const [outside] = await drawInBrowser(browser(), [text]);
+    const [outside] = await drawInBrowser(browser(), [text], true);
     expect(outside.arcsDiffer).toBeLessThan(5e-4);
     expect(outside.wholesDiffer).toBeLessThan(1e-3);
     const perCell: BrowserStroke[][] = icons.map(() => []);
@@ -46,7 +46,7 @@ describe.runIf(CHROMIUM !== null)('icons read as a browser shows them', () => {
 
   test('turned, mirrored, stretched, skewed, fitted into viewports and copied', async () => {
     const text = sheetTransformed(transformed, COLUMNS);
-    const [outside] = await drawInBrowser(browser(), [text]);
+    const [outside] = await drawInBrowser(browser(), [text], true);
     expect(outside.copies).toBe(transformed.length / 5);
     expect(outside.copiesDiffer).toBeLessThan(1e-3);
     expect(outside.wholesDiffer).toBeLessThan(1e-3);

@@ -16,7 +16,7 @@ describe.runIf(CHROMIUM !== null)('path data', () => {
     { what: 'with a slip, up to the error', texts: pathTextWithSlip },
   ])('$what', async ({ what, texts }) => {
     const paths = fc.sample(texts, { numRuns: COUNT, seed: 7 });
-    const [outside] = await drawInBrowser(browser(), [drawingOf(paths)]);
+    const [outside] = await drawInBrowser(browser(), [drawingOf(paths)], true);
     expect(outside.arcsDiffer).toBeLessThan(1e-3);
     expect(outside.wholesDiffer).toBeLessThan(1e-3);
     const perPath: BrowserStroke[][] = paths.map(() => []);

@@ -10,8 +10,8 @@ import { flattenSegment } from '../../src/core/geometry/flatten.ts';
  * size, and what is inked in one picture is looked for in the other, within a few px.
  */
 
-/** Across the longer side; a line of 0.3 mm on a page of 60 mm is 4 px wide. */
-const LONGER_SIDE_PX = 800;
+/** Across the longer side; a line of 0.3 mm on a page of 60 mm is 3 px wide. */
+const LONGER_SIDE_PX = 600;
 const ACCURACY_MM = 0.002;
 const IN_PAGE = readFileSync(new URL('./picturesInPage.js', import.meta.url), 'utf8');
 

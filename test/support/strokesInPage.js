@@ -1,10 +1,10 @@
 // Runs inside the browser, on an SVG document: what it draws, one entry per sub-path. The text of this
-// file is one expression; its value is that of `BrowserDrawing` in browser.ts.
+// file is one function expression; it gives a `BrowserDrawing`, see browser.ts.
 //
 // The browser parses (the `d` of the computed style: absolute commands), resolves styles and transforms,
 // and measures; here only shapes become paths (SVG 2, chapter Basic Shapes) and paths fall into sub-paths.
 // getTotalLength is coarse on small shapes, so that everything is measured at 20,000 px across.
-(() => {
+(measuredTwice) => {
   const SVG = 'http://www.w3.org/2000/svg';
   const SHAPES = 'path,line,rect,circle,ellipse,polyline,polygon';
   const NEVER_DRAWN = 'defs,symbol,clipPath,mask,pattern,marker,linearGradient,radialGradient,filter';
@@ -26,11 +26,13 @@
   for (const { element, tag, id, shown, matrix, commands, enlarged } of shapes) {
     if (!shown) continue;
     const subPaths = cut(commands);
-    const whole = subPaths.reduce((sum, pieces) => sum + measured(pieces, unmoved).length, 0);
-    if (whole > 0) wholesDiffer = Math.max(wholesDiffer, differenceToWhole(enlarged, commands, whole));
+    if (measuredTwice) {
+      const whole = subPaths.reduce((sum, pieces) => sum + measured(pieces, unmoved).length, 0);
+      if (whole > 0) wholesDiffer = Math.max(wholesDiffer, differenceToWhole(enlarged, commands, whole));
+    }
     for (const pieces of subPaths) {
       const arcs = pieces.filter((piece) => piece.code === 'A');
-      arcsDiffer = Math.max(arcsDiffer, ...arcs.map(arcDifference));
+      if (measuredTwice) arcsDiffer = Math.max(arcsDiffer, ...arcs.map(arcDifference));
       const { length, box } = measured(pieces, matrix);
       if (length === 0 && shown.cap === 'butt') continue;
       strokes.push({
@@ -471,4 +473,4 @@
     large.remove();
     return Math.abs(whole - lengthPx) / Math.max(lengthPx, 1);
   }
-})();
+};

@@ -59,8 +59,8 @@ export const DASHES: Cases = {
   ),
   // At the size of the picture, since what does not scale in a drawing does when the drawing is enlarged.
   'dashes of a stroke that does not scale': root(
-    'width="800" height="640" viewBox="0 0 100 80" stroke-width="4"',
-    '<g transform="scale(.5)"><path vector-effect="non-scaling-stroke" stroke-dasharray="50 30" d="M10 30C140 -20 80 220 180 40"/></g>',
+    'width="600" height="480" viewBox="0 0 100 80" stroke-width="4"',
+    '<g transform="scale(.5)"><path vector-effect="non-scaling-stroke" stroke-dasharray="37 23" d="M10 30C140 -20 80 220 180 40"/></g>',
   ),
 };
 
