@@ -31,6 +31,12 @@ describe('the page', () => {
     );
   });
 
+  // CSS Values and Units Level 3, §5.1.1: em is the font size of the element, rem that of the root.
+  test('a size in units of the font is of the font of the root', () => {
+    expect(sizeOf('width="9.6em" height="19.2rem" font-size="10" viewBox="0 0 1 2"')).toEqual([25.4, 50.8]);
+    expect(sizeOf('width="6em" height="12rem" viewBox="0 0 1 2"')).toEqual([25.4, 50.8]);
+  });
+
   test('a viewBox in mm gives coordinates exactly as they are written', () => {
     expect(textsOf(page('width="210mm" height="297mm" viewBox="0 0 210 297"'), 15)).toEqual([
       '10,20 L 30,20',

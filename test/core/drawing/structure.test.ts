@@ -161,7 +161,26 @@ describe('use', () => {
   });
 });
 
+describe('copies of each other', () => {
+  // SVG 2, "The use element": a reference to an ancestor, copies counted, makes none. Chromium draws these four.
+  test('stop where what is copied would stand in itself', () => {
+    expectSame(
+      '<g id="a"><path d="M1 1h9"/><use href="#b" x="9"/></g><g id="b"><path d="M1 5h9"/><use href="#a" y="9"/></g>',
+      '<path d="M1 1h9"/><path d="M10 5h9"/><path d="M1 5h9"/><path d="M1 10h9"/>',
+    );
+  });
+});
+
 describe('switch', () => {
+  // SVG 2, "The switch element": the first child whose conditions hold, whatever it is; Chromium does so too.
+  test('a title or defs before all others is chosen, and nothing drawn', () => {
+    for (const first of ['<title>t</title>', '<defs/>']) {
+      const drawing = readBody(`<switch>${first}<g ${STROKED}><path d="M1 1h1"/></g></switch>`);
+      expect(drawing.strokes.count).toBe(0);
+      expect(codesOf(drawing)).toContain('switch-without-match');
+    }
+  });
+
   test('draws the first child whose conditions hold', () => {
     expectSame(
       '<switch><path systemLanguage="xx" d="M9 9h1"/><path systemLanguage="xx, en-GB" d="M1 1h1"/><path d="M2 2h1"/></switch>',
