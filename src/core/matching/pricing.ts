@@ -131,8 +131,8 @@ export class Pricer {
       if (right[a] >= 0) stack.push(left[a], right[a], right[a], right[a]);
     } else {
       // The higher node is the later one: split it.
-      const high = a > b ? a : b;
-      const low = a > b ? b : a;
+      const high = Math.max(a, b);
+      const low = Math.min(a, b);
       stack.push(left[high], low);
       if (right[high] >= 0) stack.push(right[high], low);
     }

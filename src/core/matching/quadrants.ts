@@ -97,8 +97,8 @@ class LeafSearch {
     const left = minX[leaf] - maxX[node];
     const below = minY[node] - maxY[leaf];
     const above = minY[leaf] - maxY[node];
-    const dx = right > 0 ? right : left > 0 ? left : 0;
-    const dy = below > 0 ? below : above > 0 ? above : 0;
+    const dx = Math.max(0, right, left);
+    const dy = Math.max(0, below, above);
     const squared = dx * dx + dy * dy;
     return (
       (squared < reach[0] && left <= 0 && above <= 0) ||
