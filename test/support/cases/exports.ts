@@ -117,14 +117,14 @@ const editor = `<?xml version="1.0" encoding="utf-8"?>
 	<!ATTLIST g tool:layer CDATA #IMPLIED>
 ]>
 <svg version="1.1" id="base" xmlns:tool="&ns_tool;" xmlns="&ns_svg;" xmlns:xlink="&ns_xlink;" x="0px" y="0px" width="240px" height="160px" viewBox="0 0 240 160" enable-background="new 0 0 240 160" xml:space="preserve">
-<switch><foreignObject requiredExtensions="&ns_tool;" x="0" y="0" width="1" height="1"><tool:pgfRef xlink:href="#data"/></foreignObject>
+<switch><foreignObject requiredExtensions="&ns_tool;" x="0" y="0" width="1" height="1"><tool:dataRef xlink:href="#data"/></foreignObject>
 <g tool:extraneous="self">
 <g id="Cut" tool:layer="yes"><path style="&st0;" d="M20,20c10-15,30-15,40,0s30,15,40,0s30-15,40,0v60H20V20z"/><line fill="none" stroke="#ED1C24" stroke-miterlimit="10" x1="20" y1="100" x2="220" y2="140"/></g>
 <g id="Score" tool:layer="yes" stroke-dasharray="4,3">${list(5, (i) => `<polyline style="&st0;" points="${20 + 40 * i},150 ${30 + 40 * i},${110 - 10 * i} ${50 + 40 * i},150 "/>`)}</g>
 <g id="Notes" tool:layer="yes" display="none"><path style="&st0;" d="M0,0L240,160"/></g>
 <g><g><defs><rect id="SVGID_1_" x="150" y="20" width="70" height="50"/></defs><clipPath id="SVGID_2_"><use xlink:href="#SVGID_1_" overflow="visible"/></clipPath><g clip-path="url(#SVGID_2_)">${list(8, (i) => `<ellipse fill="none" stroke="#0072BC" cx="185" cy="45" rx="${6 * i + 4}" ry="${4 * i + 3}"/>`)}</g></g></g>
 </g></switch>
-<tool:pgf id="data"><![CDATA[ <path d="M0 0h99"/> ]]></tool:pgf>
+<tool:data id="data"><![CDATA[ <path d="M0 0h99"/> ]]></tool:data>
 </svg>`;
 
 const layered = `<?xml version="1.0" encoding="UTF-8" standalone="no"?>

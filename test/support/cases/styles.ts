@@ -88,4 +88,10 @@ export const STYLES: Cases = {
   'non-scaling strokes and paint order': page(
     '<g transform="scale(3)"><path vector-effect="non-scaling-stroke" paint-order="stroke" d="M1 1h9"/></g>',
   ),
+  'words of display and visibility': page(
+    '<path d="M1 5h9" display="NONE"/><path d="M1 9h9" display="block"/><path d="M1 13h9" display="junk"/><g display="contents"><path d="M1 17h9"/></g><path d="M1 21h9" display=" none "/><path d="M1 25h9" visibility="HIDDEN"/><path d="M1 29h9" visibility="junk"/><path d="M1 33h9" visibility=" collapse"/>',
+  ),
+  'widths and opacities of all but nothing': page(
+    '<path d="M1 5h9" stroke-width="1e-3"/><path d="M1 9h9" stroke-width="calc(1px - 1px)"/><path d="M1 13h9" stroke-width="calc(1px - 5px)"/><path d="M1 17h9" opacity="0.0%"/><path d="M1 21h9" stroke-opacity="-5"/><path d="M1 25h9" opacity="junk"/><path d="M1 29h9" opacity="calc(1 - 1)"/>',
+  ),
 };

@@ -1,6 +1,55 @@
 import { type Cases, LINE, page, root, SQUIGGLE } from './make.ts';
 
+const WELL_SPELT = [
+  'translate(5-6)',
+  'translate(1e1,2E0)',
+  'scale(2)translate(3)',
+  'rotate (20)',
+  'rotate(30 5 5)',
+  'rotate(30,5,5)',
+  'scale(-2)',
+  'translate(+5,+6)',
+  'translate(5 , 6)',
+  'rotate(20 )  scale( 2 )',
+  'none',
+];
+const MISSPELT = [
+  'translate(5. 6)',
+  'translate(5,6,)',
+  'translate(,5)',
+  'rotate(20),',
+  ',rotate(20)',
+  'rotate(20),,scale(2)',
+  'Rotate(20)',
+  'matrix(1 0 0 1 5)',
+  'matrix(1,0,0,1,5,6,7)',
+  'skew(10)',
+  'skewX(10 5)',
+  'translate(5 6) junk',
+  'translate(5 6',
+  'translate(5,,6)',
+  'rotate(20)/**/',
+  'inherit',
+];
+/** Of CSS, where the attribute is read as CSS reads it. */
+const SPELT_AS_IN_STYLES = [
+  'rotate(20deg)',
+  'translate(5px)',
+  'translate(5%)',
+  'rotate(.5turn)',
+  'rotateZ(20)',
+  'translate3d(5,6,0)',
+  'scale(50%)',
+  'translateX(5)',
+  'scaleX(2)',
+];
+const each = (lists: readonly string[]) =>
+  page(lists.map((list, i) => `<g transform="${list}"><path d="M${9 * i} 9h9v9"/></g>`).join(''));
+
 export const TRANSFORMS: Cases = {
+  'transform lists that are right': each(WELL_SPELT),
+  'transform lists that are wrong': each(MISSPELT),
+  'transform lists as in styles': each(SPELT_AS_IN_STYLES),
   'every transform': page(
     `<g transform="translate(30)scale(1.5),rotate(20 10 10)skewX(10) skewY(-5)matrix(1 .1 0 .9 2 3)">${SQUIGGLE}</g>`,
   ),
