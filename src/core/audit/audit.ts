@@ -1,6 +1,7 @@
 import type { Finding } from '../finding.js';
 import { BridgeInspector } from './bridges.js';
 import { coveredOtherwise, matchSpecks, specksOf } from './dots.js';
+import { exchangeLeftovers } from './exchange.js';
 import { totalLength } from './intervals.js';
 import { Ledger } from './ledger.js';
 import type { LineSet } from './lineSet.js';
@@ -62,6 +63,7 @@ export function auditLines(wanted: LineSet, drawn: LineSet, options: AuditOption
 
   const deviations = [0, pairAlongThreads(wantedSide, drawnSide, tolerances)];
   for (const deviation of whole.drawn) if (deviation > deviations[0]) deviations[0] = deviation;
+  exchangeLeftovers(wantedSide, drawnSide, tolerances);
   const drawnAgain = drawnAgainMm(wantedSide, tolerances);
   if (once) excuseRepeats(wantedSide, drawnSide, tolerances);
 
@@ -89,8 +91,8 @@ function settleSpecks(
   tolerances: Tolerances,
   ledger: Ledger,
 ): { wantedChains: Set<number>; drawnChains: Set<number>; deviation: number } {
-  const wantedSpecks = specksOf(wanted, tolerances.hairMm);
-  const drawnSpecks = specksOf(drawn, tolerances.hairMm);
+  const wantedSpecks = specksOf(wanted, tolerances);
+  const drawnSpecks = specksOf(drawn, tolerances);
   const { mate, taken, deviation } = matchSpecks(wantedSpecks, drawnSpecks, tolerances);
   const covered = coveredOtherwise(wantedSpecks, mate, drawn, once, tolerances);
   for (let i = 0; i < mate.length; i++) {
@@ -127,12 +129,16 @@ function settleWanted(
   return missingMm;
 }
 
-/** A stroke with nothing paired is lost even where other lines pass; else fringe is allowed for. */
+/**
+ * A stroke with nothing paired is lost even where other lines pass; else fringe is allowed for. Corners of
+ * what repeats another line leave fringe as far from it as the repeat is.
+ */
 function isLost(stretch: Stretch, drawn: Side, tolerances: Tolerances): boolean {
   if (stretch.atStart && stretch.atEnd) return true;
   if (stretch.lengthMm > fringeMm(stretch.deviation, tolerances)) return true;
-  const near = totalLength(nearParts(stretch, drawn, tolerances.matchMm));
-  return stretch.lengthMm - near > tolerances.hairMm;
+  const { matchMm, repeatMm, hairMm } = tolerances;
+  const reach = stretch.besideExcused ? matchMm + repeatMm : matchMm;
+  return stretch.lengthMm - totalLength(nearParts(stretch, drawn, reach)) > hairMm;
 }
 
 function settleDrawn(
@@ -142,7 +148,7 @@ function settleDrawn(
   tolerances: Tolerances,
   ledger: Ledger,
 ): { extraMm: number; twiceMm: number; bridgedMm: number } {
-  const inspector = new BridgeInspector(wanted, tolerances);
+  const inspector = new BridgeInspector(wanted, drawn, tolerances);
   let extraMm = 0;
   let twiceMm = 0;
   let bridgedMm = 0;

@@ -1,3 +1,4 @@
+import { LINE } from '../geometry/segments.js';
 import { BoxIndex } from './boxIndex.js';
 import { totalLength } from './intervals.js';
 import { isNear, nearParts, visitPieces } from './nearness.js';
@@ -11,6 +12,8 @@ const MOST_PIECES = 64;
 /** Straight parts of an unpaired stretch with bridges: two bridges, and what either may have displaced. */
 const MOST_LEGS = 4;
 const MOST_BRIDGES = 2;
+/** Segments of a run before and after a stretch among which the bridge is looked for. */
+const CLOSE_BY = 3;
 /** Points of a stretch that is looked at: bridges have few. */
 const MOST_POINTS = 64;
 
@@ -31,14 +34,15 @@ const MOST_POINTS = 64;
  * - an end of a wanted stroke, or a crossing of two wanted lines, lies within snap distance and match
  *   tolerance of it. In the midst of neighbours there is nothing to bridge;
  * - where all of it lies beside wanted lines, so that it may as well be a line drawn too far, it leads
- *   from one place where a bridge may start to another: an end of a stroke, a crossing, or the point of a
- *   wanted line that is nearest to a stroke's end.
+ *   from one place where a bridge may start to another (an end of a stroke, a crossing, or the point of a
+ *   wanted line that is nearest to a stroke's end), or lines of its run close by do.
  */
 export class BridgeInspector {
   private ends: { index: BoxIndex; boxes: Float64Array; pen: Uint32Array } | null = null;
 
   constructor(
     private readonly wanted: Side,
+    private readonly drawn: Side,
     private readonly tolerances: Tolerances,
   ) {}
 
@@ -48,21 +52,47 @@ export class BridgeInspector {
     if (stretch.lengthMm > MOST_LEGS * (snapMm + 2 * matchMm) || stretch.x.length > MOST_POINTS) return false;
     const bridges = this.fewestBridges(stretch);
     if (bridges > MOST_BRIDGES) return false;
-    if (bridges === 0) return this.isAnchor(stretch, 0) && this.isAnchor(stretch, stretch.x.length - 1);
+    if (bridges === 0) return this.leadsAcross(stretch) || this.isDisplaced(stretch);
     const reach = snapMm + matchMm;
     return this.isNearEnd(stretch, reach) || this.isNearCrossing(stretch, reach);
   }
 
-  /** Whether a bridge may start at point k of a stretch. */
-  private isAnchor({ x, y, pen }: Stretch, k: number): boolean {
+  private leadsAcross({ x, y, pen }: Stretch): boolean {
+    const last = x.length - 1;
+    return this.isAnchor(x[0], y[0], pen) && this.isAnchor(x[last], y[last], pen);
+  }
+
+  /** Whether its run has, close by, lines that may be bridges of at least its length. */
+  private isDisplaced({ chain, span, pen, lengthMm }: Stretch): boolean {
+    const { snapMm, matchMm } = this.tolerances;
+    const { lines, spans } = this.drawn;
+    const { kind, offset, data: d } = lines.segments;
+    const low = Math.max(lines.first[chain], spans.segment[span[0]] - CLOSE_BY);
+    const high = Math.min(lines.first[chain + 1], spans.segment[span[span.length - 1]] + CLOSE_BY + 1);
+    for (let i = low; i < high; i++) {
+      const o = offset[i];
+      if (kind[i] !== LINE || !this.isAnchor(d[o], d[o + 1], pen)) continue;
+      let length = 0;
+      for (let j = i; j < Math.min(high, i + MOST_LEGS) && kind[j] === LINE; j++) {
+        const q = offset[j];
+        length += between(d[q], d[q + 1], d[q + 2], d[q + 3]);
+        if (length > MOST_BRIDGES * (snapMm + 2 * matchMm)) break;
+        if (length + 2 * matchMm >= lengthMm && this.isAnchor(d[q + 2], d[q + 3], pen)) return true;
+      }
+    }
+    return false;
+  }
+
+  /** Whether a bridge may start at a place. */
+  private isAnchor(x: number, y: number, pen: number): boolean {
     const { snapMm, matchMm, hairMm } = this.tolerances;
     const reach = matchMm + hairMm;
-    const at = { x: [x[k], x[k]], y: [y[k], y[k]], pen };
+    const at = { x: [x, x], y: [y, y], pen };
     if (this.isNearEnd(at, reach) || this.isNearCrossing(at, reach)) return true;
     let found = false;
-    this.visitEnds(x[k], y[k], x[k], y[k], pen, snapMm + matchMm, (px, py) => {
-      visitPieces(this.wanted, this.wanted.index, pen, x[k], y[k], x[k], y[k], reach, (v) => {
-        found = Math.abs(alongPiece(this.wanted, v, px - x[k], py - y[k])) <= reach;
+    this.visitEnds(x, y, x, y, pen, snapMm + matchMm, (px, py) => {
+      visitPieces(this.wanted, this.wanted.index, pen, x, y, x, y, reach, (v) => {
+        found = Math.abs(alongPiece(this.wanted, v, px - x, py - y)) <= reach;
         return found;
       });
       return found;

@@ -11,44 +11,49 @@ export interface Specks {
   /** The chain of each, and whether it is a dot or a stroke so small that rounding may make it one. */
   readonly chain: number[];
   readonly isDot: boolean[];
+  /** How far it reaches. */
+  readonly extent: number[];
 }
 
 /**
- * The dots of a side, and its strokes of which nothing is paired and that reach no farther than two
- * hairs: written with few decimals such a stroke becomes a dot, or a stroke in any direction.
+ * The dots of a side, and its strokes of which nothing is paired and that reach no farther than the match
+ * tolerance: written with few decimals such a stroke becomes a dot, or a stroke in any direction.
  */
-export function specksOf(side: Side, hairMm: number): Specks {
+export function specksOf(side: Side, { matchMm }: Tolerances): Specks {
   const { lines, spans } = side;
   const { segments, first } = lines;
-  const specks: Specks = { x: [], y: [], pen: [], chain: [], isDot: [] };
+  const specks: Specks = { x: [], y: [], pen: [], chain: [], isDot: [], extent: [] };
   for (let c = 0; c < lines.count; c++) {
     if (first[c] === first[c + 1]) continue;
     const noExtent = spans.firstOfChain[c] === spans.firstOfChain[c + 1];
     const isDot = lines.dot[c] === 1 || noExtent;
-    if (!isDot && !isTinyAndLoose(side, c, hairMm)) continue;
+    const extent = isDot ? 0 : looseExtent(side, c, matchMm);
+    if (extent > matchMm) continue;
     const o = segments.offset[first[c]];
     specks.x.push(segments.data[o]);
     specks.y.push(segments.data[o + 1]);
     specks.pen.push(lines.pen[c]);
     specks.chain.push(c);
     specks.isDot.push(isDot);
+    specks.extent.push(extent);
   }
   return specks;
 }
 
-function isTinyAndLoose(side: Side, chain: number, hairMm: number): boolean {
+/** How far a chain reaches; infinite where that is beyond a limit, or something of it is paired. */
+function looseExtent(side: Side, chain: number, limit: number): number {
   const { firstOfChain } = side.spans;
   let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity];
   for (let span = firstOfChain[chain]; span < firstOfChain[chain + 1]; span++) {
-    if (side.touched[span] === 1) return false;
+    if (side.touched[span] === 1) return Number.POSITIVE_INFINITY;
     const { boxes } = side;
     minX = Math.min(minX, boxes[4 * span]);
     minY = Math.min(minY, boxes[4 * span + 1]);
     maxX = Math.max(maxX, boxes[4 * span + 2]);
     maxY = Math.max(maxY, boxes[4 * span + 3]);
-    if (maxX - minX > 2 * hairMm || maxY - minY > 2 * hairMm) return false;
+    if (maxX - minX > limit || maxY - minY > limit) return Number.POSITIVE_INFINITY;
   }
-  return true;
+  return Math.max(maxX - minX, maxY - minY);
 }
 
 /**
@@ -93,7 +98,7 @@ export function matchSpecks(
 /**
  * Which of the wanted specks without a mate are drawn all the same: by a line passing within the snap
  * distance; a dot, where repeats are drawn once, by the mate of another within the repeat tolerance; a
- * tiny stroke by any ink within the match tolerance.
+ * stroke no longer than two hairs by any ink within the match tolerance.
  */
 export function coveredOtherwise(
   wanted: Specks,
@@ -106,7 +111,8 @@ export function coveredOtherwise(
   const repeats = once ? new MatedSpecks(wanted, mate) : null;
   for (let i = 0; i < mate.length; i++) {
     if (mate[i] >= 0) continue;
-    const { snapMm, matchMm, repeatMm } = tolerances;
+    const { snapMm, matchMm, hairMm, repeatMm } = tolerances;
+    if (wanted.extent[i] > 2 * hairMm) continue;
     const reach = wanted.isDot[i] ? snapMm + matchMm : matchMm;
     const onLine = isNear(wanted.x[i], wanted.y[i], drawn, wanted.pen[i], reach);
     if (onLine || repeats?.hasNear(i, repeatMm)) covered[i] = 1;

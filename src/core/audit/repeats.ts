@@ -1,7 +1,7 @@
 import { LINE } from '../geometry/segments.js';
 import { BoxIndex } from './boxIndex.js';
 import { spansWithCompany } from './company.js';
-import { addInterval, type Intervals } from './intervals.js';
+import { addInterval, type Intervals, totalLength } from './intervals.js';
 import { isNear, visitPieces } from './nearness.js';
 import { deviationOf } from './sameSegment.js';
 import type { Side } from './side.js';
@@ -44,7 +44,7 @@ export function excuseRepeats(wanted: Side, drawn: Side, tolerances: Tolerances)
     // Only now: what is excused in a pass must not excuse others in the same pass.
     for (const { span, piece, parts } of excuses) {
       for (let i = 0; i < parts.length; i += 2) {
-        wanted.pair(span, piece, parts[i], parts[i + 1], tolerances.repeatMm);
+        wanted.excuse(span, piece, parts[i], parts[i + 1], tolerances.repeatMm);
       }
     }
   }
@@ -58,7 +58,7 @@ function excuseTwins(wanted: Side, { sameMm, repeatMm }: Tolerances): void {
   for (let i = 0; i < twins.length; i++) {
     if (twins[i] < 0) continue;
     for (let span = spans.firstOfSegment[i]; span < spans.firstOfSegment[i + 1]; span++) {
-      wanted.excuse(span, twins[i]);
+      wanted.excuseSpan(span, twins[i]);
     }
   }
 }
@@ -202,13 +202,15 @@ function againParts(
   const own = paired.side.pairedParts(span, v, 0, 1);
   const parts: Intervals = [];
   if (own.length === 0) return parts;
+  // In a crowd nearly all of a line will do, or every line would be held against every other.
+  const enough = totalLength(own) - tolerances.repeatMm / paired.side.pieceLength(v);
   visitPairedBeside(paired, v, pen, tolerances.repeatMm, PARALLEL_COSINE, isEarlier, (low, high) => {
     for (let i = 0; i < own.length; i += 2) {
       const from = Math.max(low, own[i]);
       const to = Math.min(high, own[i + 1]);
       if (to > from) addInterval(parts, from, to, 1e-12);
     }
-    return parts.length === 2 && parts[0] <= 0 && parts[1] >= 1;
+    return totalLength(parts) >= enough;
   });
   return parts;
 }

@@ -28,6 +28,8 @@ export class Side {
   readonly whole: Uint8Array;
   /** 1 where any of a span is paired. */
   readonly touched: Uint8Array;
+  /** 1 where any of a span counts as paired because it repeats what is. */
+  readonly excused: Uint8Array;
   /** 1 for each segment that was paired whole, unflattened. */
   readonly wholeSegment: Uint8Array;
   x = new Float64Array(1024);
@@ -52,6 +54,7 @@ export class Side {
     this.deviation = new Float64Array(count);
     this.whole = new Uint8Array(count);
     this.touched = new Uint8Array(count);
+    this.excused = new Uint8Array(count);
     this.wholeSegment = new Uint8Array(wholeDeviation.length);
     for (let i = 0; i < wholeDeviation.length; i++) if (wholeDeviation[i] >= 0) this.wholeSegment[i] = 1;
     for (let span = 0; span < count; span++) {
@@ -191,10 +194,16 @@ export class Side {
     if (this.piecesLeft[span] === 0) this.whole[span] = 1;
   }
 
-  /** Marks all of a span as paired. */
-  excuse(span: number, deviation: number): void {
+  /** Marks all of a span as repeating what is paired. */
+  excuseSpan(span: number, deviation: number): void {
     if (deviation > this.deviation[span]) this.deviation[span] = deviation;
-    this.touched[span] = this.whole[span] = 1;
+    this.excused[span] = this.touched[span] = this.whole[span] = 1;
+  }
+
+  /** Marks part of a piece as repeating what is paired. */
+  excuse(span: number, v: number, from: number, to: number, deviation: number): void {
+    this.excused[span] = 1;
+    this.pair(span, v, from, to, deviation);
   }
 
   private push(x: number, y: number): void {

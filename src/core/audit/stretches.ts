@@ -17,6 +17,8 @@ export interface Stretch {
   readonly atEnd: boolean;
   /** Largest deviation of what is paired before and after it on the chain. */
   readonly deviation: number;
+  /** Whether what comes before or after it is not drawn itself, but repeats what is. */
+  readonly besideExcused: boolean;
 }
 
 /** All stretches of a side that are not paired, in order; those shorter than a hair only where they are a chain of their own. */
@@ -28,17 +30,16 @@ export function unpairedStretches(side: Side, hairMm: number): Stretch[] {
     const to = firstOfChain[chain + 1];
     let open: OpenStretch | null = null;
     let pairedBefore = -1;
-    const close = (deviation: number, atEnd: boolean): void => {
+    const close = (pairedAfter: number): void => {
       if (open === null) return;
-      const stretch = open.finish(deviation, atEnd);
-      if (stretch.lengthMm > hairMm || (stretch.atStart && atEnd)) stretches.push(stretch);
+      const stretch = open.finish(pairedAfter);
+      if (stretch.lengthMm > hairMm || (stretch.atStart && stretch.atEnd)) stretches.push(stretch);
       open = null;
     };
     for (let span = from; span < to; span++) {
-      const { deviation } = side;
       if (side.whole[span] === 1) {
-        close(deviation[span], false);
-        pairedBefore = deviation[span];
+        close(span);
+        pairedBefore = span;
         continue;
       }
       const first = side.flatten(span);
@@ -47,20 +48,20 @@ export function unpairedStretches(side: Side, hairMm: number): Stretch[] {
         let at = 0;
         for (let i = 0; i < free.length; i += 2) {
           if (free[i] > at) {
-            close(deviation[span], false);
-            pairedBefore = deviation[span];
+            close(span);
+            pairedBefore = span;
           }
           open ??= new OpenStretch(side, chain, pairedBefore);
           open.add(span, v, free[i], free[i + 1]);
           at = free[i + 1];
         }
         if (at < 1) {
-          close(deviation[span], false);
-          pairedBefore = deviation[span];
+          close(span);
+          pairedBefore = span;
         }
       }
     }
-    close(-1, true);
+    close(-1);
   }
   return stretches;
 }
@@ -74,7 +75,7 @@ class OpenStretch {
   private readonly to: number[] = [];
   private lengthMm = 0;
 
-  /** @param before deviation of what is paired before; negative at the chain's start. */
+  /** @param before span of what is paired before; negative at the chain's start. */
   constructor(
     private readonly side: Side,
     private readonly chain: number,
@@ -92,12 +93,18 @@ class OpenStretch {
     this.lengthMm += (to - from) * this.side.pieceLength(v);
   }
 
-  finish(after: number, atEnd: boolean): Stretch {
+  finish(after: number): Stretch {
     const { chain, x, y, span, piece, from, to, lengthMm, before } = this;
     const pen = this.side.lines.pen[chain];
-    const atStart = before < 0;
-    const deviation = Math.max(before, after, 0);
-    return { chain, pen, x, y, span, piece, from, to, lengthMm, atStart, atEnd, deviation };
+    const [atStart, atEnd] = [before < 0, after < 0];
+    let deviation = 0;
+    let besideExcused = false;
+    for (const neighbour of [before, after]) {
+      if (neighbour < 0) continue;
+      deviation = Math.max(deviation, this.side.deviation[neighbour]);
+      if (this.side.excused[neighbour] === 1) besideExcused = true;
+    }
+    return { chain, pen, x, y, span, piece, from, to, lengthMm, atStart, atEnd, deviation, besideExcused };
   }
 
   private point(x: number, y: number): void {
