@@ -1,5 +1,5 @@
-import { randomBelow } from '../../src/core/structures/random.ts';
 import type { LineSet } from '../../src/core/audit/lineSet.ts';
+import { randomBelow } from '../../src/core/structures/random.ts';
 import { type Chain, chainsOf, flattened, reversed, type Segment, spanOf } from './chains.ts';
 
 /** Segments `from` up to `to` of a chain replaced: `parts[0]` goes on from what stands before, the last part
@@ -41,7 +41,11 @@ export class OutputSheet {
     this.wanted = chainsOf(wanted).flatMap((chain) => flattened(chain, 0.001).segments);
     chains.forEach((chain, c) => {
       if (chain.dot) this.dots.push(c);
-      else chain.segments.forEach((segment, k) => this.picks.push({ c, k, segment, size: sizeOf(segment) }));
+      else {
+        chain.segments.forEach((segment, k) => {
+          this.picks.push({ c, k, segment, size: sizeOf(segment) });
+        });
+      }
     });
   }
 

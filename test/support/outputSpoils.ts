@@ -1,8 +1,8 @@
 import { LINE } from '../../src/core/geometry/segments.ts';
+import { appendTransformed } from '../../src/core/geometry/transform.ts';
 import { randomBelow } from '../../src/core/structures/random.ts';
 import { built, type Chain, endOf, lineSetOf, moved, type Segment, spanOf, startOf } from './chains.ts';
 import { backwards, distance, lineFrom, type OutputSheet, type Pick, type Spot } from './outputSheet.ts';
-import { appendTransformed } from '../../src/core/geometry/transform.ts';
 
 /** One way to spoil an output at a place drawn at random; null where nothing there can be spoilt so. */
 export type OutputSpoil = (sheet: OutputSheet) => Spot | null;
@@ -91,14 +91,14 @@ const dropPart = onSegment(
 );
 
 const double = onSegment(
-  (tau) => longerThan(6 * tau),
+  (tau) => longerThan(9 * tau),
   (sheet, pick) => added(sheet.penOf(pick), ...copies(sheet, pick, pick.segment)),
 );
 
 const doublePart = onSegment(
   (tau) => longerThan(24 * tau),
   (sheet, pick) => {
-    const [t0, t1] = within(sheet, pick, sheet.tau * sheet.between(6, 20));
+    const [t0, t1] = within(sheet, pick, sheet.tau * sheet.between(9, 20));
     return added(sheet.penOf(pick), ...copies(sheet, pick, spanOf(pick.segment, t1, t0)));
   },
 );
@@ -110,7 +110,7 @@ function copies(sheet: OutputSheet, pick: Pick, segment: Segment): Segment[][] {
 
 /** Out and back in one run. */
 const retrace = onSegment(
-  (tau) => longerThan(6 * tau),
+  (tau) => longerThan(9 * tau),
   (sheet, pick) => {
     const { segment } = pick;
     return instead(sheet, pick, [[segment, ...backwards([segment]), segment]]);
@@ -168,6 +168,7 @@ const swapShapes: OutputSpoil = (sheet) => {
   if (!a || !b) return null;
   const [ma, mb] = [middleOf(a.segment), middleOf(b.segment)];
   const [dx, dy] = [mb[0] - ma[0], mb[1] - ma[1]];
+  if (distance(0, 0, dx, dy) < 12 * tau) return null;
   const toB = moved({ pen: 0, segments: [a.segment] }, dx, dy).segments;
   const toA = moved({ pen: 0, segments: [b.segment] }, -dx, -dy).segments;
   const one = instead(sheet, a, [[], []], [[...toA]]);

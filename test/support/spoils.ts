@@ -1,16 +1,7 @@
 import { ARC, LINE } from '../../src/core/geometry/segments.ts';
 import { randomBelow } from '../../src/core/structures/random.ts';
 import { bulgeOf, mirrored } from './bulges.ts';
-import {
-  type Chain,
-  isClosed,
-  moved,
-  polyline,
-  reversed,
-  type Segment,
-  spanOf,
-  startOf,
-} from './chains.ts';
+import { type Chain, isClosed, moved, polyline, reversed, type Segment, spanOf, startOf } from './chains.ts';
 import type { DrawnStroke } from './lineDrawings.ts';
 
 /**

@@ -82,9 +82,7 @@ function areApart(a: Spot, b: Spot): boolean {
     }
   }
   const [p, q] = [boxOf(a.marks), boxOf(b.marks)];
-  return (
-    p[0] > q[2] + APART_MM || q[0] > p[2] + APART_MM || p[1] > q[3] + APART_MM || q[1] > p[3] + APART_MM
-  );
+  return p[0] > q[2] + APART_MM || q[0] > p[2] + APART_MM || p[1] > q[3] + APART_MM || q[1] > p[3] + APART_MM;
 }
 
 function boxOf(marks: readonly Segment[]): [number, number, number, number] {
