@@ -22,7 +22,14 @@ export function bruteForce(n: number, cost: (i: number, j: number) => number): n
 export function costOf(problem: MatchingProblem, i: number, j: number): number {
   const placed = problem.n - problem.special;
   if (Math.max(i, j) >= placed) return problem.specialCost(Math.min(i, j), Math.max(i, j));
-  return problem.weigh(Math.sqrt((problem.x[i] - problem.x[j]) ** 2 + (problem.y[i] - problem.y[j]) ** 2));
+  let cost = problem.weigh(
+    Math.sqrt((problem.x[i] - problem.x[j]) ** 2 + (problem.y[i] - problem.y[j]) ** 2),
+  );
+  problem.ways?.cost.forEach((other, k) => {
+    const [u, v] = [problem.ways?.u[k], problem.ways?.v[k]];
+    if ((u === i && v === j) || (u === j && v === i)) cost = Math.min(cost, other);
+  });
+  return cost;
 }
 
 export function plane(points: readonly (readonly [number, number])[]): MatchingProblem {

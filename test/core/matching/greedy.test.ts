@@ -1,8 +1,10 @@
 import { describe, expect, test } from 'vitest';
+import { checkCertificate } from '../../../src/core/matching/certificate.ts';
 import { exactMatching } from '../../../src/core/matching/exact.ts';
+import { improveByExchange } from '../../../src/core/matching/exchange.ts';
 import { greedyMatching } from '../../../src/core/matching/greedy.ts';
 import type { MatchingProblem } from '../../../src/core/matching/problem.ts';
-import { createRandom } from '../../../src/core/structures/random.ts';
+import { createRandom, randomBelow } from '../../../src/core/structures/random.ts';
 import { costOf, plane, pointSets, smallProblem } from '../../support/matchingProblems.ts';
 
 /** The definition: all pairs by cost, then lower index, then higher index; take each whose ends are free. */
@@ -36,6 +38,31 @@ describe('is the greedy matching of the definition', () => {
       expect(greedyMatching(problem).mate).toEqual(greedyByDefinition(problem));
     }
   });
+});
+
+test('takes other ways into account, and so do the exchanges', () => {
+  const random = createRandom(23);
+  for (let round = 0; round < 200; round++) {
+    const base = plane(pointSets.lattice(2 * (1 + randomBelow(random, 12)), random));
+    const u = Array.from({ length: randomBelow(random, base.n) }, () => randomBelow(random, base.n));
+    const v = u.map((a) => (a + 1 + randomBelow(random, base.n - 1)) % base.n);
+    const ways = {
+      u: Int32Array.from(u),
+      v: Int32Array.from(v),
+      cost: Float64Array.from(u, () => randomBelow(random, 8) / 4),
+    };
+    const problem = { ...base, ways };
+    const greedy = greedyMatching(problem);
+    expect(greedy.mate).toEqual(greedyByDefinition(problem));
+    const exact = exactMatching(problem);
+    const exchanged = improveByExchange(problem, greedy);
+    expect(exchanged.total).toBeLessThanOrEqual(greedy.total);
+    expect(exact.certificate.lowerBound).toBeLessThanOrEqual(exchanged.total);
+    const early = exactMatching(problem, { shouldStop: () => true });
+    expect(early.certificate.lowerBound).toBeLessThanOrEqual(exact.total);
+    expect(checkCertificate(problem, early).reason).toBe(null);
+    expect(checkCertificate(problem, exact).reason).toBe(null);
+  }
 });
 
 /** S(1) = {0, 1}; S(k + 1) is S(k) and a copy of it after a gap just shorter than S(k) is long. */
