@@ -39,7 +39,8 @@ export function surveyDrawing(whole: Drawing, settings: Settings, version: strin
   const pens = strokesOfPens(plan).map((ofPen, pen) => {
     const network = buildNetwork(drawing, ofPen, { ...settings, repeatToleranceMm: REPEAT_TOLERANCE_MM });
     const reachMm = Math.max(NEAR_MISS_SNAPS * settings.snapMm, LEAST_NEAR_MISS_MM);
-    for (const miss of findNearMisses(network, drawing, ofPen, reachMm, settings.accuracyMm)) misses.push(miss);
+    for (const miss of findNearMisses(network, drawing, ofPen, reachMm, settings.accuracyMm))
+      misses.push(miss);
     repeatedDots += network.repeatedDots;
     const end = pen === plan.pens.length - 1 ? settings.end : 'home';
     const bound = boundOnly(network, { homeX, homeY, end, weigh: travelCost });

@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
-import { readColour } from '../../src/core/drawing/colour.ts';
-import { COLOUR_NAMES } from '../../src/core/drawing/colourNames.ts';
-import { SYSTEM_COLOURS } from '../../src/core/drawing/systemColours.ts';
+import { readColour } from '../../src/core/drawing/style/colour.ts';
+import { COLOUR_NAMES } from '../../src/core/drawing/style/colourNames.ts';
+import { SYSTEM_COLOURS } from '../../src/core/drawing/style/systemColours.ts';
 import { createRandom } from '../../src/core/structures/random.ts';
 import { askBrowser, CHROMIUM, useBrowser } from '../support/browser.ts';
 

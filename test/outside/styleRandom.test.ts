@@ -1,7 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { readColour } from '../../src/core/drawing/colour.ts';
 import type { Drawing } from '../../src/core/drawing/drawing.ts';
+import { readColour } from '../../src/core/drawing/style/colour.ts';
 import { segmentBox } from '../../src/core/geometry/box.ts';
 import { readDrawing } from '../../src/core/index.ts';
 import { askBrowser, CHROMIUM, useBrowser } from '../support/browser.ts';

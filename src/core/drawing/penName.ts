@@ -1,4 +1,4 @@
-import { readColour } from './colour.js';
+import { readColour } from './style/colour.js';
 
 /** Whether a pen is what somebody calls it: upper and lower case alike, colours in any spelling. */
 export function isNamed(pen: { readonly name: string; readonly was: string }, name: string): boolean {

@@ -1,18 +1,18 @@
 import { segmentBox } from '../geometry/box.js';
-import { pageRegion } from './clipping.js';
+import { pageRegion } from './clip/clipping.js';
 import type { Drawing, Strokes } from './drawing.js';
 import { FindingLog, Unreadable } from './findingLog.js';
-import { LineIndex } from './lineIndex.js';
-import type { PageSize } from './pageSize.js';
+import { LineIndex } from './markup/lineIndex.js';
+import { readTree } from './markup/svgTree.js';
+import type { PageSize } from './page/pageSize.js';
+import { rootContext } from './page/rootContext.js';
 import { limitsFrom, type ReadingLimits } from './readingLimits.js';
 import { type ReadingRules, rulesFrom } from './readingRules.js';
-import { childText } from './references.js';
-import { rootContext } from './rootContext.js';
 import { Session } from './session.js';
-import { StrokeSink } from './strokeSink.js';
-import { readTree } from './svgTree.js';
+import { StrokeSink } from './stroke/strokeSink.js';
+import { childText } from './structure/references.js';
+import { walk } from './structure/walk.js';
 import { orTooLarge } from './tooLarge.js';
-import { walk } from './walk.js';
 
 export interface ReadOptions extends Partial<ReadingRules> {
   /** What the drawing is called in reports; a file name, most often. */

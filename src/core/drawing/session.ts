@@ -1,18 +1,18 @@
 import type { Place } from '../finding.js';
 import type { Affine } from '../geometry/affine.js';
 import type { Region } from '../geometry/region.js';
-import { Cascade } from './cascade.js';
-import { ClipRegions } from './clipRegions.js';
-import type { Style } from './computedStyle.js';
+import { ClipRegions } from './clip/clipRegions.js';
 import type { Layer } from './drawing.js';
 import type { ReadingCode } from './findingKinds.js';
 import type { FindingLog } from './findingLog.js';
-import type { LengthContext } from './length.js';
-import { PathReader } from './pathReader.js';
+import type { SvgElement, SvgTree } from './markup/svgTree.js';
+import { PathReader } from './path/pathReader.js';
 import { DEFAULT_LIMITS, type ReadingLimits } from './readingLimits.js';
 import type { ReadingRules } from './readingRules.js';
-import { StrokeSink } from './strokeSink.js';
-import type { SvgElement, SvgTree } from './svgTree.js';
+import { StrokeSink } from './stroke/strokeSink.js';
+import { Cascade } from './style/cascade.js';
+import type { Style } from './style/computedStyle.js';
+import type { LengthContext } from './style/length.js';
 
 /** What an element inherits from where it stands. */
 export interface Context extends LengthContext {
