@@ -11,6 +11,8 @@ const PER_PLACES = 30;
 const PER_SPECIAL = 50;
 /** Pairs of places put by before they are looked at one by one. */
 const BATCH = 4096;
+/** Steps of the walk over boxes in one go. */
+const STEPS = 1024;
 
 /** What a group of vertices (a place, a box) has in common, to judge pairs of groups. */
 interface Summary {
@@ -63,32 +65,44 @@ export class Pricer {
 
   /** Expects the nests as they are now. */
   priceAllPairs(): void {
-    const { f, layout, value } = this;
-    for (let v = 0; v < this.n; v++) value[v] = f.pi[v] + f.off[f.set[v]];
+    const { f, layout } = this;
+    this.readValues();
     this.risen.set(f.risen);
     // What stays behind for the next round is marked again on the way.
     f.risen.fill(0);
     this.added.fill(0);
-    if (layout.tree.root >= 0) this.walkBoxes(f.risen);
+    this.summarise();
+    this.stack.length = 0;
+    if (layout.tree.root >= 0) this.stack.push(layout.tree.root, layout.tree.root);
+    while (this.stack.length > 0) {
+      this.walkOn();
+      this.settle(f.risen);
+    }
     for (let s = layout.placed; s < this.n; s++) this.special(s);
   }
 
-  /** Marks in `behind` the vertices that may have more such pairs than this round takes. */
-  private walkBoxes(behind: Uint8Array): void {
-    const { stack, layout } = this;
-    const { root } = layout.tree;
+  private readValues(): void {
+    const { value } = this;
+    const { pi, off, set } = this.f;
+    for (let v = 0; v < value.length; v++) value[v] = pi[v] + off[set[v]];
+  }
+
+  private summarise(): void {
+    const { tree } = this.layout;
     if (this.places.highest !== this.value) {
-      for (let p = 0; p < layout.tree.x.length; p++) this.summarisePlace(p);
+      for (let p = 0; p < tree.x.length; p++) this.summarisePlace(p);
     }
-    for (let node = 0; node <= root; node++) this.summariseBox(node);
-    stack.push(root, root);
-    while (stack.length > 0) {
+    for (let node = 0; node <= tree.root; node++) this.summariseBox(node);
+  }
+
+  /** Some steps of the walk; fewer where many pairs of places have been put by. */
+  private walkOn(): void {
+    const { stack } = this;
+    for (let steps = STEPS; steps > 0 && stack.length > 0 && this.count <= BATCH - LEAF * LEAF; steps--) {
       const b = stack.pop() as number;
       const a = stack.pop() as number;
       this.boxPair(a, b);
-      if (this.count > BATCH - LEAF * LEAF) this.settle(behind);
     }
-    this.settle(behind);
   }
 
   private summarisePlace(p: number): void {
@@ -161,6 +175,7 @@ export class Pricer {
     this.count = count;
   }
 
+  /** Marks in `behind` the vertices that may have more such pairs than this round takes. */
   private settle(behind: Uint8Array): void {
     const { pending } = this;
     const { first } = this.layout;
