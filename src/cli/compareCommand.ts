@@ -39,12 +39,14 @@ export function compareCommand(finish: (code: number) => void): Command {
     .argument('<before>', 'SVG or G-code; - is standard input')
     .argument('<after>', 'SVG or G-code');
   return addReadingOptions(addLineOptions(command))
+    .optionsGroup('Output:')
+    .option('--json', 'print JSON instead of the table')
+    .optionsGroup('How the drawing is read:')
     .option(
       '--page-height <length>',
       'height of the page of G-code whose head does not tell it',
       positiveLengthMm,
     )
-    .option('--json', 'print JSON instead of the table')
     .addHelpText('after', EXAMPLES)
     .action(
       (

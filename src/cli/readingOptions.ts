@@ -17,7 +17,7 @@ const d = DEFAULT_READING;
 
 export function addReadingOptions(command: Command): Command {
   return command
-    .option('--limit <name=n>', 'raise or lower a limit that a message names; may be repeated', readingLimit)
+    .optionsGroup('How the drawing is read:')
     .option(
       '--px-per-inch <n>',
       'user units to the inch, 90 or 72 for some older editors (default: 96)',
@@ -26,7 +26,8 @@ export function addReadingOptions(command: Command): Command {
     .addOption(choice('--dashes <how>', 'dashed lines as their dashes or whole', ['cut', 'solid'], d.dashes))
     .addOption(choice('--clips <how>', 'lines end at clip paths or go on', ['cut', 'ignore'], d.clips))
     .addOption(choice('--page-edge <how>', 'lines end at the page or go on', ['cut', 'ignore'], d.pageEdge))
-    .addOption(choice('--fills <how>', 'shapes filled but not stroked', ['skip', 'outline'], d.fills));
+    .addOption(choice('--fills <how>', 'shapes filled but not stroked', ['skip', 'outline'], d.fills))
+    .option('--limit <name=n>', 'raise or lower a limit that a message names; may be repeated', readingLimit);
 }
 
 /** What `readDrawing` is asked for. */

@@ -38,14 +38,19 @@ export interface SearchFlags {
 const d = DEFAULT_SETTINGS;
 
 export function addNetworkOptions(command: Command): Command {
-  return addLineOptions(command).addOption(
-    choice('--junctions <where>', 'where lines join', ['ends', 'touching', 'crossing'], d.junctions),
+  return addLineOptions(
+    command
+      .optionsGroup('How lines hang together:')
+      .addOption(
+        choice('--junctions <where>', 'where lines join', ['ends', 'touching', 'crossing'], d.junctions),
+      ),
   );
 }
 
 /** What two files must agree on to be held against each other. */
 export function addLineOptions(command: Command): Command {
   return command
+    .optionsGroup('How lines hang together:')
     .addOption(length('--snap <length>', 'ends this close meet', lengthMm, d.snapMm))
     .addOption(
       length(
@@ -62,6 +67,7 @@ export function addLineOptions(command: Command): Command {
       placeMm,
     )
     .addOption(choice('--end <where>', 'where the tool ends', ['home', 'anywhere'], d.end))
+    .optionsGroup('Pens:')
     .addOption(choice('--pens <rule>', 'what makes a pen', ['colour', 'layer', 'one'], d.pens))
     .option('--only-pens <names>', 'draw these pens only: names or colours, parted by commas', names)
     .option('--skip-pens <names>', 'leave these pens out', names)
@@ -76,6 +82,7 @@ export function addLineOptions(command: Command): Command {
 
 export function addSearchOptions(command: Command): Command {
   return command
+    .optionsGroup('Search:')
     .addOption(choice('--matching <how>', 'how odd vertices are paired', ['exact', 'greedy'], d.matching))
     .addOption(choice('--minimise <what>', 'what counts most', ['travel', 'lifts'], d.minimise))
     .option(

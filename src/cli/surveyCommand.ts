@@ -26,6 +26,7 @@ export function surveyCommand(finish: (code: number) => void): Command {
     )
     .argument('<drawing>', 'an SVG file; - is standard input');
   return addReadingOptions(addNetworkOptions(command))
+    .optionsGroup('Output:')
     .option('--json', 'print JSON instead of the table')
     .addHelpText('after', EXAMPLES)
     .action((path: string, flags: NetworkFlags & ReadingFlags & { json?: boolean }) => {

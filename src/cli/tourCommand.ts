@@ -46,12 +46,15 @@ export function tourCommand(finish: (code: number) => void): Command {
       'Reads an SVG line drawing, orders its strokes so that every line is drawn once with few lifts and little travel, audits the result and writes it. Without -o, SVG goes to standard output.',
     )
     .argument('<drawing...>', 'SVG files; - is standard input')
+    .optionsGroup('Output:')
     .option('-o, --output <file>', 'where to write; may be given several times', collect)
     .option('--out-dir <dir>', 'write each drawing there as SVG, under its own name')
     .option('--in-place', 'write back to the input, or let an output overwrite it')
     .option('--show-travel', 'show the lifted travel in SVG, as a group of its own');
   return addSearchOptions(addReadingOptions(addNetworkOptions(command)))
+    .optionsGroup('Search:')
     .option('--seconds <s>', 'stop improving after this time', numberAtLeastZero)
+    .optionsGroup('Output:')
     .option('--json', 'print the report as JSON instead of the table')
     .option('--quiet', 'print no table and no progress')
     .addHelpText('after', EXAMPLES)
