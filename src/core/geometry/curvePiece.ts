@@ -1,4 +1,4 @@
-import { derivativeAt, pointAt } from './evaluate.js';
+import { chordEnds, derivativeAt } from './evaluate.js';
 import { CUBIC, LINE, type Segments } from './segments.js';
 import { blossom } from './split.js';
 import { sinCos } from './trig.js';
@@ -27,13 +27,9 @@ export function curvePiece(segments: Segments, i: number, t0: number, t1: number
   const d = segments.data;
   const o = segments.offset[i];
   const kind = segments.kind[i];
-  const p = new Float64Array(2);
-  pointAt(segments, i, t0, p);
-  const x0 = p[0];
-  const y0 = p[1];
-  pointAt(segments, i, t1, p);
-  const x1 = p[0];
-  const y1 = p[1];
+  const ends = new Float64Array(4);
+  chordEnds(segments, i, t0, t1, ends);
+  const [x0, y0, x1, y1] = ends;
   if (kind === LINE) {
     return finish(t0, t1, [x0, y0, x1, y1], [x1 - x0, y1 - y0]);
   }
@@ -53,8 +49,9 @@ export function curvePiece(segments: Segments, i: number, t0: number, t1: number
   const qx = d[o + 4] + (d[o + 6] * sc[1] + d[o + 8] * sc[0]) / cosHalf;
   const qy = d[o + 5] + (d[o + 7] * sc[1] + d[o + 9] * sc[0]) / cosHalf;
   derivativeAt(segments, i, t0, sc);
-  derivativeAt(segments, i, t1, p);
-  return finish(t0, t1, [x0, y0, qx, qy, x1, y1], [sc[0], sc[1], p[0], p[1]]);
+  const [ux, uy] = sc;
+  derivativeAt(segments, i, t1, sc);
+  return finish(t0, t1, [x0, y0, qx, qy, x1, y1], [ux, uy, sc[0], sc[1]]);
 }
 
 /** Vectors that are no more than rounding have no direction and are left out. */

@@ -31,6 +31,14 @@ export function pointAt(segments: Segments, i: number, t: number, out: Float64Ar
   }
 }
 
+/** Both ends of the piece of segment i from t0 to t1, as `pointAt` has them: x, y of t0, then of t1, into `out`. */
+export function chordEnds(segments: Segments, i: number, t0: number, t1: number, out: Float64Array): void {
+  pointAt(segments, i, t1, out);
+  out[2] = out[0];
+  out[3] = out[1];
+  pointAt(segments, i, t0, out);
+}
+
 /**
  * The derivative of segment i by t at t in [0, 1]: out[0] = dx/dt, out[1] = dy/dt.
  * It can vanish: on a dot, at a cusp, at an end of a cubic whose control point lies on that end.

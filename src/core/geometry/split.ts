@@ -1,4 +1,4 @@
-import { pointAt } from './evaluate.js';
+import { chordEnds } from './evaluate.js';
 import { CUBIC, LINE, type SegmentBuilder, type Segments } from './segments.js';
 
 /**
@@ -21,13 +21,9 @@ export function appendSpan(
   const d = segments.data;
   const o = segments.offset[i];
   const kind = segments.kind[i];
-  const p = new Float64Array(2);
-  pointAt(segments, i, t0, p);
-  const x0 = p[0];
-  const y0 = p[1];
-  pointAt(segments, i, t1, p);
-  const x1 = p[0];
-  const y1 = p[1];
+  const ends = new Float64Array(4);
+  chordEnds(segments, i, t0, t1, ends);
+  const [x0, y0, x1, y1] = ends;
   if (kind === LINE) {
     builder.line(x0, y0, x1, y1);
   } else if (kind === CUBIC) {

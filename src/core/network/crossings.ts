@@ -1,11 +1,12 @@
 import type { Drawing } from '../drawing/drawing.js';
 import { segmentBox } from '../geometry/box.js';
 import { selfIntersections } from '../geometry/cubicLoop.js';
-import { pointAt } from '../geometry/evaluate.js';
+import { chordEnds } from '../geometry/evaluate.js';
 import { intersectSegments } from '../geometry/intersect.js';
 import { CUBIC, LINE } from '../geometry/segments.js';
 import { addSplit, type Marks } from './marks.js';
 import type { Pieces } from './pieces.js';
+import { isNearOwnEnd, segmentOfPlace } from './strokePlace.js';
 
 /** Lines this near meet: what is left of rounding after transforms. */
 const SAME_POINT_MM = 1e-6;
@@ -29,7 +30,6 @@ class CrossingSearch {
   private count = 0;
   private readonly stroke: number[] = [];
   private readonly place: number[] = [];
-  private readonly at = new Float64Array(2);
   private readonly box = new Float64Array(4);
 
   constructor(
@@ -60,7 +60,7 @@ class CrossingSearch {
     }
     if (this.count > MOST_CROSSINGS) return this.count;
     for (let k = 0; k < this.stroke.length; k++) {
-      const segment = this.segmentOf(this.stroke[k], this.place[k]);
+      const segment = segmentOfPlace(this.drawing, this.stroke[k], this.place[k]);
       addSplit(this.marks, this.drawing, this.stroke[k], segment, this.place[k] - segment);
     }
     return this.count;
@@ -86,14 +86,13 @@ class CrossingSearch {
   }
 
   private boxOf(i: number, t0: number, t1: number): void {
-    const { segments } = this.drawing.strokes;
-    pointAt(segments, i, t0, this.at);
-    const [x, y] = this.at;
-    pointAt(segments, i, t1, this.at);
-    this.box[0] = Math.min(x, this.at[0]);
-    this.box[1] = Math.min(y, this.at[1]);
-    this.box[2] = Math.max(x, this.at[0]);
-    this.box[3] = Math.max(y, this.at[1]);
+    const { box } = this;
+    chordEnds(this.drawing.strokes.segments, i, t0, t1, box);
+    const [x0, y0, x1, y1] = box;
+    box[0] = Math.min(x0, x1);
+    box[1] = Math.min(y0, y1);
+    box[2] = Math.max(x0, x1);
+    box[3] = Math.max(y0, y1);
   }
 
   /** Two places meet: u on one stroke, w on the other, each a segment plus a parameter. */
@@ -112,23 +111,6 @@ class CrossingSearch {
   }
 
   private isNearEnd(stroke: number, u: number): boolean {
-    const { segments, first } = this.drawing.strokes;
-    const segment = this.segmentOf(stroke, u);
-    pointAt(segments, segment, u - segment, this.at);
-    const [x, y] = this.at;
-    const a = segments.offset[first[stroke]];
-    const b = segments.offset[first[stroke + 1] - 1] + 2;
-    return (
-      distance(x, y, segments.data[a], segments.data[a + 1]) <= this.snapMm ||
-      distance(x, y, segments.data[b], segments.data[b + 1]) <= this.snapMm
-    );
+    return isNearOwnEnd(this.drawing, stroke, u, this.snapMm);
   }
-
-  private segmentOf(stroke: number, u: number): number {
-    return Math.min(Math.floor(u), this.drawing.strokes.first[stroke + 1] - 1);
-  }
-}
-
-function distance(ax: number, ay: number, bx: number, by: number): number {
-  return Math.sqrt((bx - ax) * (bx - ax) + (by - ay) * (by - ay));
 }

@@ -3,6 +3,7 @@ import { nearestOnSegment } from '../geometry/nearest.js';
 import type { Network } from './network.js';
 import { cutIntoPieces, type Pieces } from './pieces.js';
 import { pointIndex } from './snap.js';
+import { distance } from './strokePlace.js';
 
 /** Ends that stop just short of another end or line: the gap, and where. */
 export interface NearMiss {
@@ -45,9 +46,7 @@ export function findNearMisses(
       const pair = Math.min(u, v) * vertexCount + Math.max(u, v);
       if (seen.has(pair)) continue;
       seen.add(pair);
-      const dx = vertexX[u] - x;
-      const dy = vertexY[u] - y;
-      misses.push({ gapMm: Math.sqrt(dx * dx + dy * dy), x, y });
+      misses.push({ gapMm: distance(x, y, vertexX[u], vertexY[u]), x, y });
       continue;
     }
     const gapMm = gapToLine(drawing, pieces, x, y, edgeStroke[halfEdgeTo[v] >> 1], reachMm);

@@ -1,5 +1,5 @@
 import type { Drawing } from '../drawing/drawing.js';
-import { pointAt } from '../geometry/evaluate.js';
+import { chordEnds, pointAt } from '../geometry/evaluate.js';
 import { flattenSegment } from '../geometry/flatten.js';
 import { segmentLength } from '../geometry/length.js';
 import { nearestOnSegment } from '../geometry/nearest.js';
@@ -7,6 +7,7 @@ import { LINE } from '../geometry/segments.js';
 import { alongside } from './alongside.js';
 import { addSplit, type Marks } from './marks.js';
 import type { Pieces } from './pieces.js';
+import { distance, isNearOwnEnd, segmentOfPlace } from './strokePlace.js';
 import { walkSpan } from './walkSpan.js';
 
 /** Lines that run together for less than this many tolerances merely cross or touch. */
@@ -220,30 +221,9 @@ class OverlapSearch {
 
   /** Near an end of the stroke nothing is split: the end is a mark already, and splits what it touches. */
   private splitAt(stroke: number, u: number): void {
-    const [x, y] = this.pointOf(stroke, u);
-    if (this.isNearEnd(stroke, x, y)) return;
-    const segment = this.segmentOf(stroke, u);
+    if (isNearOwnEnd(this.drawing, stroke, u, this.snapMm)) return;
+    const segment = segmentOfPlace(this.drawing, stroke, u);
     this.splits.push({ stroke, segment, t: u - segment });
-  }
-
-  private pointOf(stroke: number, u: number): [number, number] {
-    const segment = this.segmentOf(stroke, u);
-    pointAt(this.drawing.strokes.segments, segment, u - segment, this.at);
-    return [this.at[0], this.at[1]];
-  }
-
-  private segmentOf(stroke: number, u: number): number {
-    return Math.min(Math.floor(u), this.drawing.strokes.first[stroke + 1] - 1);
-  }
-
-  private isNearEnd(stroke: number, x: number, y: number): boolean {
-    const { segments, first } = this.drawing.strokes;
-    const a = segments.offset[first[stroke]];
-    const b = segments.offset[first[stroke + 1] - 1] + 2;
-    return (
-      distance(x, y, segments.data[a], segments.data[a + 1]) <= this.snapMm ||
-      distance(x, y, segments.data[b], segments.data[b + 1]) <= this.snapMm
-    );
   }
 
   private lengthBetween(u0: number, u1: number): number {
@@ -256,20 +236,14 @@ class OverlapSearch {
     return lengthMm;
   }
 
-  private endsOf(p: number): [number, number, number, number] {
+  private endsOf(p: number): Float64Array {
     const { segment, t0, t1 } = this.pieces;
-    const { segments } = this.drawing.strokes;
-    pointAt(segments, segment[p], t0[p], this.at);
-    const [x, y] = this.at;
-    pointAt(segments, segment[p], t1[p], this.at);
-    return [x, y, this.at[0], this.at[1]];
+    const ends = new Float64Array(4);
+    chordEnds(this.drawing.strokes.segments, segment[p], t0[p], t1[p], ends);
+    return ends;
   }
 
   private chordErrorOf(p: number): number {
     return this.drawing.strokes.segments.kind[this.pieces.segment[p]] === LINE ? 0 : this.pieces.chordErrorMm;
   }
-}
-
-function distance(ax: number, ay: number, bx: number, by: number): number {
-  return Math.sqrt((bx - ax) * (bx - ax) + (by - ay) * (by - ay));
 }

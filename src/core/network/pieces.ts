@@ -1,6 +1,6 @@
 import Flatbush from 'flatbush';
 import type { Drawing } from '../drawing/drawing.js';
-import { pointAt } from '../geometry/evaluate.js';
+import { chordEnds, pointAt } from '../geometry/evaluate.js';
 import { flattenSegment } from '../geometry/flatten.js';
 
 /**
@@ -68,16 +68,11 @@ export function cutIntoPieces(drawing: Drawing, strokes: Uint32Array, chordError
   let index: Flatbush | null = null;
   if (count > 0) {
     index = new Flatbush(count);
-    const to = new Float64Array(2);
+    const ends = new Float64Array(4);
     for (let p = 0; p < count; p++) {
-      pointAt(segments, segment[p], t0[p], at);
-      pointAt(segments, segment[p], t1[p], to);
-      index.add(
-        Math.min(at[0], to[0]),
-        Math.min(at[1], to[1]),
-        Math.max(at[0], to[0]),
-        Math.max(at[1], to[1]),
-      );
+      chordEnds(segments, segment[p], t0[p], t1[p], ends);
+      const [x0, y0, x1, y1] = ends;
+      index.add(Math.min(x0, x1), Math.min(y0, y1), Math.max(x0, x1), Math.max(y0, y1));
     }
     index.finish();
   }

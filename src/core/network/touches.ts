@@ -3,6 +3,7 @@ import { nearestOnSegment } from '../geometry/nearest.js';
 import { addSplit, type Marks } from './marks.js';
 import type { Pieces } from './pieces.js';
 import { snapMarks } from './snap.js';
+import { distance } from './strokePlace.js';
 
 /**
  * An end just at the snap distance is met as an end: otherwise the last bit of rounding would decide, and
@@ -15,7 +16,8 @@ const ROUNDING = 1e-9;
  * of its own further along: the place of the curve nearest to the end, found on the exact curve.
  *
  * No split is made where the end can meet the other stroke at one of that stroke's own ends: snapping
- * sees to that. Ends that snap together are looked at once. One search of the box index per vertex; O(n log n) for bounded crowding.
+ * sees to that. Ends that snap together are looked at once. One search of the box index per vertex;
+ * O(n log n) for bounded crowding.
  */
 export function splitWhereEndsTouch(marks: Marks, drawing: Drawing, pieces: Pieces, snapMm: number): void {
   if (!pieces.index) return;
@@ -70,11 +72,8 @@ function reachesNearEnd(
   const { first, segments } = drawing.strokes;
   const start = first[pieces.stroke[from]];
   const last = first[pieces.stroke[from] + 1] - 1;
-  const near = (o: number) => {
-    const dx = segments.data[o] - x;
-    const dy = segments.data[o + 1] - y;
-    return Math.sqrt(dx * dx + dy * dy) <= snapMm * (1 + ROUNDING);
-  };
+  const near = (o: number) =>
+    distance(x, y, segments.data[o], segments.data[o + 1]) <= snapMm * (1 + ROUNDING);
   const holdsStart = pieces.segment[from] === start && pieces.t0[from] === 0;
   const holdsEnd = pieces.segment[to] === last && pieces.t1[to] === 1;
   return (holdsStart && near(segments.offset[start])) || (holdsEnd && near(segments.offset[last] + 2));
