@@ -137,7 +137,7 @@ function isLost(stretch: Stretch, drawn: Side, tolerances: Tolerances): boolean 
   if (stretch.atStart && stretch.atEnd) return true;
   if (stretch.lengthMm > fringeMm(stretch.deviation, tolerances)) return true;
   const { matchMm, repeatMm, hairMm } = tolerances;
-  const reach = stretch.besideExcused ? matchMm + repeatMm : matchMm;
+  const reach = stretch.amidExcused ? matchMm + repeatMm : matchMm;
   return stretch.lengthMm - totalLength(nearParts(stretch, drawn, reach)) > hairMm;
 }
 

@@ -28,8 +28,6 @@ export class Side {
   readonly whole: Uint8Array;
   /** 1 where any of a span is paired. */
   readonly touched: Uint8Array;
-  /** 1 where any of a span counts as paired because it repeats what is. */
-  readonly excused: Uint8Array;
   /** 1 for each segment that was paired whole, unflattened. */
   readonly wholeSegment: Uint8Array;
   x = new Float64Array(1024);
@@ -37,6 +35,9 @@ export class Side {
   private vertices = 0;
   private pieceState = new Uint8Array(1024);
   private readonly paired = new Map<number, Intervals>();
+  /** What counts as paired because it repeats what is: whole spans, and parts of pieces. */
+  private readonly excusedSpan: Uint8Array;
+  private readonly excusedParts = new Map<number, Intervals>();
   private readonly firstVertex: Int32Array;
   private readonly pieces: Uint32Array;
   private readonly piecesLeft: Uint32Array;
@@ -54,7 +55,7 @@ export class Side {
     this.deviation = new Float64Array(count);
     this.whole = new Uint8Array(count);
     this.touched = new Uint8Array(count);
-    this.excused = new Uint8Array(count);
+    this.excusedSpan = new Uint8Array(count);
     this.wholeSegment = new Uint8Array(wholeDeviation.length);
     for (let i = 0; i < wholeDeviation.length; i++) if (wholeDeviation[i] >= 0) this.wholeSegment[i] = 1;
     for (let span = 0; span < count; span++) {
@@ -197,13 +198,25 @@ export class Side {
   /** Marks all of a span as repeating what is paired. */
   excuseSpan(span: number, deviation: number): void {
     if (deviation > this.deviation[span]) this.deviation[span] = deviation;
-    this.excused[span] = this.touched[span] = this.whole[span] = 1;
+    this.excusedSpan[span] = this.touched[span] = this.whole[span] = 1;
   }
 
   /** Marks part of a piece as repeating what is paired. */
   excuse(span: number, v: number, from: number, to: number, deviation: number): void {
-    this.excused[span] = 1;
+    const list = this.excusedParts.get(v);
+    if (list === undefined) this.excusedParts.set(v, [from, to]);
+    else addInterval(list, from, to, 0);
     this.pair(span, v, from, to, deviation);
+  }
+
+  /** Whether what is paired next to a place on a piece only repeats something; v < 0 is the span's last piece. */
+  isExcused(span: number, v: number, at: number): boolean {
+    if (this.excusedSpan[span] === 1) return true;
+    if (this.firstVertex[span] < 0) return false;
+    const piece = v >= 0 ? v : this.firstVertex[span] + this.pieces[span] - 1;
+    const slack = this.tolerances.hairMm / this.pieceLength(piece);
+    const list = this.excusedParts.get(piece);
+    return list !== undefined && partsIn(list, at - slack, at + slack).length > 0;
   }
 
   private push(x: number, y: number): void {

@@ -17,8 +17,8 @@ export interface Stretch {
   readonly atEnd: boolean;
   /** Largest deviation of what is paired before and after it on the chain. */
   readonly deviation: number;
-  /** Whether what comes before or after it is not drawn itself, but repeats what is. */
-  readonly besideExcused: boolean;
+  /** Whether what comes before and after it is not drawn itself, but repeats what is. */
+  readonly amidExcused: boolean;
 }
 
 /** All stretches of a side that are not paired, in order; those shorter than a hair only where they are a chain of their own. */
@@ -29,17 +29,21 @@ export function unpairedStretches(side: Side, hairMm: number): Stretch[] {
     const from = firstOfChain[chain];
     const to = firstOfChain[chain + 1];
     let open: OpenStretch | null = null;
-    let pairedBefore = -1;
-    const close = (pairedAfter: number): void => {
+    let before = NOTHING;
+    const close = (after: Neighbour): void => {
       if (open === null) return;
-      const stretch = open.finish(pairedAfter);
+      const stretch = open.finish(after);
       if (stretch.lengthMm > hairMm || (stretch.atStart && stretch.atEnd)) stretches.push(stretch);
       open = null;
     };
     for (let span = from; span < to; span++) {
+      const neighbour = (v: number, at: number): Neighbour => ({
+        deviation: side.deviation[span],
+        excused: side.isExcused(span, v, at),
+      });
       if (side.whole[span] === 1) {
-        close(span);
-        pairedBefore = span;
+        if (open !== null) close(neighbour(side.flatten(span), 0));
+        before = { deviation: side.deviation[span], excused: side.isExcused(span, -1, 1) };
         continue;
       }
       const first = side.flatten(span);
@@ -48,23 +52,32 @@ export function unpairedStretches(side: Side, hairMm: number): Stretch[] {
         let at = 0;
         for (let i = 0; i < free.length; i += 2) {
           if (free[i] > at) {
-            close(span);
-            pairedBefore = span;
+            close(neighbour(v, at));
+            before = neighbour(v, free[i]);
           }
-          open ??= new OpenStretch(side, chain, pairedBefore);
+          open ??= new OpenStretch(side, chain, before);
           open.add(span, v, free[i], free[i + 1]);
           at = free[i + 1];
         }
         if (at < 1) {
-          close(span);
-          pairedBefore = span;
+          close(neighbour(v, at));
+          before = neighbour(v, 1);
         }
       }
     }
-    close(-1);
+    close(NOTHING);
   }
   return stretches;
 }
+
+/** What is paired next to a stretch. */
+interface Neighbour {
+  /** Negative at the chain's end. */
+  readonly deviation: number;
+  readonly excused: boolean;
+}
+
+const NOTHING: Neighbour = { deviation: -1, excused: false };
 
 class OpenStretch {
   private readonly x: number[] = [];
@@ -75,11 +88,10 @@ class OpenStretch {
   private readonly to: number[] = [];
   private lengthMm = 0;
 
-  /** @param before span of what is paired before; negative at the chain's start. */
   constructor(
     private readonly side: Side,
     private readonly chain: number,
-    private readonly before: number,
+    private readonly before: Neighbour,
   ) {}
 
   add(span: number, v: number, from: number, to: number): void {
@@ -93,18 +105,13 @@ class OpenStretch {
     this.lengthMm += (to - from) * this.side.pieceLength(v);
   }
 
-  finish(after: number): Stretch {
+  finish(after: Neighbour): Stretch {
     const { chain, x, y, span, piece, from, to, lengthMm, before } = this;
     const pen = this.side.lines.pen[chain];
-    const [atStart, atEnd] = [before < 0, after < 0];
-    let deviation = 0;
-    let besideExcused = false;
-    for (const neighbour of [before, after]) {
-      if (neighbour < 0) continue;
-      deviation = Math.max(deviation, this.side.deviation[neighbour]);
-      if (this.side.excused[neighbour] === 1) besideExcused = true;
-    }
-    return { chain, pen, x, y, span, piece, from, to, lengthMm, atStart, atEnd, deviation, besideExcused };
+    const [atStart, atEnd] = [before.deviation < 0, after.deviation < 0];
+    const deviation = Math.max(before.deviation, after.deviation, 0);
+    const amidExcused = before.excused && after.excused;
+    return { chain, pen, x, y, span, piece, from, to, lengthMm, atStart, atEnd, deviation, amidExcused };
   }
 
   private point(x: number, y: number): void {
