@@ -102,7 +102,7 @@ export class AttributeTable {
   }
 
   nameAt(i: number): string {
-    return this.names[this.name.values[i]]!;
+    return this.names[this.name.values[i]];
   }
 
   nameNumberAt(i: number): number {

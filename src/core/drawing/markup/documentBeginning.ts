@@ -16,8 +16,7 @@ export function readBeginning(lexer: MarkupLexer): void {
   while (isXmlSpace(text.charCodeAt(first))) first++;
   if (first === text.length) throw new Unreadable('empty-input', null);
   if (text[first] !== '<') {
-    // biome-ignore lint/suspicious/noControlCharactersInRegex: kept out of what people will read.
-    const found = text.slice(first, first + 20).replace(/[\0-\x1f\ufffd]/g, '?');
+    const found = text.slice(first, first + 20).replace(/[\p{Cc}\ufffd]/gu, '?');
     throw lexer.fail('not-xml', first, { found });
   }
   const bad = findForbidden(text);

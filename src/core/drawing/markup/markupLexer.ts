@@ -43,9 +43,10 @@ export class MarkupLexer {
   }
 
   leave(): void {
-    const { text, at, base } = this.asides.pop()!;
-    this.base = base;
-    this.restart(text, at);
+    const outer = this.asides.pop();
+    if (!outer) return;
+    this.base = outer.base;
+    this.restart(outer.text, outer.at);
   }
 
   private restart(text: string, at: number): void {
@@ -141,7 +142,7 @@ export class MarkupLexer {
   /** The text ends too early; the place is its end, and what is begun and not ended stands in the values. */
   cutOff(inside: string, start?: number): Unreadable {
     const begun = this.lines.locate(
-      this.offsetOf(start ?? (inside === 'element' ? this.openStarts.at(-1)! : this.at)),
+      this.offsetOf(start ?? (inside === 'element' ? this.openStarts.at(-1) : null) ?? this.at),
     );
     const place = { ...this.placeAt(this.text.length), element: this.open.at(-1) ?? null };
     return new Unreadable('xml-cut-off', place, {

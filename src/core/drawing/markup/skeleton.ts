@@ -74,7 +74,7 @@ export class SkeletonWriter {
   }
 
   end(): void {
-    this.markup += this.open.pop()!.end;
+    this.markup += this.open.pop()?.end ?? '';
   }
 
   text(text: string): void {

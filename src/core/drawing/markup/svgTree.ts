@@ -67,8 +67,7 @@ export function readTree(text: string, lines: LineIndex, log: FindingLog, limits
 function elementsById(root: SvgElement, attributes: AttributeTable): Map<string, SvgElement> {
   const byId = new Map<string, SvgElement>();
   const pending = [root];
-  while (pending.length > 0) {
-    const element = pending.pop()!;
+  for (let element = pending.pop(); element; element = pending.pop()) {
     const id = attributes.get(element.number, 'id');
     if (id !== null && !byId.has(id)) byId.set(id, element);
     for (let i = element.children.length - 1; i >= 0; i--) {
@@ -83,8 +82,9 @@ function elementsById(root: SvgElement, attributes: AttributeTable): Map<string,
 export function textOf(element: SvgElement, limit: number): string {
   const pending: (SvgElement | string)[] = [element];
   let text = '';
-  while (pending.length > 0 && text.length <= 4 * limit) {
-    const node = pending.pop()!;
+  while (text.length <= 4 * limit) {
+    const node = pending.pop();
+    if (node === undefined) break;
     if (typeof node === 'string') text += node.slice(0, 4 * limit);
     else for (let i = node.children.length - 1; i >= 0; i--) pending.push(node.children[i]);
   }

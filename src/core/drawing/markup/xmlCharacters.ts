@@ -15,16 +15,16 @@ export function isXmlCharacter(code: number): boolean {
   return code <= 0xd7ff || (code >= 0xe000 && code <= 0xfffd) || (code >= 0x10000 && code <= 0x10ffff);
 }
 
-// biome-ignore lint/suspicious/noControlCharactersInRegex: the ones XML 1.0 §2.2 forbids are looked for.
-const FORBIDDEN = /[\0-\x08\x0b\x0c\x0e-\x1f\ufffe\uffff]/;
-const LONE_SURROGATE = /[\ud800-\udbff](?![\udc00-\udfff])|(?:[^\ud800-\udbff]|^)[\udc00-\udfff]/;
-
-/** Offset of the first character that XML does not allow, or -1. */
+/** Offset of the first character that XML does not allow, half of a surrogate pair included, or -1. */
 export function findForbidden(text: string): number {
-  const forbidden = text.search(FORBIDDEN);
-  if (forbidden >= 0) return forbidden;
-  const lone = text.search(LONE_SURROGATE);
-  return lone < 0 || /^[\ud800-\udfff]/.test(text.slice(lone, lone + 1)) ? lone : lone + 1;
+  for (let at = 0; at < text.length; at++) {
+    const unit = text.charCodeAt(at);
+    if (unit >= 32 && unit < 0xd800) continue;
+    const code = text.codePointAt(at) ?? unit;
+    if (!isXmlCharacter(code)) return at;
+    if (code > 0xffff) at++;
+  }
+  return -1;
 }
 
 /** What ends a name wherever it stands: white space, or one of `" ' / < = > ? & ; % ( ) [ ] | , * !`. */

@@ -11,7 +11,7 @@ import { styleOf } from '../style/styleReading.js';
 import { rootTransformOf } from '../transform/transformOf.js';
 import { type PageSize, pageSize } from './pageSize.js';
 
-export const CSS_PX_PER_INCH = 96;
+const CSS_PX_PER_INCH = 96;
 
 /** The page, and what the root's children inherit; `inside` is null where the root draws nothing. */
 export interface Root {
@@ -33,17 +33,7 @@ export function rootContext(session: Session): Root {
   if (page.physical && !viewBox && pxPerInch === null) {
     session.report('user-unit-assumed', root, { pxPerInch: units });
   }
-  const outside: Context = {
-    map: IDENTITY,
-    style: INITIAL_STYLE,
-    layer: NO_LAYER,
-    atTop: true,
-    copies: null,
-    clip: null,
-    viewportWidth: page.widthMm / unitMm,
-    viewportHeight: page.heightMm / unitMm,
-    pxPerInch: units,
-  };
+  const outside = outermost(page.widthMm / unitMm, page.heightMm / unitMm, units);
   const style = styleOf(session, root, specified, outside);
   const styled: Context = { ...outside, style, rootFontSize: style.fontSize };
   if (specified.get('display') === 'none' || readOpacity(specified.get('opacity') ?? '') === 0) {
@@ -82,17 +72,22 @@ function rootFontSize(
 ): number {
   if (!/\d(?:r?em|ex|ch)\b/i.test(sizes)) return INITIAL_STYLE.fontSize;
   const font = [...specified].filter(([name]) => name.startsWith('font'));
-  return styleOf(session, session.tree.root, new Map(font), {
+  return styleOf(session, session.tree.root, new Map(font), outermost(0, 0, pxPerInch)).fontSize;
+}
+
+/** Where the root element stands: a viewport in px with nothing inherited. */
+function outermost(viewportWidth: number, viewportHeight: number, pxPerInch: number): Context {
+  return {
     map: IDENTITY,
     style: INITIAL_STYLE,
     layer: NO_LAYER,
     atTop: true,
     copies: null,
     clip: null,
-    viewportWidth: 0,
-    viewportHeight: 0,
+    viewportWidth,
+    viewportHeight,
     pxPerInch,
-  }).fontSize;
+  };
 }
 
 /**

@@ -1,5 +1,5 @@
 import type { BasicShape } from '../clip/clipValue.js';
-import type { PathSink } from '../stroke/strokeSink.js';
+import type { PathSink } from '../stroke/subPathSink.js';
 import { splitOutside } from '../style/declarations.js';
 import { type Axis, type LengthContext, readLength, toUserUnits } from '../style/length.js';
 import { PathReader } from './pathReader.js';

@@ -58,7 +58,7 @@ export class PathCommands {
   /** Takes the last command back. */
   pop(): void {
     this.count--;
-    this.used -= ARITY[this.codes[this.count]]!;
+    this.used -= ARITY[this.codes[this.count]];
   }
 }
 

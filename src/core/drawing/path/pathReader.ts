@@ -1,4 +1,4 @@
-import type { PathSink } from '../stroke/strokeSink.js';
+import type { PathSink } from '../stroke/subPathSink.js';
 import { PathCommands } from './pathCommands.js';
 import { readPathByGrammar } from './pathGrammar.js';
 import { PathTokens, readPathTokens } from './pathTokens.js';

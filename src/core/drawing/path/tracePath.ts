@@ -1,5 +1,5 @@
 import { arcFromEndpoints } from '../../geometry/arc.js';
-import type { PathSink } from '../stroke/strokeSink.js';
+import type { PathSink } from '../stroke/subPathSink.js';
 import type { PathCommands } from './pathCommands.js';
 
 /** Sums of relative coordinates miss their target by less than this share of the largest of them. */

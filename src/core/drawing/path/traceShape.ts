@@ -1,4 +1,4 @@
-import type { PathSink } from '../stroke/strokeSink.js';
+import type { PathSink } from '../stroke/subPathSink.js';
 import type { Axis } from '../style/length.js';
 import { TextCursor } from './textCursor.js';
 

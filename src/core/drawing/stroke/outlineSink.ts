@@ -1,40 +1,17 @@
 import type { Affine } from '../../geometry/affine.js';
-import type { ArcCentre } from '../../geometry/arc.js';
 import { SegmentBuilder, type Segments } from '../../geometry/segments.js';
-import type { PathSink } from './strokeSink.js';
-import { isDrawable, SubPath } from './subPath.js';
+import { isDrawable } from './subPath.js';
+import { SubPathSink } from './subPathSink.js';
 
 /** Gathers what a path encloses, mapped: every sub-path closed by a line, as filling does. */
-export class OutlineSink implements PathSink {
+export class OutlineSink extends SubPathSink {
   /** A number is not finite or too far out. */
   overflows = false;
   private readonly builder = new SegmentBuilder();
-  private readonly sub = new SubPath();
 
   constructor(map: Affine) {
+    super();
     this.sub.setMap(map);
-  }
-
-  moveTo(x: number, y: number): void {
-    this.endSubPath();
-    this.sub.begin(x, y);
-  }
-
-  lineTo(x: number, y: number): void {
-    this.sub.lineTo(x, y);
-  }
-
-  cubicTo(ax: number, ay: number, bx: number, by: number, x: number, y: number): void {
-    this.sub.cubicTo(ax, ay, bx, by, x, y);
-  }
-
-  arcTo(arc: ArcCentre, x: number, y: number): void {
-    this.sub.arcTo(arc, x, y);
-  }
-
-  closePath(onlyRounding: boolean): void {
-    this.sub.close(onlyRounding);
-    this.endSubPath();
   }
 
   finish(): Segments {
@@ -42,7 +19,7 @@ export class OutlineSink implements PathSink {
     return this.builder.finish();
   }
 
-  private endSubPath(): void {
+  protected override endSubPath(): void {
     const { sub } = this;
     if (!sub.started) return;
     if (!sub.closed) sub.close(false);

@@ -1,5 +1,4 @@
 import { type Affine, IDENTITY } from '../../geometry/affine.js';
-import type { ArcCentre } from '../../geometry/arc.js';
 import { cutDashes, type DashPattern } from '../../geometry/dashes.js';
 import { segmentLength } from '../../geometry/length.js';
 import type { Region } from '../../geometry/region.js';
@@ -10,17 +9,8 @@ import type { Strokes } from '../drawing.js';
 import { DEFAULT_LIMITS, type ReadingLimits } from '../readingLimits.js';
 import { orTooLarge } from '../tooLarge.js';
 import { type Clipping, nothingClipped, StrokeClipper } from './strokeClipper.js';
-import { isDrawable, pastSegments, SubPath } from './subPath.js';
-
-/** What draws a path: points in the element's user units. */
-export interface PathSink {
-  moveTo(x: number, y: number): void;
-  lineTo(x: number, y: number): void;
-  cubicTo(ax: number, ay: number, bx: number, by: number, x: number, y: number): void;
-  arcTo(arc: ArcCentre, x: number, y: number): void;
-  /** `onlyRounding`: the end is where the start is but for rounding. */
-  closePath(onlyRounding: boolean): void;
-}
+import { isDrawable, pastSegments } from './subPath.js';
+import { SubPathSink } from './subPathSink.js';
 
 /** What the strokes of one element have in common. */
 export interface StrokeProperties {
@@ -59,14 +49,13 @@ export interface Drawn {
 }
 
 /** Gathers the strokes of a drawing: one per sub-path, in the order in which they come. */
-export class StrokeSink implements PathSink {
+export class StrokeSink extends SubPathSink {
   /** Segments drawn or measured so far. */
   segmentsSeen = 0;
   /** Something of the element has an inside: a curve, or more than one line in a row. */
   hasArea = false;
   readonly clipper = new StrokeClipper();
   private readonly builder = new SegmentBuilder();
-  private readonly sub: SubPath;
   private readonly first = new Column();
   private readonly colour = new Column();
   private readonly layer = new Column();
@@ -84,7 +73,7 @@ export class StrokeSink implements PathSink {
 
   /** Throws Unreadable past the limit of segments, or where memory is short. */
   constructor(private readonly limits: Pick<ReadingLimits, 'segments' | 'dashes'> = DEFAULT_LIMITS) {
-    this.sub = new SubPath(limits.segments);
+    super(limits.segments);
   }
 
   /** Begins an element; with `properties` null its paths are measured, not drawn. */
@@ -102,28 +91,6 @@ export class StrokeSink implements PathSink {
   end(): Drawn {
     this.endSubPath();
     return this.drawn;
-  }
-
-  moveTo(x: number, y: number): void {
-    this.endSubPath();
-    this.sub.begin(x, y);
-  }
-
-  lineTo(x: number, y: number): void {
-    this.sub.lineTo(x, y);
-  }
-
-  cubicTo(ax: number, ay: number, bx: number, by: number, x: number, y: number): void {
-    this.sub.cubicTo(ax, ay, bx, by, x, y);
-  }
-
-  arcTo(arc: ArcCentre, x: number, y: number): void {
-    this.sub.arcTo(arc, x, y);
-  }
-
-  closePath(onlyRounding: boolean): void {
-    this.sub.close(onlyRounding);
-    this.endSubPath();
   }
 
   finish(): Strokes {
@@ -145,7 +112,7 @@ export class StrokeSink implements PathSink {
     };
   }
 
-  private endSubPath(): void {
+  protected override endSubPath(): void {
     const { sub, drawn } = this;
     if (!sub.started) return;
     this.segmentsSeen += sub.count;

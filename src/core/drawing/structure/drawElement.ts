@@ -4,7 +4,7 @@ import type { SvgElement } from '../markup/svgTree.js';
 import { type ShapeInput, traceShape } from '../path/traceShape.js';
 import { type Context, type Session, shown } from '../session.js';
 import { dashesOf } from '../stroke/dashesOf.js';
-import type { PathSink } from '../stroke/strokeSink.js';
+import type { PathSink } from '../stroke/subPathSink.js';
 import { readOpacity, type Style } from '../style/computedStyle.js';
 import { type Axis, readLength, toUserUnits } from '../style/length.js';
 import type { Paint } from '../style/paint.js';

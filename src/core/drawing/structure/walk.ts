@@ -256,8 +256,7 @@ class Walk {
     if (count !== undefined) return count;
     count = 0;
     const pending: SvgElement[] = [element];
-    while (pending.length > 0) {
-      const next = pending.pop()!;
+    for (let next = pending.pop(); next; next = pending.pop()) {
       if (SHAPES.has(next.name) || next.name === 'use') count++;
       for (const child of next.children) {
         if (typeof child !== 'string' && child.isSvg && !NOT_RENDERED.has(child.name)) pending.push(child);

@@ -124,11 +124,11 @@ class Sum {
   }
 
   private space(): void {
-    this.at += /^\s*/.exec(this.rest())![0].length;
+    this.at = this.text.length - this.rest().trimStart().length;
   }
 
   private rest(): string {
-    return this.text.slice(this.at, this.at + 100);
+    return this.text.slice(this.at);
   }
 }
 

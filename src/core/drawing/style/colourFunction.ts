@@ -1,3 +1,4 @@
+import { angleOrNumber } from './angle.js';
 import { evaluate } from './calc.js';
 import { colourMix } from './colourMix.js';
 import { fromPolar, labToSrgb, oklabToSrgb, SPACES, type Triple } from './colourSpaces.js';
@@ -56,7 +57,7 @@ const FUNCTIONS: ReadonlyMap<string, Reader> = new Map<string, Reader>([
   ['rgba', rgb],
   ['hsl', hslOf],
   ['hsla', hslOf],
-  ['hwb', (words, legacy) => (legacy ? null : polar(words, 1, true, hwb))],
+  ['hwb', (words, legacy) => (legacy ? null : polar(words, true, hwb))],
   ['lab', (words, legacy) => rectangular(words, legacy, 100, 125, labToSrgb)],
   ['oklab', (words, legacy) => rectangular(words, legacy, 1, 0.4, oklabToSrgb)],
   ['lch', (words, legacy) => (legacy ? null : lightChromaHue(words, 100, 150, labToSrgb))],
@@ -76,12 +77,11 @@ function rgb(words: readonly string[], legacy: boolean): Triple | null {
 
 function hslOf(words: readonly string[], legacy: boolean): Triple | null {
   if (legacy && !(words[1].endsWith('%') && words[2].endsWith('%'))) return null;
-  return polar(words, 1, !legacy, hsl);
+  return polar(words, !legacy, hsl);
 }
 
 function polar(
   words: readonly string[],
-  top: number,
   modern: boolean,
   convert: (hue: number, second: number, third: number) => Triple,
 ): Triple | null {
@@ -90,8 +90,13 @@ function polar(
   const second = part(words[1], 100, modern) / 100;
   const third = part(words[2], 100, modern) / 100;
   if (Number.isNaN(angle + second + third)) return null;
-  const bytes = convert(angle, clamp(second, 0, top), clamp(third, 0, top));
-  return bytes.map((v) => Math.round(v * 255) / 255) as unknown as Triple;
+  const [r, g, b] = convert(angle, clamp(second, 0, 1), clamp(third, 0, 1));
+  return [toByte(r), toByte(g), toByte(b)];
+}
+
+/** The nearest of the 256 values of a byte. */
+function toByte(channel: number): number {
+  return Math.round(channel * 255) / 255;
 }
 
 function rectangular(
@@ -137,20 +142,9 @@ function part(word: string, whole: number, modern: boolean): number {
   return value?.value ?? Number.NaN;
 }
 
-const DEGREES_IN: ReadonlyMap<string, number> = new Map([
-  ['', 1],
-  ['deg', 1],
-  ['grad', 0.9],
-  ['rad', 180 / Math.PI],
-  ['turn', 360],
-]);
-
 function hue(word: string, modern: boolean): number {
   if (word === 'none') return modern ? 0 : Number.NaN;
-  const value = evaluate(word, (number, unit) => {
-    const factor = DEGREES_IN.get(unit);
-    return factor === undefined ? null : { kind: unit === '' ? 'number' : 'angle', value: number * factor };
-  });
+  const value = evaluate(word, angleOrNumber);
   return value ? ((value.value % 360) + 360) % 360 : Number.NaN;
 }
 

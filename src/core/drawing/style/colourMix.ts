@@ -1,5 +1,5 @@
 import type { Rgb } from './colourFunction.js';
-import { oklabToSrgb, SPACES, srgbToLinearSrgb, srgbToOklab, type Triple } from './colourSpaces.js';
+import { linearSrgbToSrgb, oklabToSrgb, srgbToLinearSrgb, srgbToOklab, type Triple } from './colourSpaces.js';
 import { splitOutside, wordsOf } from './cssText.js';
 
 interface Space {
@@ -7,10 +7,9 @@ interface Space {
   readonly to: (mixed: Triple) => Triple;
 }
 
-const LINEAR = SPACES.get('srgb-linear')!;
 const MIXED_IN: ReadonlyMap<string, Space> = new Map([
   ['srgb', { from: (c: Triple) => c, to: (c: Triple) => c }],
-  ['srgb-linear', { from: srgbToLinearSrgb, to: LINEAR }],
+  ['srgb-linear', { from: srgbToLinearSrgb, to: linearSrgbToSrgb }],
   ['oklab', { from: srgbToOklab, to: oklabToSrgb }],
 ]);
 

@@ -6,7 +6,7 @@ import {
   powerNineFifths,
   powerTwelveFifths,
   powerTwentyNinths,
-} from '../structure/roots.js';
+} from './fractionalPowers.js';
 
 /** Three components of one colour. */
 export type Triple = readonly [number, number, number];
@@ -126,6 +126,10 @@ export function oklabToSrgb(lab: Triple): Triple {
   return xyzToSrgb(apply(LMS_TO_XYZ, lms));
 }
 
+export function linearSrgbToSrgb(rgb: Triple): Triple {
+  return each(rgb, linearToSrgb);
+}
+
 export function srgbToLinearSrgb(rgb: Triple): Triple {
   return each(rgb, srgbToLinear);
 }
@@ -138,7 +142,7 @@ export function srgbToOklab(rgb: Triple): Triple {
 /** The spaces of `color()` (CSS Color Module Level 4, §10), to sRGB. */
 export const SPACES: ReadonlyMap<string, (c: Triple) => Triple> = new Map<string, (c: Triple) => Triple>([
   ['srgb', (c) => c],
-  ['srgb-linear', (c) => each(c, linearToSrgb)],
+  ['srgb-linear', linearSrgbToSrgb],
   ['display-p3', (c) => xyzToSrgb(apply(P3_TO_XYZ, each(c, srgbToLinear)))],
   ['display-p3-linear', (c) => xyzToSrgb(apply(P3_TO_XYZ, c))],
   ['a98-rgb', (c) => xyzToSrgb(apply(A98_TO_XYZ, each(c, a98ToLinear)))],

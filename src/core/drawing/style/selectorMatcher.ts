@@ -162,8 +162,9 @@ export class SelectorMatcher {
 
   private anyBelow(list: readonly Selector[], element: SvgElement): boolean {
     const pending: SvgElement[] = [...this.siblings.in(element)];
-    while (pending.length > 0 && this.compared <= this.most) {
-      const next = pending.pop()!;
+    while (this.compared <= this.most) {
+      const next = pending.pop();
+      if (!next) break;
       if (this.some(list, next)) return true;
       for (const child of this.siblings.in(next)) pending.push(child);
     }

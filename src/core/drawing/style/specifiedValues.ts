@@ -46,24 +46,25 @@ export class SpecifiedValues implements Specified {
   }
 
   set(name: string, value: string): void {
-    const slot = this.slots.get(name);
-    if (slot === undefined) {
-      this.slots.set(name, { value, round: this.round, styledRound: 0 });
-      this.count++;
-      return;
-    }
-    if (slot.round !== this.round) {
-      slot.round = this.round;
-      this.count++;
-    }
-    slot.value = value;
+    this.fill(name, value);
   }
 
   setStyled(name: string, value: string): void {
-    this.set(name, value);
-    const slot = this.slots.get(name)!;
+    const slot = this.fill(name, value);
     if (slot.styledRound !== this.round) this.styledCount++;
     slot.styledRound = this.round;
+  }
+
+  private fill(name: string, value: string): Slot {
+    let slot = this.slots.get(name);
+    if (slot === undefined) {
+      slot = { value, round: 0, styledRound: 0 };
+      this.slots.set(name, slot);
+    }
+    if (slot.round !== this.round) this.count++;
+    slot.round = this.round;
+    slot.value = value;
+    return slot;
   }
 
   /** The value is no longer one from style. */

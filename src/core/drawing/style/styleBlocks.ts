@@ -57,7 +57,7 @@ class BlockScanner {
 
   private atRule(depth: number): StyleItem {
     const at = this.at;
-    const name = /^[-\w\u0080-\uffff]*/.exec(this.text.slice(at + 1, at + 80))![0];
+    const name = /^[-\w\u0080-\uffff]*/.exec(this.text.slice(at + 1, at + 80))?.[0] ?? '';
     this.at += 1 + name.length;
     const from = this.at;
     this.skipTo((c) => c === ';' || c === '{' || (c === '}' && depth > 0));

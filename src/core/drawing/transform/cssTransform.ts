@@ -1,5 +1,5 @@
 import { type Affine, IDENTITY, multiply } from '../../geometry/affine.js';
-import { sinCosDegrees } from '../../geometry/trig.js';
+import { angleOrNumber } from '../style/angle.js';
 import { argumentsOf, evaluate } from '../style/calc.js';
 import { wordsOf } from '../style/cssText.js';
 import { readLength, type WrittenLength } from '../style/length.js';
@@ -13,6 +13,7 @@ import {
   scaling4,
   translation4,
 } from './matrix4.js';
+import { tangent, turned } from './turn.js';
 
 /** User units of a length along an axis, percentages of the reference box. */
 export type LengthAlong = (length: WrittenLength, axis: 'x' | 'y' | 'z') => number;
@@ -242,32 +243,8 @@ function numbers(words: readonly string[], count: number): number[] | null {
   return list.length === count && list.every((v): v is number => v !== null) ? list : null;
 }
 
-const DEGREES_IN: ReadonlyMap<string, number> = new Map([
-  ['deg', 1],
-  ['grad', 0.9],
-  ['rad', 180 / Math.PI],
-  ['turn', 360],
-]);
-
 /** Degrees; of numbers without a unit only 0 is an angle. */
 function angle(text: string): number | null {
-  const value = evaluate(text, (v, unit) => {
-    if (unit === '') return { kind: 'number', value: v };
-    const factor = DEGREES_IN.get(unit);
-    return factor === undefined ? null : { kind: 'angle', value: v * factor };
-  });
+  const value = evaluate(text, angleOrNumber);
   return value && (value.kind === 'angle' || value.value === 0) ? value.value : null;
-}
-
-/** Exact for whole quarter turns, so that turned drawings keep their straight lines straight. */
-function turned(degrees: number): Affine {
-  const sc = new Float64Array(2);
-  sinCosDegrees(degrees, sc);
-  return [sc[1], sc[0], -sc[0] + 0, sc[1], 0, 0];
-}
-
-function tangent(degrees: number): number {
-  const sc = new Float64Array(2);
-  sinCosDegrees(degrees, sc);
-  return sc[0] / sc[1];
 }

@@ -1,6 +1,6 @@
 import { type Affine, IDENTITY, multiply, scaling, translation } from '../../geometry/affine.js';
-import { sinCosDegrees } from '../../geometry/trig.js';
 import { TextCursor } from '../path/textCursor.js';
+import { tangent, turned } from './turn.js';
 
 /** Names in this grammar are as written, unlike those of CSS. */
 const NAMES = ['matrix', 'translate', 'scale', 'rotate', 'skewX', 'skewY'] as const;
@@ -61,24 +61,11 @@ function mapOf(name: (typeof NAMES)[number], n: readonly number[]): Affine | nul
     case 'scale':
       return count === 1 ? scaling(a, a) : count === 2 ? scaling(a, b) : null;
     case 'rotate':
-      if (count === 1) return rotate(a);
-      return count === 3 ? multiply(multiply(translation(b, c), rotate(a)), translation(-b, -c)) : null;
+      if (count === 1) return turned(a);
+      return count === 3 ? multiply(multiply(translation(b, c), turned(a)), translation(-b, -c)) : null;
     case 'skewX':
       return count === 1 ? [1, 0, tangent(a), 1, 0, 0] : null;
     case 'skewY':
       return count === 1 ? [1, tangent(a), 0, 1, 0, 0] : null;
   }
-}
-
-/** Exact for whole quarter turns, so that turned drawings keep their straight lines straight. */
-function rotate(degrees: number): Affine {
-  const sc = new Float64Array(2);
-  sinCosDegrees(degrees, sc);
-  return [sc[1], sc[0], -sc[0] + 0, sc[1], 0, 0];
-}
-
-function tangent(degrees: number): number {
-  const sc = new Float64Array(2);
-  sinCosDegrees(degrees, sc);
-  return sc[0] / sc[1];
 }

@@ -5,7 +5,7 @@ import { PathReader } from '../../../../src/core/drawing/path/pathReader.ts';
 import { PathTokens, readPathTokens } from '../../../../src/core/drawing/path/pathTokens.ts';
 import { TextCursor } from '../../../../src/core/drawing/path/textCursor.ts';
 import { tracePath } from '../../../../src/core/drawing/path/tracePath.ts';
-import type { PathSink } from '../../../../src/core/drawing/stroke/strokeSink.ts';
+import type { PathSink } from '../../../../src/core/drawing/stroke/subPathSink.ts';
 import { createRandom } from '../../../../src/core/structures/random.ts';
 import { randomPath } from '../../../support/randomPaths.ts';
 

@@ -6,7 +6,7 @@ import {
   powerNineFifths,
   powerTwelveFifths,
   powerTwentyNinths,
-} from '../../../../src/core/drawing/structure/roots.ts';
+} from '../../../../src/core/drawing/style/fractionalPowers.ts';
 
 // Held against the engine's own, whose last digits are not the same everywhere.
 test.each([
