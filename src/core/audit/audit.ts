@@ -131,13 +131,15 @@ function settleWanted(
 
 /**
  * A stroke with nothing paired is lost even where other lines pass; else fringe is allowed for. Corners of
- * what repeats another line leave fringe as far from it as the repeat is.
+ * what repeats another line leave fringe as far from it as the repeat is; where the repeat ends, no more
+ * than that.
  */
 function isLost(stretch: Stretch, drawn: Side, tolerances: Tolerances): boolean {
   if (stretch.atStart && stretch.atEnd) return true;
   if (stretch.lengthMm > fringeMm(stretch.deviation, tolerances)) return true;
   const { matchMm, repeatMm, hairMm } = tolerances;
-  const reach = stretch.amidExcused ? matchMm + repeatMm : matchMm;
+  const amid = stretch.excusedEnds === 2 || (stretch.excusedEnds === 1 && stretch.lengthMm <= repeatMm);
+  const reach = amid ? matchMm + repeatMm : matchMm;
   return stretch.lengthMm - totalLength(nearParts(stretch, drawn, reach)) > hairMm;
 }
 

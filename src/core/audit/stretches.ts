@@ -17,8 +17,8 @@ export interface Stretch {
   readonly atEnd: boolean;
   /** Largest deviation of what is paired before and after it on the chain. */
   readonly deviation: number;
-  /** Whether what comes before and after it is not drawn itself, but repeats what is. */
-  readonly amidExcused: boolean;
+  /** At how many of its ends what comes next is not drawn itself, but repeats what is. */
+  readonly excusedEnds: number;
 }
 
 /** All stretches of a side that are not paired, in order; those shorter than a hair only where they are a chain of their own. */
@@ -110,8 +110,8 @@ class OpenStretch {
     const pen = this.side.lines.pen[chain];
     const [atStart, atEnd] = [before.deviation < 0, after.deviation < 0];
     const deviation = Math.max(before.deviation, after.deviation, 0);
-    const amidExcused = before.excused && after.excused;
-    return { chain, pen, x, y, span, piece, from, to, lengthMm, atStart, atEnd, deviation, amidExcused };
+    const excusedEnds = Number(before.excused) + Number(after.excused);
+    return { chain, pen, x, y, span, piece, from, to, lengthMm, atStart, atEnd, deviation, excusedEnds };
   }
 
   private point(x: number, y: number): void {
