@@ -1,6 +1,8 @@
 const WORD = 2 ** 32;
+/** 2²⁰ words: what the low word hands on before it would lose digits. */
+const CARRY = 2 ** 52;
 
-/** An exact sum of integers below 2⁵³, in two words; good for 2²¹ summands. */
+/** An exact sum of integers below 2⁵³, in two words. */
 export class IntegerSum {
   private high = 0;
   private low = 0;
@@ -9,6 +11,10 @@ export class IntegerSum {
     const high = Math.floor(value / WORD);
     this.high += high;
     this.low += value - high * WORD;
+    if (this.low >= CARRY) {
+      this.high += 2 ** 20;
+      this.low -= CARRY;
+    }
   }
 
   value(): bigint {

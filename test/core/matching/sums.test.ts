@@ -15,6 +15,12 @@ test('integers add up exactly beyond 2⁵³, negative ones too', () => {
   expect(sum.value()).toBe(exact);
 });
 
+test('four million integers of 32 bits add up exactly', () => {
+  const sum = new IntegerSum();
+  for (let i = 0; i < 2 ** 22; i++) sum.add(2 ** 32 - 1);
+  expect(sum.value()).toBe(2n ** 22n * (2n ** 32n - 1n));
+});
+
 test('rounding down gives the greatest double not above an integer', () => {
   expect(roundedDown(0n)).toBe(0);
   expect(roundedDown(2n ** 53n - 1n)).toBe(2 ** 53 - 1);
