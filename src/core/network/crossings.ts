@@ -1,15 +1,18 @@
 import type { Drawing } from '../drawing/drawing.js';
 import { segmentBox } from '../geometry/box.js';
 import { selfIntersections } from '../geometry/cubicLoop.js';
-import { chordEnds } from '../geometry/evaluate.js';
+import { chordEnds, pointAt } from '../geometry/evaluate.js';
 import { intersectSegments } from '../geometry/intersect.js';
 import { CUBIC, LINE } from '../geometry/segments.js';
 import { addSplit, type Marks } from './marks.js';
 import type { Pieces } from './pieces.js';
+import { pointIndex } from './snap.js';
 import { isNearOwnEnd, segmentOfPlace } from './strokePlace.js';
 
 /** Lines this near meet: what is left of rounding after transforms. */
 const SAME_POINT_MM = 1e-6;
+/** Crossings this near are one: three lines through a point, as rounding leaves them. */
+const SAME_VERTEX_MM = 1e-5;
 /** More crossings than this would take the memory of a browser's worker: a mesh of 2,000 by 2,000 lines. */
 export const MOST_CROSSINGS = 4_000_000;
 
@@ -19,7 +22,9 @@ export const MOST_CROSSINGS = 4_000_000;
  * the snap distance nothing is added: the end splits what it touches. O(n log n + crossings) for bounded
  * crowding.
  *
- * @returns the number of places where lines cross; above MOST_CROSSINGS none of them is split.
+ * A crossing within the snap distance of another vertex, and not in its place, is left alone.
+ *
+ * @returns the number of places split where lines cross; above MOST_CROSSINGS none of them is.
  */
 export function splitWhereLinesCross(marks: Marks, drawing: Drawing, pieces: Pieces, snapMm: number): number {
   if (!pieces.index) return 0;
@@ -59,11 +64,49 @@ class CrossingSearch {
       }
     }
     if (this.count > MOST_CROSSINGS) return this.count;
+    const isClear = this.clearCrossings();
+    let kept = 0;
     for (let k = 0; k < this.stroke.length; k++) {
+      if (!isClear[k >> 1]) continue;
+      kept++;
       const segment = segmentOfPlace(this.drawing, this.stroke[k], this.place[k]);
       addSplit(this.marks, this.drawing, this.stroke[k], segment, this.place[k] - segment);
     }
-    return this.count;
+    return kept / 2;
+  }
+
+  /**
+   * 1 for each crossing that is to be split. One that stands by another vertex without being in the same
+   * place would be snapped to it, and a joint that is there to save travel is not worth a bridge.
+   */
+  private clearCrossings(): Uint8Array {
+    const { marks, snapMm } = this;
+    const n = this.stroke.length / 2;
+    const isClear = new Uint8Array(n);
+    if (n === 0) return isClear;
+    const x = new Float64Array(n + marks.count);
+    const y = new Float64Array(n + marks.count);
+    const at = new Float64Array(2);
+    for (let k = 0; k < n; k++) {
+      const segment = segmentOfPlace(this.drawing, this.stroke[2 * k], this.place[2 * k]);
+      pointAt(this.drawing.strokes.segments, segment, this.place[2 * k] - segment, at);
+      x[k] = at[0];
+      y[k] = at[1];
+    }
+    x.set(marks.x, n);
+    y.set(marks.y, n);
+    const index = pointIndex(x, y);
+    const order = Array.from({ length: n }, (_, k) => k).sort((a, b) => x[a] - x[b] || y[a] - y[b]);
+    for (const k of order) {
+      const near = index.search(x[k] - snapMm, y[k] - snapMm, x[k] + snapMm, y[k] + snapMm);
+      const isInTheWay = (m: number): boolean => {
+        if (m < n && !isClear[m]) return false;
+        const apart = Math.sqrt((x[m] - x[k]) * (x[m] - x[k]) + (y[m] - y[k]) * (y[m] - y[k]));
+        return apart > SAME_VERTEX_MM && apart <= snapMm;
+      };
+      if (!near.some(isInTheWay)) isClear[k] = 1;
+    }
+    return isClear;
   }
 
   /** Later segments, with their strokes, whose pieces come near the pieces of one from `start` up to `end`. */
