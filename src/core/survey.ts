@@ -2,7 +2,7 @@ import type { Drawing } from './drawing/drawing.js';
 import { NO_LAYER } from './drawing/drawing.js';
 import { planPens, strokesOfPens } from './drawing/pens.js';
 import { choosePens } from './drawing/penWishes.js';
-import { segmentBox } from './geometry/box.js';
+import { boxOfSegments } from './geometry/box.js';
 import { segmentLength } from './geometry/length.js';
 import type { Bounds } from './measure/bounds.js';
 import { travelCost } from './metric/metric.js';
@@ -116,16 +116,10 @@ function closedCount({ strokes: { count, first, dot, segments } }: Drawing): num
   return closed;
 }
 
-function boxOf({ strokes }: Drawing): Bounds {
+function boxOf({ strokes: { segments } }: Drawing): Bounds {
   const box = new Float64Array(4);
-  let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity];
-  for (let i = 0; i < strokes.segments.count; i++) {
-    segmentBox(strokes.segments, i, box);
-    minX = Math.min(minX, box[0]);
-    minY = Math.min(minY, box[1]);
-    maxX = Math.max(maxX, box[2]);
-    maxY = Math.max(maxY, box[3]);
-  }
+  boxOfSegments(segments, 0, segments.count, box);
+  const [minX, minY, maxX, maxY] = box;
   return { minX, minY, maxX, maxY };
 }
 

@@ -1,4 +1,4 @@
-import { segmentBox } from '../geometry/box.js';
+import { boxOfSegments } from '../geometry/box.js';
 import { pageRegion } from './clip/clipping.js';
 import type { Drawing, Strokes } from './drawing.js';
 import { FindingLog, Unreadable } from './findingLog.js';
@@ -85,18 +85,13 @@ function wordsOf(session: Session, element: 'title' | 'desc'): string | null {
 }
 
 /** A page that reaches from the origin to the far ends of what is drawn, where the drawing names none. */
-function extentOf(strokes: Strokes, page: PageSize): { widthMm: number; heightMm: number } {
+function extentOf({ segments }: Strokes, page: PageSize): { widthMm: number; heightMm: number } {
   const box = new Float64Array(4);
-  let widthMm = 0;
-  let heightMm = 0;
-  for (let i = 0; i < strokes.segments.count; i++) {
-    segmentBox(strokes.segments, i, box);
-    widthMm = Math.max(widthMm, box[2]);
-    heightMm = Math.max(heightMm, box[3]);
-  }
+  boxOfSegments(segments, 0, segments.count, box);
+  const [, , maxX, maxY] = box;
   return {
-    widthMm: page.widthGiven || widthMm <= 0 ? page.widthMm : widthMm,
-    heightMm: page.heightGiven || heightMm <= 0 ? page.heightMm : heightMm,
+    widthMm: page.widthGiven || maxX <= 0 ? page.widthMm : maxX,
+    heightMm: page.heightGiven || maxY <= 0 ? page.heightMm : maxY,
   };
 }
 

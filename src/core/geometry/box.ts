@@ -1,4 +1,5 @@
 import { bernstein3 } from './evaluate.js';
+import { cubicTurns } from './monotone.js';
 import { CUBIC, LINE, type Segments } from './segments.js';
 import { atan2 } from './trig.js';
 
@@ -41,23 +42,33 @@ export function segmentBox(segments: Segments, i: number, out: Float64Array): vo
   }
 }
 
+/**
+ * The bounding box of the segments from `from` up to `to`, as `segmentBox` has them, into `out`; where there
+ * are none, from +Infinity to -Infinity.
+ */
+export function boxOfSegments(segments: Segments, from: number, to: number, out: Float64Array): void {
+  const box = new Float64Array(4);
+  let [minX, minY, maxX, maxY] = [Infinity, Infinity, -Infinity, -Infinity];
+  for (let i = from; i < to; i++) {
+    segmentBox(segments, i, box);
+    minX = Math.min(minX, box[0]);
+    minY = Math.min(minY, box[1]);
+    maxX = Math.max(maxX, box[2]);
+    maxY = Math.max(maxY, box[3]);
+  }
+  out[0] = minX;
+  out[1] = minY;
+  out[2] = maxX;
+  out[3] = maxY;
+}
+
 function include(value: number, axis: number, out: Float64Array): void {
   if (value < out[axis]) out[axis] = value;
   if (value > out[axis + 2]) out[axis + 2] = value;
 }
 
-/** The extremes lie where the derivative, a quadratic, vanishes. */
 function cubicExtremes(p0: number, a: number, b: number, p1: number, axis: number, out: Float64Array): void {
-  const c0 = a - p0;
-  const c1 = b - a;
-  const c2 = p1 - b;
-  // (c0 − 2 c1 + c2) t² + 2 (c1 − c0) t + c0 = 0, without cancellation.
-  const qa = c0 - 2 * c1 + c2;
-  const half = c1 - c0;
-  const under = half * half - qa * c0;
-  if (!(under >= 0)) return;
-  const q = -(half + (half < 0 ? -1 : 1) * Math.sqrt(under));
-  for (const t of [q / qa, c0 / q]) {
+  for (const t of cubicTurns(p0, a, b, p1) ?? []) {
     if (t > 0 && t < 1) include(bernstein3(p0, a, b, p1, t), axis, out);
   }
 }

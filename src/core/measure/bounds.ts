@@ -1,4 +1,4 @@
-import { segmentBox } from '../geometry/box.js';
+import { boxOfSegments } from '../geometry/box.js';
 import type { Program } from '../program/program.js';
 
 export interface Bounds {
@@ -17,17 +17,8 @@ export interface ProgramBounds {
 /** How far the tool goes; tight for curves as `segmentBox` is, never smaller. O(segments). */
 export function programBounds(program: Program): ProgramBounds {
   const box = new Float64Array(4);
-  let minX = Infinity;
-  let minY = Infinity;
-  let maxX = -Infinity;
-  let maxY = -Infinity;
-  for (let i = program.first[0]; i < program.first[program.count]; i++) {
-    segmentBox(program.segments, i, box);
-    minX = Math.min(minX, box[0]);
-    minY = Math.min(minY, box[1]);
-    maxX = Math.max(maxX, box[2]);
-    maxY = Math.max(maxY, box[3]);
-  }
+  boxOfSegments(program.segments, program.first[0], program.first[program.count], box);
+  const [minX, minY, maxX, maxY] = box;
   const { homeX, homeY } = program;
   return {
     drawn: program.count === 0 ? null : { minX, minY, maxX, maxY },

@@ -11,9 +11,9 @@ interface Command {
 /**
  * The path data of one run (SVG 2, "The grammar for path data"), one moveto. Each command is written
  * absolute or relative, whichever is shorter; the last one absolute, so that both ends of the run are read
- * as the very numbers that meet other runs. Differences are of what is written, so none adds up. Segments share the coordinates that are written, so rounding opens no gap. A line or arc that ends
- * where it starts as written is left out; where nothing is left, the run is written as a dot, so that
- * it is not lost.
+ * as the very numbers that meet other runs. Differences are of what is written, so none adds up, and
+ * rounding opens no gap between segments. A line or arc that ends where it starts as written is left out;
+ * where nothing is left, the run is written as a dot, so that it is not lost.
  */
 export class PathText {
   private parts: Command[] = [];

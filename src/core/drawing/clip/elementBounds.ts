@@ -1,10 +1,11 @@
 import { type Affine, IDENTITY, multiply, translation } from '../../geometry/affine.js';
-import { segmentBox } from '../../geometry/box.js';
+import { boxOfSegments } from '../../geometry/box.js';
 import type { SvgElement } from '../markup/svgTree.js';
 import type { Context, Session } from '../session.js';
 import { OutlineSink } from '../stroke/outlineSink.js';
 import { firstThatHolds, holds } from '../structure/conditions.js';
 import { lengthOf, SHAPES, traceShapeInto } from '../structure/drawElement.js';
+import { NOT_RENDERED } from '../structure/notRendered.js';
 import { hrefOf } from '../structure/references.js';
 import { enterViewport, type UseSize } from '../structure/viewport.js';
 import type { Style } from '../style/computedStyle.js';
@@ -18,13 +19,6 @@ export type Bounds = [number, number, number, number];
 const MOST_DEEP = 100;
 /** What an element costs, in steps of `Work`. */
 const ELEMENT_WORK = 200;
-/** Elements that draw nothing where they stand, and so have no box. */
-const WITHOUT_BOX: ReadonlySet<string> = new Set([
-  ...['defs', 'symbol', 'clipPath', 'mask', 'pattern', 'marker', 'linearGradient', 'radialGradient'],
-  ...['filter', 'title', 'desc', 'metadata', 'style', 'script', 'animate', 'set', 'animateTransform'],
-  ...['animateMotion', 'view'],
-]);
-
 /**
  * The box of what an element fills, in its own user space (SVG 2, "Bounding boxes": no strokes, no
  * clipping, hidden shapes included). null where it is empty; 'unknown' where a text, image or the like
@@ -93,7 +87,7 @@ class Search {
         const chosen = firstThatHolds(element, (child) =>
           session.cascade.specifiedOn(child, context.copies),
         ).chosen;
-        return !chosen || WITHOUT_BOX.has(chosen.name) || this.addChild(chosen, inner, null, depth);
+        return !chosen || NOT_RENDERED.has(chosen.name) || this.addChild(chosen, inner, null, depth);
       }
       case 'svg':
       case 'symbol': {
@@ -103,13 +97,13 @@ class Search {
       case 'use':
         return this.addCopy(element, inner, true, depth);
       default:
-        return WITHOUT_BOX.has(element.name) || !element.isSvg;
+        return NOT_RENDERED.has(element.name) || !element.isSvg;
     }
   }
 
   addChildren(element: SvgElement, context: Context, depth: number): boolean {
     for (const child of element.children) {
-      if (typeof child === 'string' || !child.isSvg || WITHOUT_BOX.has(child.name)) continue;
+      if (typeof child === 'string' || !child.isSvg || NOT_RENDERED.has(child.name)) continue;
       if (!this.addChild(child, context, null, depth)) return false;
     }
     return true;
@@ -141,13 +135,11 @@ class Search {
   private include(sink: OutlineSink, [reachX, reachY]: readonly [number, number]): boolean {
     const { bounds, box } = this;
     const segments = sink.finish();
-    for (let i = 0; i < segments.count; i++) {
-      segmentBox(segments, i, box);
-      bounds[0] = Math.min(bounds[0], box[0] - reachX);
-      bounds[1] = Math.min(bounds[1], box[1] - reachY);
-      bounds[2] = Math.max(bounds[2], box[2] + reachX);
-      bounds[3] = Math.max(bounds[3], box[3] + reachY);
-    }
+    boxOfSegments(segments, 0, segments.count, box);
+    bounds[0] = Math.min(bounds[0], box[0] - reachX);
+    bounds[1] = Math.min(bounds[1], box[1] - reachY);
+    bounds[2] = Math.max(bounds[2], box[2] + reachX);
+    bounds[3] = Math.max(bounds[3], box[3] + reachY);
     return !sink.overflows;
   }
 }

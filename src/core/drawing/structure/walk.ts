@@ -12,26 +12,9 @@ import { transformOf } from '../transform/transformOf.js';
 import { firstThatHolds, holds } from './conditions.js';
 import { CopyLimits } from './copyLimits.js';
 import { drawElement, lengthOf, SHAPES } from './drawElement.js';
+import { NOT_RENDERED } from './notRendered.js';
 import { hrefOf, isLoop, labelOf } from './references.js';
 import { enterViewport, type UseSize } from './viewport.js';
-
-/** Never drawn where they stand; some of them are used by others, from there. */
-const NOT_RENDERED: ReadonlySet<string> = new Set([
-  ...[
-    'defs',
-    'symbol',
-    'clipPath',
-    'mask',
-    'pattern',
-    'marker',
-    'linearGradient',
-    'radialGradient',
-    'filter',
-  ],
-  ...['title', 'desc', 'metadata', 'style', 'script', 'animate', 'animateTransform', 'animateMotion'],
-  ...['animateColor', 'set', 'mpath', 'view', 'cursor', 'font', 'font-face', 'color-profile', 'stop'],
-  ...['meshgradient', 'hatch', 'solidcolor', 'solidColor', 'tspan', 'textPath', 'tref', 'link', 'discard'],
-]);
 
 /** Elements whose children are being drawn. */
 interface Frame {
