@@ -92,16 +92,23 @@ function findingsOf({ drawing, settings, networks, before, after, crossings }: O
   const { drawn } = programBounds(after.program);
   if (drawn) findings.push(...overhang(drawn, drawing));
   findings.push(...wideStrokes(drawing, settings.penWidthMm));
-  if (crossings) note(...crossingNote(crossings));
+  if (crossings) findings.push(crossingNote(crossings));
   if (after === before) note('order-kept', {});
   return findings;
 }
 
 /** What junctions at crossings saved. */
-function crossingNote(crossings: Crossings): [string, Finding['values']] {
-  const { count, without, kept } = crossings;
-  if (count > MOST_CROSSINGS) return ['too-many-crossings', { limit: MOST_CROSSINGS }];
-  const runs = without.runs - crossings.with.runs;
-  const travelMm = without.travelMm - crossings.with.travelMm;
-  return [kept ? 'crossings-paid' : 'crossings-not-worth', { count, runs, travelMm }];
+function crossingNote({ count, kept, without, with: crossed }: Crossings): Finding {
+  const note = { severity: 'note', place: null } as const;
+  if (count > MOST_CROSSINGS) {
+    return { code: 'too-many-crossings', ...note, values: { limit: MOST_CROSSINGS } };
+  }
+  const values = {
+    count,
+    runs: without.runs - crossed.runs,
+    travelMm: without.travelMm - crossed.travelMm,
+  };
+  return kept
+    ? { code: 'crossings-paid', ...note, values }
+    : { code: 'crossings-not-worth', ...note, values };
 }
