@@ -7,7 +7,8 @@ import { distance, type TourGraph } from './problem.js';
  * (home left out), as u0 v0 u1 v1 …. For any split of the vertices in two the shortest pair across is among them,
  * hence also a minimum spanning tree of the components (Preparata & Shamos 1985, §5.3, from memory).
  *
- * Coincident vertices are linked to the first of them; points in line are linked in order.
+ * Coincident vertices are linked to the first of them; points in line are linked in order, also where they
+ * are in line but for rounding, as dashes cut from one line are: a triangulation then leaves some out.
  */
 export function delaunayPairs(graph: TourGraph): Int32Array {
   const n = graph.home;
@@ -26,8 +27,9 @@ export function delaunayPairs(graph: TourGraph): Int32Array {
     coords[2 * i + 1] = y[v];
   });
   const { triangles, halfedges } = new Delaunator(coords);
-  if (triangles.length === 0) {
-    for (let i = 1; i < single.length; i++) pairs.push(single[i - 1], single[i]);
+  const left = leftOut(single, triangles);
+  if (left.length > 0) {
+    for (const v of [...inLine(graph, single), ...toNearest(graph, single, left)]) pairs.push(v);
   }
   for (let t = 0; t < triangles.length; t++) {
     if (halfedges[t] > t) continue;
@@ -35,6 +37,43 @@ export function delaunayPairs(graph: TourGraph): Int32Array {
     pairs.push(single[triangles[t]], single[to]);
   }
   return Int32Array.from(pairs);
+}
+
+/** Vertices that are in no triangle: all of them where all are in line. */
+function leftOut(vertices: readonly number[], triangles: Uint32Array): number[] {
+  const isIn = new Uint8Array(vertices.length);
+  for (const corner of triangles) isIn[corner] = 1;
+  return vertices.filter((_, i) => isIn[i] === 0);
+}
+
+/** Pairs that follow each other along the longer side of the box: what is in line, in its order. */
+function inLine({ x, y }: TourGraph, vertices: readonly number[]): number[] {
+  const side = (at: Float64Array) => {
+    let least = Number.POSITIVE_INFINITY;
+    let most = Number.NEGATIVE_INFINITY;
+    for (const v of vertices) {
+      least = Math.min(least, at[v]);
+      most = Math.max(most, at[v]);
+    }
+    return most - least;
+  };
+  const [along, across] = side(x) >= side(y) ? [x, y] : [y, x];
+  const order = [...vertices].sort((a, b) => along[a] - along[b] || across[a] - across[b] || a - b);
+  const pairs: number[] = [];
+  for (let i = 1; i < order.length; i++) pairs.push(order[i - 1], order[i]);
+  return pairs;
+}
+
+/** A point left out amid others has a twin but for rounding: the nearest. */
+function toNearest({ x, y }: TourGraph, vertices: readonly number[], from: readonly number[]): number[] {
+  const index = new Flatbush(vertices.length);
+  for (const v of vertices) index.add(x[v], y[v], x[v], y[v]);
+  index.finish();
+  const pairs: number[] = [];
+  for (const v of from) {
+    for (const i of index.neighbors(x[v], y[v], 2)) if (vertices[i] !== v) pairs.push(v, vertices[i]);
+  }
+  return pairs;
 }
 
 /** Neighbours worth a connector: those of v are `near[first[v]]` up to `near[first[v + 1]]`, nearest first. */
