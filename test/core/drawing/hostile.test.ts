@@ -169,14 +169,8 @@ describe('files made to hurt', () => {
         `<style>g{transform-box:fill-box;transform:rotate(3deg)}</style>${'<g>'.repeat(300)}<path d="M1 1h9"/>${'</g>'.repeat(300)}`,
     ],
     ['open braces', (n: number) => `<style>${'a{'.repeat(n)}</style>`],
-  ])('time grows no faster than the text: %s', (_, make) => {
-    const seconds = (n: number): number => {
-      const text = make(n);
-      const start = performance.now();
-      readBody(text);
-      return (performance.now() - start) / 1000;
-    };
-    // Quadratic time would be minutes here.
-    expect(seconds(400_000)).toBeLessThan(20);
+  ])('ends long before the square of the text would: %s', (_, make) => {
+    // Quadratic time takes minutes here, and is ended by the time limit that every test has.
+    expect(brokenPromises(readBody(make(400_000)))).toEqual([]);
   });
 });
