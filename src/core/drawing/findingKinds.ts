@@ -13,9 +13,9 @@ export const READING_FINDINGS = {
   'xml-bad-tag': 'error',
   'xml-bad-doctype': 'error',
   'xml-bad-entity': 'error', // entity: its text opens an element and does not close it
-  'xml-bad-attribute': 'error', // attribute
+  'xml-bad-attribute': 'error', // attribute, why: no value | no quotes | less-than | name
   'xml-duplicate-attribute': 'error', // attribute
-  'xml-tag-mismatch': 'error', // expected, found
+  'xml-tag-mismatch': 'error', // expected, found; openedLine, openedColumn: of what was to be closed
   'xml-unopened-tag': 'error', // found
   'xml-cut-off': 'error', // inside: what the text ends in the middle of; open: elements not closed; startLine, startColumn
   'xml-two-roots': 'error', // found: name of the second
@@ -30,7 +30,7 @@ export const READING_FINDINGS = {
   'unknown-entity': 'warning', // entity
   'external-entity': 'warning', // entity
   'xml-not-strict': 'warning', // what
-  'svg-namespace-missing': 'warning',
+  'svg-namespace-missing': 'warning', // element, isRoot: 1 or 0
   'undeclared-prefix': 'warning', // prefix
   'style-rule-not-read': 'warning', // rule
   'style-sheet-not-read': 'warning', // type

@@ -168,6 +168,10 @@ describe('files made to hurt', () => {
       () =>
         `<style>g{transform-box:fill-box;transform:rotate(3deg)}</style>${'<g>'.repeat(300)}<path d="M1 1h9"/>${'</g>'.repeat(300)}`,
     ],
+    [
+      'colours mixed of colours',
+      () => `<path d="M1 1h9" stroke="${'color-mix(red,'.repeat(26)}red${')'.repeat(26)}"/>`,
+    ],
     ['open braces', (n: number) => `<style>${'a{'.repeat(n)}</style>`],
   ])('ends long before the square of the text would: %s', (_, make) => {
     // Quadratic time takes minutes here, and is ended by the time limit that every test has.

@@ -1,4 +1,4 @@
-import { splitOutside } from '../style/declarations.js';
+import { splitOutside } from '../style/cssText.js';
 
 /** The boxes that a basic shape may be measured in (CSS Masking Module Level 1, "clip-path"). */
 export type ReferenceBox = 'fill-box' | 'stroke-box' | 'view-box';

@@ -157,8 +157,11 @@ class MarkupScan {
     if (name === '' || lexer.text.charCodeAt(lexer.at) !== 62) throw lexer.fail('xml-bad-tag', start);
     if (lexer.open.length === this.floor) throw lexer.fail('xml-unopened-tag', start, { found: name });
     const expected = lexer.open.pop();
-    lexer.openStarts.pop();
-    if (expected !== name) throw lexer.fail('xml-tag-mismatch', start, { expected, found: name });
+    const opened = lexer.openStarts.pop() ?? start;
+    if (expected !== name) {
+      const { line: openedLine, column: openedColumn } = lexer.placeAt(opened);
+      throw lexer.fail('xml-tag-mismatch', start, { expected, found: name, openedLine, openedColumn });
+    }
     lexer.at++;
     this.flushText();
     this.out.writer.end();
@@ -231,22 +234,22 @@ class MarkupScan {
     if (lexer.at >= text.length) throw lexer.cutOff('tag', tagStart);
     const quote = text[lexer.at];
     if (name === '') throw lexer.fail('xml-bad-tag', tagStart);
-    const bad = () => lexer.fail('xml-bad-attribute', start, { attribute: name.slice(0, 60) });
-    if (!hasEquals || (quote !== '"' && quote !== "'")) throw bad();
+    const bad = (why: string) =>
+      lexer.fail('xml-bad-attribute', start, { attribute: name.slice(0, 60), why });
+    if (!hasEquals) throw bad('no value');
+    if (quote !== '"' && quote !== "'") throw bad('no quotes');
     const from = lexer.at + 1;
     const end = text.indexOf(quote, from);
     const less = lexer.lessFrom(from);
     // A `<` inside a value most often means that the closing quote is missing.
-    if (end >= 0 ? less < end : less < text.length) throw bad();
+    if (end >= 0 ? less < end : less < text.length) throw bad('less-than');
     if (end < 0) throw lexer.cutOff('attribute', tagStart);
     if (end - from > limits.attributeCharacters) {
-      throw lexer.fail('past-limit', start, {
-        limit: 'attributeCharacters',
-        value: limits.attributeCharacters,
-      });
+      const { attributeCharacters: value } = limits;
+      throw lexer.fail('past-limit', start, { limit: 'attributeCharacters', value });
     }
     const number = attributes.numberOf(name);
-    if (number < 0) throw bad();
+    if (number < 0) throw bad('name');
     if (attributes.isRepeated(number)) {
       throw lexer.fail('xml-duplicate-attribute', start, { attribute: name.slice(0, 60) });
     }
@@ -259,10 +262,10 @@ class MarkupScan {
     lexer.at = end + 1;
   }
 
-  private decodeValue(raw: string, start: number, bad: () => Unreadable): string {
+  private decodeValue(raw: string, start: number, bad: (why: string) => Unreadable): string {
     const value = this.guarded(start, () => this.entities.decode(raw));
     // XML 1.0 §3.1, "No < in Attribute Values": not through an entity either.
-    if (value.markup !== null) throw bad();
+    if (value.markup !== null) throw bad('less-than');
     this.report(value, start);
     return value.text;
   }

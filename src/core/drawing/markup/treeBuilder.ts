@@ -97,7 +97,8 @@ export class TreeBuilder {
     if (local === 'style' && element.isSvg) this.sheets.push(element);
     if (prefix !== '') this.checkPrefix(prefix, element, scope);
     else if (!scope.hasDefault && element.isSvg) {
-      this.log.add('svg-namespace-missing', () => this.placeOf(element));
+      const values = { element: local.slice(0, 60), isRoot: depth === 0 ? 1 : 0 };
+      this.log.add('svg-namespace-missing', () => this.placeOf(element), values);
     }
     if (prefixed > 0) this.checkAttributes(element, scope, prefixed);
     return element;

@@ -1,6 +1,6 @@
 import type { BasicShape } from '../clip/clipValue.js';
 import type { PathSink } from '../stroke/subPathSink.js';
-import { splitOutside } from '../style/declarations.js';
+import { splitOutside, wordsOf } from '../style/cssText.js';
 import { type Axis, type LengthContext, readLength, toUserUnits } from '../style/length.js';
 import { PathReader } from './pathReader.js';
 import { tracePath } from './tracePath.js';
@@ -53,10 +53,6 @@ function lengthIn(text: string, axis: Axis, { context, fontSize }: ReferenceSize
   if (!length || (length.unit === '' && length.value !== 0)) return null;
   const value = toUserUnits(length, axis, context, fontSize);
   return Number.isFinite(value) ? value : null;
-}
-
-function wordsOf(text: string): string[] {
-  return splitOutside(text.trim().replace(/\s+/g, ' '), ' ').filter((word) => word !== '');
 }
 
 /** One to four values for top, right, bottom and left, as in `margin`. */

@@ -2,7 +2,7 @@ import type { FindingLog } from '../findingLog.js';
 import type { SvgElement, SvgTree } from '../markup/svgTree.js';
 import { DEFAULT_LIMITS } from '../readingLimits.js';
 import { type CustomValues, customValues, substituted } from './customProperties.js';
-import { checkedValue, type Declaration, type Misread, readDeclarations } from './declarations.js';
+import { checkedValue, type Declaration, type Misread, readDeclarations, WIDE } from './declarations.js';
 import { PROPERTIES } from './properties.js';
 import { SelectorMatcher } from './selectorMatcher.js';
 import { reportMisread, sheetsOf } from './sheets.js';
@@ -259,8 +259,6 @@ function ignoresStyle({ name, parent }: SvgElement, property: string): boolean {
   if (name === 'use') return property === 'width' || property === 'height';
   return (name === 'svg' && parent !== null) || name === 'symbol';
 }
-
-const WIDE: ReadonlySet<string> = new Set(['inherit', 'initial', 'unset', 'revert', 'revert-layer']);
 
 function inOrder(ruled: readonly Declaration[], inline: readonly Declaration[]): readonly Declaration[] {
   if (ruled.length === 0 && !inline.some((d) => d.important)) return inline;

@@ -20,23 +20,26 @@ const HEX = /^#(?:[0-9a-f]{3,4}|[0-9a-f]{6}|[0-9a-f]{8})$/;
 export function readColour(text: string): Colour | null {
   const t = text.trim().toLowerCase();
   if (t.length > LONGEST) return null;
-  if (HEX.test(t)) return hexColour(t.slice(1));
-  if (t === 'transparent') return { hex: '#000000', alpha: 0 };
-  const named = COLOUR_NAMES.get(t) ?? SYSTEM_COLOURS.get(t);
-  if (named !== undefined) return { hex: `#${named}`, alpha: 1 };
-  if (!t.endsWith(')')) return null;
+  const plain = plainColour(t);
+  if (plain || !t.endsWith(')')) return plain;
   const colour = colourFunction(t, rgbOf);
   return colour && { hex: toHex(colour), alpha: colour.alpha };
 }
 
-/** For the colours that others are mixed of. */
-function rgbOf(text: string): Rgb | null {
-  const colour = readColour(text);
-  if (!colour) return null;
-  const exact = text.endsWith(')') ? colourFunction(text, rgbOf) : null;
-  if (exact) return exact;
-  const channel = (at: number): number => Number.parseInt(colour.hex.slice(at, at + 2), 16) / 255;
-  return { rgb: [channel(1), channel(3), channel(5)], alpha: colour.alpha };
+/** A colour by its digits or its name. */
+function plainColour(t: string): Colour | null {
+  if (HEX.test(t)) return hexColour(t.slice(1));
+  if (t === 'transparent') return { hex: '#000000', alpha: 0 };
+  const named = COLOUR_NAMES.get(t) ?? SYSTEM_COLOURS.get(t);
+  return named === undefined ? null : { hex: `#${named}`, alpha: 1 };
+}
+
+/** For the colours that others are mixed of: not rounded, and each worked out once, however deep. */
+function rgbOf(t: string): Rgb | null {
+  const plain = plainColour(t);
+  if (!plain) return t.endsWith(')') ? colourFunction(t, rgbOf) : null;
+  const channel = (at: number): number => Number.parseInt(plain.hex.slice(at, at + 2), 16) / 255;
+  return { rgb: [channel(1), channel(3), channel(5)], alpha: plain.alpha };
 }
 
 function hexColour(digits: string): Colour {

@@ -1,8 +1,6 @@
 import { splitOutside, withBracketsClosed, withoutComments } from './cssText.js';
 import { PROPERTIES, pathDataIn } from './properties.js';
 
-export { splitOutside } from './cssText.js';
-
 /** One declaration of a style attribute or rule. */
 export interface Declaration {
   readonly name: string;
@@ -18,7 +16,8 @@ export interface Misread {
   readonly found: string;
 }
 
-const WIDE: ReadonlySet<string> = new Set(['inherit', 'initial', 'unset', 'revert', 'revert-layer']);
+/** Keywords that every property takes (CSS Cascading and Inheritance Level 5, §7.3). */
+export const WIDE: ReadonlySet<string> = new Set(['inherit', 'initial', 'unset', 'revert', 'revert-layer']);
 /** Shorthands that hold a property of `PROPERTIES`. */
 const SHORTHANDS: ReadonlySet<string> = new Set(['marker', 'font', 'all', 'offset']);
 const LONGEST_NAME = 200;

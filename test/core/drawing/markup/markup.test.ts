@@ -66,7 +66,11 @@ describe('names and namespaces', () => {
     const drawing = readDrawing(`<svg width="10mm" height="10mm" viewBox="0 0 10 10">${LINE}</svg>`);
     expect(textsOf(drawing)).toEqual(DRAWN);
     expect(drawing.findings).toMatchObject([
-      { code: 'svg-namespace-missing', severity: 'warning', values: { count: 2 } },
+      {
+        code: 'svg-namespace-missing',
+        severity: 'warning',
+        values: { element: 'svg', isRoot: 1, count: 2 },
+      },
     ]);
   });
 
