@@ -16,12 +16,13 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'xml-bad-tag': () => 'a tag that is not well formed',
   'xml-bad-doctype': () => 'a document type declaration that is not well formed',
   'xml-bad-entity': (v) => `the entity ${quoted(v.entity)} opens an element that it does not close`,
-  'xml-bad-attribute': (v) => `the attribute ${quoted(v.attribute)} is not well formed`,
+  'xml-bad-attribute': (v) => `the attribute ${quoted(v.attribute)} ${badAttribute(v.why)}`,
   'xml-duplicate-attribute': (v) => `the attribute ${quoted(v.attribute)} stands twice in one tag`,
-  'xml-tag-mismatch': (v) => `</${v.found}> stands where </${v.expected}> was due`,
+  'xml-tag-mismatch': (v) =>
+    `</${v.found}> stands where </${v.expected}> was due, opened in line ${v.openedLine}, column ${v.openedColumn}`,
   'xml-unopened-tag': (v) => `</${v.found}> closes what was never opened`,
   'xml-cut-off': (v) =>
-    `the file is cut off: it ends inside ${v.inside}, with ${some(v.open, 'element')} still open`,
+    `the file is cut off: it ends inside ${begun(v.inside)} that begins in line ${v.startLine}, column ${v.startColumn}, with ${some(v.open, 'element')} still open`,
   'xml-two-roots': (v) => `a second root element, <${v.found}>`,
   'xml-text-outside-root': (v) => `text outside the root element: ${quoted(v.found)}`,
   'xml-unreadable': () => 'the markup could not be read',
@@ -49,8 +50,10 @@ const WORDING: Readonly<Record<string, Wording>> = {
     `the entity ${quoted(v.entity)} stands in another file, which is never fetched: left out${times(v)}`,
   'xml-not-strict': (v) =>
     `not quite XML: ${v.what}${times(v)}; read all the same, though a browser may refuse the file`,
-  'svg-namespace-missing': () =>
-    'the root does not name the SVG name space: read all the same; a browser shows nothing',
+  'svg-namespace-missing': (v) =>
+    v.isRoot
+      ? 'the root does not name the SVG name space (xmlns="http://www.w3.org/2000/svg"): read all the same; a browser shows nothing'
+      : `<${v.element}> is in no name space: read as SVG all the same; a browser does not show it${times(v)}`,
   'undeclared-prefix': (v) => `the prefix ${quoted(v.prefix)} is not declared${times(v)}`,
   'style-rule-not-read': (v) => `a style rule was not understood${times(v)}, first: ${quoted(v.rule)}`,
   'style-sheet-not-read': (v) =>
@@ -86,7 +89,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'language-assumed': (v) =>
     `a <switch> chooses by language (${quoted(v.asked)} first): English was taken${times(v)}`,
   'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
-  'shape-error': (v) => `a shape is left out: ${v.attribute}=${quoted(v.found)}${times(v)}`,
+  'shape-error': (v) =>
+    `${v.attribute}=${quoted(v.found)} may not be negative: taken as not given${times(v)}`,
 
   // Reading: not drawn, or drawn otherwise than on a screen.
   'filled-not-stroked': (v) =>
@@ -108,7 +112,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'too-many-dashes': (v) => `the dashes of ${some(v.count, 'line')} go ${pastLimit(v)}: drawn solid`,
   'fill-drawn-as-outline': (v) => `${some(v.count, 'filled shape')} drawn as their outline`,
   'paint-server-drawn-as-line': (v) =>
-    `${some(v.count, 'line')} stroked with ${v.paint}: drawn as plain lines`,
+    `${some(v.count, 'line')} stroked with a gradient or pattern, first: ${quoted(v.paint)}: drawn as plain lines, a pen for each`,
   'fill-ignored': (v) =>
     `${some(v.count, 'shape')} both filled and stroked: on paper the fill hides nothing below it`,
   'white-strokes': (v) => `${some(v.count, 'white stroke')}: kept, as one more pen`,
@@ -198,6 +202,25 @@ function times(v: Values): string {
 
 function pastLimit(v: Values): string {
   return `past the limit ${v.limit} (${v.value}); --limit ${v.limit}=N lifts it`;
+}
+
+/** What a text that is cut off was in the middle of. */
+function begun(inside: string | number | undefined): string {
+  if (inside === 'attribute') return 'an attribute of the tag';
+  return inside === 'element' ? 'an element' : `a ${inside}`;
+}
+
+function badAttribute(why: string | number | undefined): string {
+  switch (why) {
+    case 'no value':
+      return 'has no value';
+    case 'no quotes':
+      return 'has a value without quotes';
+    case 'less-than':
+      return 'holds a "<": most often its closing quote is missing';
+    default:
+      return 'has a name that XML does not allow';
+  }
 }
 
 function place(v: Values): string {
