@@ -11,6 +11,7 @@ import {
   moved,
   polyline,
   reversed,
+  rounded,
   spanOf,
 } from '../../support/chains.ts';
 
@@ -490,6 +491,81 @@ describe('dots', () => {
     ]);
     expect(audit([speck, corner], [dotAt(5, 5), corner])).toMatchObject({ ok: true });
     expect(codes(audit([speck, corner], [corner]))).toEqual(['line-missing']);
+  });
+
+  test('a stroke of 0.0003 mm written with three decimals, at an accuracy of 0.001 mm', () => {
+    const fine = { ...SVG, accuracyMm: 0.001 };
+    const speck = polyline([
+      [10, 10],
+      [10.0003, 10],
+    ]);
+    expect(audit([speck, wave], [dotAt(10, 10), wave], fine).findings).toEqual([]);
+    expect(codes(audit([speck, wave], [wave], fine))).toEqual(['line-missing']);
+    expect(codes(audit([speck, wave], [dotAt(10.002, 10), wave], fine))).toEqual([
+      'dot-added',
+      'line-missing',
+    ]);
+  });
+});
+
+describe('places where much comes together', () => {
+  const hub = (count: number): Chain[] =>
+    Array.from({ length: count }, (_, i) => {
+      const angle = (2 * Math.PI * i) / count;
+      return polyline([
+        [50, 50],
+        [50 + 40 * Math.cos(angle), 50 + 40 * Math.sin(angle)],
+      ]);
+    });
+
+  test.each([
+    ['three thousand spokes at one hub', 3000, 1],
+    ['three hundred spokes, each in two', 300, 2],
+  ])('%s, rounded; one of them lost', (_, count, parts) => {
+    const spokes = hub(count);
+    for (const [options, step] of [
+      [SVG, 1e-4],
+      [COARSE, 1e-3],
+    ] as const) {
+      const drawn = spokes.flatMap((spoke) => {
+        const { pen, segments } = rounded(reversed(spoke), step);
+        if (parts === 1) return [{ pen, segments }];
+        return [
+          { pen, segments: [spanOf(segments[0], 0, 0.7)] },
+          { pen, segments: [spanOf(segments[0], 0.7, 1)] },
+        ];
+      });
+      expect(audit(spokes, drawn, options).findings).toEqual([]);
+      expect(codes(audit(spokes, drawn.slice(1), options))).toEqual(['line-missing']);
+    }
+  });
+
+  test('an arc closed by a bridge along itself, begun at any place', () => {
+    const arc = ellipseArc(50, 50, 0.2, 0.2, 0.3, 0.24);
+    const [x0, y0, x1, y1] = arc.segments[0].data;
+    const bridge = { kind: 0, data: [x1, y1, x0, y0] };
+    for (const t of [0.2, 0.5, 0.88]) {
+      const [head, tail] = [spanOf(arc.segments[0], 0, t), spanOf(arc.segments[0], t, 1)];
+      const drawn = { pen: 0, segments: [tail, bridge, head] };
+      expect(audit([arc], [drawn]).findings, `${t}`).toEqual([]);
+    }
+  });
+
+  test('a line on the next line, near a stroke that ends there, is no bridge', () => {
+    const square = polyline([A, B, C, [10, 25], A]);
+    const overshot = polyline([A, B, C, [10, 25], A, [10.04, 10]]);
+    const result = audit([square, polyline([A, [0, 0]])], [overshot, polyline([A, [0, 0]])]);
+    expect(codes(result)).toEqual(['line-doubled']);
+    expect(Math.abs(result.twiceMm - 0.04)).toBeLessThan(2 * TAU);
+  });
+
+  test('the tip of a line that meets others at half a right angle', () => {
+    const [left, slant] = [polyline([A, [10, 30]]), polyline([A, [24, 24]])];
+    const short = polyline([
+      [10.011, 10.011],
+      [24, 24],
+    ]);
+    expect(codes(audit([left, slant], [left, short]))).toEqual(['line-missing']);
   });
 });
 
