@@ -11,6 +11,7 @@ import type { Program } from './program/program.js';
 import { type Comparison, pairMoved } from './report/comparison.js';
 import { REPEAT_TOLERANCE_MM } from './settings.js';
 
+/** What two files are held against each other by. */
 export interface CompareSettings extends PenWishes {
   /** How far lines may deviate and still be the same, mm. */
   readonly accuracyMm: number;

@@ -37,6 +37,7 @@ export interface Ordered {
   readonly crossings: Crossings | null;
 }
 
+/** What junctions where lines cross came to, over all pens. */
 export interface Crossings {
   readonly count: number;
   readonly without: Measure;
@@ -106,6 +107,7 @@ function orderOnce(drawing: Drawing, settings: Settings, profile: MachineProfile
   return { drawing, settings, profile, plan, networks, tours, before, after, crossings: null };
 }
 
+/** A text as it is to be written, and what the audit of its reading found. */
 export interface Written {
   readonly kind: 'svg' | 'gcode';
   readonly text: string;

@@ -56,6 +56,7 @@ export interface Hooks {
   readonly shouldStop?: () => boolean;
 }
 
+/** Where a long run stands. */
 export interface Step {
   readonly doing: 'network' | 'pairing' | 'improve' | 'audit';
   readonly share: number;

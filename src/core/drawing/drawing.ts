@@ -49,6 +49,7 @@ export interface Strokes extends Chains {
 
 export const NO_LAYER = 0xffffffff;
 
+/** A group at the top of the drawing; `label` is what people called it. */
 export interface Layer {
   readonly id: string | null;
   readonly label: string | null;

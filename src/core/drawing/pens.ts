@@ -3,6 +3,7 @@ import { isNamed } from './penName.js';
 
 export type PenRule = 'colour' | 'layer' | 'one';
 
+/** One tool: what it is called and how its lines look in the drawing. */
 export interface Pen {
   readonly name: string;
   /** What it is called in the drawing, before it was given another name. */

@@ -14,6 +14,7 @@ import { childText } from './structure/references.js';
 import { walk } from './structure/walk.js';
 import { orTooLarge } from './tooLarge.js';
 
+/** How a drawing is to be read; whatever is left out stays as `DEFAULT_READING` and `DEFAULT_LIMITS` have it. */
 export interface ReadOptions extends Partial<ReadingRules> {
   /** What the drawing is called in reports; a file name, most often. */
   readonly name?: string;

@@ -28,6 +28,7 @@ export interface Context extends LengthContext {
   readonly copies: CopyOf | null;
 }
 
+/** A copy that `use` makes, and the copy that this one is inside of. */
 export interface CopyOf {
   readonly target: SvgElement;
   /** The `use` that makes the copy. */

@@ -1,6 +1,7 @@
 import { boxOfSegments } from '../geometry/box.js';
 import type { Program } from '../program/program.js';
 
+/** A box in page mm. */
 export interface Bounds {
   readonly minX: number;
   readonly minY: number;

@@ -42,6 +42,7 @@ export interface Network {
 /** Where lines join: at their ends, also where an end touches another line, also where lines cross. */
 export type JunctionRule = 'ends' | 'touching' | 'crossing';
 
+/** How lines hang together. */
 export interface NetworkOptions {
   /** Ends at most this far apart meet, mm. */
   readonly snapMm: number;

@@ -21,6 +21,7 @@ export function isNearOwnEnd(drawing: Drawing, stroke: number, u: number, reachM
   );
 }
 
+/** Between two points, in a straight line. */
 export function distance(ax: number, ay: number, bx: number, by: number): number {
   return Math.sqrt((bx - ax) * (bx - ax) + (by - ay) * (by - ay));
 }

@@ -74,6 +74,7 @@ export interface Report {
   }[];
 }
 
+/** What one order of the lines comes to. */
 export interface Totals {
   readonly runs: number;
   readonly travelMm: number;

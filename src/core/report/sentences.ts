@@ -175,6 +175,7 @@ export function sentence(finding: Finding): string {
   return `${finding.code} ${JSON.stringify(finding.values)}`;
 }
 
+/** Whether a code has its sentence. */
 export function hasSentence(code: string): boolean {
   return Object.hasOwn(WORDING, code);
 }

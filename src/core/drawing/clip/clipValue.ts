@@ -12,6 +12,7 @@ export type ClipValue =
   | { readonly kind: 'shape'; readonly shape: BasicShape | null; readonly box: ReferenceBox }
   | { readonly kind: 'unknown' };
 
+/** A basic shape of CSS: its name in lower case, and what stands in its brackets. */
 export interface BasicShape {
   readonly name: string;
   readonly text: string;

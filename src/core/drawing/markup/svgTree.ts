@@ -21,6 +21,7 @@ export interface SvgElement {
   readonly number: number;
 }
 
+/** The document: elements as a tree, attributes as columns, places looked up when asked for. */
 export interface SvgTree {
   readonly root: SvgElement;
   /** The first element that has each id; made when first asked for. */

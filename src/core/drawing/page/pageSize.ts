@@ -6,6 +6,7 @@ import type { ViewBox } from './viewBox.js';
 const DEFAULT_WIDTH = 300;
 const DEFAULT_HEIGHT = 150;
 
+/** How large the page is, and how that is known. */
 export interface PageSize {
   readonly widthMm: number;
   readonly heightMm: number;

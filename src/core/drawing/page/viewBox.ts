@@ -1,6 +1,7 @@
 import type { Affine } from '../../geometry/affine.js';
 import { TextCursor } from '../path/textCursor.js';
 
+/** A rectangle in user units; width and height are not negative. */
 export interface ViewBox {
   readonly x: number;
   readonly y: number;

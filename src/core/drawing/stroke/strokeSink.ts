@@ -28,6 +28,7 @@ export interface StrokeProperties {
   readonly dash: Dash | null;
 }
 
+/** How a line is dashed. */
 export interface Dash {
   /** In the element's user units, or in mm where the stroke does not scale. */
   readonly pattern: DashPattern;

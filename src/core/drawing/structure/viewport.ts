@@ -91,6 +91,7 @@ export function viewBoxOf(session: Session, element: SvgElement): ViewBox | null
   return viewBox;
 }
 
+/** As `preserveAspectRatio` says, or by default; one that is wrong is reported. */
 export function aspectOf(session: Session, element: SvgElement): AspectRatio {
   const text = session.tree.attributeOf(element, 'preserveAspectRatio');
   const aspect = text === null ? XMIDYMID_MEET : readAspectRatio(text);

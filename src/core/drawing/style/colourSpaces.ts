@@ -121,19 +121,23 @@ export function labToSrgb([light, a, b]: Triple): Triple {
   return xyzToSrgb(apply(D50_TO_D65, [xyz[0] * wx, xyz[1] * wy, xyz[2] * wz]));
 }
 
+/** Oklab, light from 0 to 1, as sRGB that may lie outside 0 to 1. */
 export function oklabToSrgb(lab: Triple): Triple {
   const lms = each(apply(OKLAB_TO_LMS, lab), (c) => c * c * c);
   return xyzToSrgb(apply(LMS_TO_XYZ, lms));
 }
 
+/** Linear light to the values that are written. */
 export function linearSrgbToSrgb(rgb: Triple): Triple {
   return each(rgb, linearToSrgb);
 }
 
+/** The values that are written to linear light. */
 export function srgbToLinearSrgb(rgb: Triple): Triple {
   return each(rgb, srgbToLinear);
 }
 
+/** sRGB as Oklab, light from 0 to 1. */
 export function srgbToOklab(rgb: Triple): Triple {
   const lms = apply(XYZ_TO_LMS, apply(SRGB_TO_XYZ, each(rgb, srgbToLinear)));
   return apply(LMS_TO_OKLAB, each(lms, cubeRoot));

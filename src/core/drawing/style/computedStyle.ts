@@ -51,6 +51,7 @@ export const INITIAL_STYLE: Style = {
   fontSize: 16,
 };
 
+/** What a style is computed in: lengths, what references lead to, and where errors go. */
 export interface StyleContext extends LengthContext {
   isPaintServer(id: string): boolean;
   isMarker(id: string): boolean;

@@ -91,6 +91,7 @@ export function wordsOf(text: string): string[] {
   return words;
 }
 
+/** White space of CSS (CSS Syntax Module Level 3, §4.2). */
 export function isSpace(c: string | undefined): boolean {
   return c === ' ' || c === '\n' || c === '\t' || c === '\r' || c === '\f';
 }

@@ -12,6 +12,7 @@ export type Test =
   | { readonly kind: 'lang'; readonly ranges: readonly string[] }
   | { readonly kind: 'anchor' | 'root' | 'empty' | 'link' | 'always' | 'never' };
 
+/** `[name operator value]` (Selectors Level 4, §6). */
 export interface AttributeTest {
   readonly kind: 'attribute';
   /** As in the document, prefix included; without one where `anyPrefix`. */
@@ -48,6 +49,7 @@ export const ID_WEIGHT = 1_000_000;
 export const CLASS_WEIGHT = 1000;
 export const TYPE_WEIGHT = 1;
 
+/** That of `:is()` and nested rules: the most specific of a list; 0 where it is empty. */
 export function highestSpecificity(list: readonly Selector[]): number {
   let highest = 0;
   for (const { specificity } of list) highest = Math.max(highest, specificity);

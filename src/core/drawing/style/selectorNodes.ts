@@ -24,26 +24,31 @@ export const NTH_SHORT: ReadonlyMap<string, readonly NthTest[]> = new Map<string
   ],
 ]);
 
+/** A node's children; none where it cannot have any. */
 export function childrenOf(node: SelectorNode): SelectorNode[] {
   return node.children?.toArray() ?? [];
 }
 
+/** The selectors in a functional pseudo-class, one or a list. */
 export function selectorsIn(argument: SelectorNode | undefined): SelectorNode[] {
   if (!argument) return [];
   return argument.type === 'SelectorList' ? childrenOf(argument) : [argument];
 }
 
+/** Throws NotRead for combinators that are not read here. */
 export function combinatorOf(node: SelectorNode): Combinator {
   const name = String(node.name);
   if (name === ' ' || name === '>' || name === '+' || name === '~') return name;
   throw new NotRead();
 }
 
+/** The string or name that a node stands for, escapes read. */
 export function textIn(node: SelectorNode | string | null): string {
   if (node === null || typeof node === 'string') return node ?? '';
   return node.type === 'String' ? String(node.value) : unescaped(String(node.name));
 }
 
+/** Whether `&` stands anywhere in a selector. */
 export function mentionsNesting(node: SelectorNode): boolean {
   return (
     node.type === 'NestingSelector' ||

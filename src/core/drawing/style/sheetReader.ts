@@ -12,6 +12,7 @@ export interface Layer {
   rank: number;
 }
 
+/** A rule of one selector: lists are parted. `order` counts rules through all sheets. */
 export interface Rule {
   readonly selector: Selector;
   readonly declarations: readonly Declaration[];

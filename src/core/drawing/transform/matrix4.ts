@@ -4,6 +4,7 @@ import { sinCosDegrees } from '../../geometry/trig.js';
 /** Sixteen numbers, column by column, as in matrix3d(). */
 export type Matrix4 = readonly number[];
 
+/** An affine map of the plane, which leaves z as it is. */
 export function fromAffine([a, b, c, d, e, f]: Affine): Matrix4 {
   return [a, b, 0, 0, c, d, 0, 0, 0, 0, 1, 0, e, f, 0, 1];
 }

@@ -8,6 +8,7 @@ export function turned(degrees: number): Affine {
   return [sc[1], sc[0], -sc[0] + 0, sc[1], 0, 0];
 }
 
+/** The tangent of an angle; infinite or very large at a right angle. */
 export function tangent(degrees: number): number {
   const sc = new Float64Array(2);
   sinCosDegrees(degrees, sc);
