@@ -1,35 +1,18 @@
 import { describe, expect, test } from 'vitest';
-import { readDrawing } from '../../../src/core/drawing/readDrawing.ts';
 import { pointAt } from '../../../src/core/geometry/evaluate.ts';
 import { DEFAULT_SETTINGS, PEN_ON_Z, reportOf, tour, writeAudited } from '../../../src/core/index.ts';
-import { buildNetwork } from '../../../src/core/network/buildNetwork.ts';
 import type { Network } from '../../../src/core/network/network.ts';
+import {
+  degreesOf as degrees,
+  networkOf as networkOfDrawing,
+  drawingOfPaths as read,
+} from '../../support/networkOf.ts';
 import { plainRandom } from '../../support/programs.ts';
 
-const OPTIONS = {
-  snapMm: 1e-7,
-  accuracyMm: 0.02,
-  junctions: 'crossing',
-  repeats: 'keep',
-  repeatToleranceMm: 0.01,
-} as const;
+const OPTIONS = { snapMm: 1e-7, junctions: 'crossing', repeats: 'keep' } as const;
 
-function read(paths: readonly string[]) {
-  const body = paths.map((d) => `<path d="${d}"/>`).join('');
-  const text = `<svg xmlns="http://www.w3.org/2000/svg" width="100mm" height="100mm" viewBox="0 0 100 100" fill="none" stroke="black">${body}</svg>`;
-  return readDrawing(text, { pageEdge: 'ignore' });
-}
-
-function networkOf(paths: readonly string[], options: Partial<typeof OPTIONS> = {}): Network {
-  const drawing = read(paths);
-  const all = Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i);
-  return buildNetwork(drawing, all, { ...OPTIONS, ...options });
-}
-
-function degrees({ vertexCount, halfEdgeVertex }: Network): number[] {
-  const degree = new Array<number>(vertexCount).fill(0);
-  for (const v of halfEdgeVertex) degree[v]++;
-  return degree.sort((a, b) => a - b);
+function networkOf(paths: readonly string[], snapMm: number = OPTIONS.snapMm): Network {
+  return networkOfDrawing(read(paths), { ...OPTIONS, snapMm });
 }
 
 /** Faces of a plane drawing: cycles of "twin, then the next half-edge round its vertex". */
@@ -110,8 +93,7 @@ describe('where lines cross', () => {
         .join(' ')
         .replace(/^(\S+ \S+) /, '$1C')}`;
     const drawing = read(Array.from({ length: 24 }, curve));
-    const all = Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i);
-    const network = buildNetwork(drawing, all, { ...OPTIONS, snapMm: 1e-6 });
+    const network = networkOfDrawing(drawing, { ...OPTIONS, snapMm: 1e-6 });
     const { segments } = drawing.strokes;
     const at = new Float64Array(2);
     let worst = 0;
@@ -139,7 +121,7 @@ describe('where lines cross', () => {
   test('through a joint, and at an end: one vertex', () => {
     expect(degrees(networkOf(['M10 10L50 50L90 30', 'M50 10V90']))).toEqual([1, 1, 1, 1, 4]);
     expect(degrees(networkOf(['M10 10L50 50L90 30', 'M10 90L50 50L90 90']))).toEqual([1, 1, 1, 1, 4]);
-    expect(degrees(networkOf(['M10 50H90', 'M50 50V90'], { snapMm: 1e-7 }))).toEqual([1, 1, 1, 3]);
+    expect(degrees(networkOf(['M10 50H90', 'M50 50V90']))).toEqual([1, 1, 1, 3]);
   });
 
   test('circles that touch meet in one vertex', () => {

@@ -1,25 +1,9 @@
 import { describe, expect, test } from 'vitest';
-import { readDrawing } from '../../../src/core/drawing/readDrawing.ts';
-import { buildNetwork } from '../../../src/core/network/buildNetwork.ts';
+import { drawingOfPaths, networkOf as networkOfDrawing } from '../../support/networkOf.ts';
 import { plainRandom } from '../../support/programs.ts';
 
-const OPTIONS = {
-  snapMm: 0.05,
-  accuracyMm: 0.02,
-  junctions: 'touching',
-  repeats: 'once',
-  repeatToleranceMm: 0.01,
-} as const;
-
 function networkOf(...paths: string[]) {
-  const body = paths.map((d) => `<path d="${d}"/>`).join('');
-  const text = `<svg xmlns="http://www.w3.org/2000/svg" width="200mm" height="200mm" viewBox="0 0 200 200" fill="none" stroke="black">${body}</svg>`;
-  const drawing = readDrawing(text, { pageEdge: 'ignore' });
-  return buildNetwork(
-    drawing,
-    Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i),
-    OPTIONS,
-  );
+  return networkOfDrawing(drawingOfPaths(paths));
 }
 
 function repeated(...paths: string[]): number {

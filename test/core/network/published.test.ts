@@ -1,24 +1,10 @@
 import { expect, test } from 'vitest';
-import { readDrawing } from '../../../src/core/drawing/readDrawing.ts';
-import { buildNetwork } from '../../../src/core/network/buildNetwork.ts';
 import { fewestRuns } from '../../../src/core/network/fewestRuns.ts';
+import { degreesOf, drawingOfPaths, networkOf as networkOfDrawing } from '../../support/networkOf.ts';
 
 function networkOf(...paths: string[]) {
-  const body = paths.map((d) => `<path d="${d}"/>`).join('');
-  const text = `<svg xmlns="http://www.w3.org/2000/svg" width="100mm" height="100mm" viewBox="0 0 100 100" fill="none" stroke="black">${body}</svg>`;
-  const drawing = readDrawing(text);
-  const all = Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i);
-  const options = {
-    snapMm: 0.05,
-    accuracyMm: 0.02,
-    junctions: 'touching',
-    repeats: 'once',
-    repeatToleranceMm: 0.01,
-  } as const;
-  const network = buildNetwork(drawing, all, options);
-  const degree = new Array<number>(network.vertexCount).fill(0);
-  for (const v of network.halfEdgeVertex) degree[v]++;
-  return { network, degrees: degree.sort((a, b) => b - a) };
+  const network = networkOfDrawing(drawingOfPaths(paths));
+  return { network, degrees: degreesOf(network).reverse() };
 }
 
 test('the bridges of Koenigsberg: degrees 5, 3, 3, 3 (Euler 1736, E53), so two runs', () => {
