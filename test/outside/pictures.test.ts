@@ -37,5 +37,6 @@ describe.runIf(CHROMIUM !== null)('drawn as a browser paints it', () => {
       `${rows.join('\n')}\n${rows.length} pictures, missing ${most('missing')}, extra ${most('extra')}`,
     );
     expect(rows.filter((row) => row.includes('WRONG'))).toEqual([]);
+    expect(found.some(({ inkPx }) => inkPx > 0)).toBe(true);
   });
 });
