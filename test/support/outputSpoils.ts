@@ -121,7 +121,8 @@ const shift = onSegment(
   (tau) => longerThan(6 * tau),
   (sheet, pick) => {
     const angle = sheet.between(0, 6.28);
-    const by = sheet.tau * sheet.between(2.2, 6);
+    // Of a line that stands twice a gap up to the repeat tolerance passes for the fringe of a repeat.
+    const by = sheet.tau * (sheet.standing(pick) > 1 ? sheet.between(5, 8) : sheet.between(2.2, 6));
     const away = moved(
       { pen: 0, segments: [pick.segment] },
       by * Math.cos(angle),
