@@ -2,6 +2,7 @@ import { basename } from 'node:path';
 import {
   choosePens,
   type Drawing,
+  findingLines,
   readDrawing,
   type Settings,
   sentence,
@@ -37,21 +38,34 @@ export function drawingFrom(text: string, path: string, reading: Reading): Drawi
   return drawing;
 }
 
-/** What most likely explains that nothing is stroked, the likeliest first. */
+/** What may explain that nothing is drawn, the likeliest first. */
 const WHY_NOTHING = [
   'path-error',
   'points-error',
   'coordinate-overflow',
   'filled-not-stroked',
+  'page-edge-cut',
+  'clipped',
   'text-not-drawn',
   'image-not-drawn',
+  'foreign-object-not-drawn',
   'hidden',
   'invisible',
+  'condition-not-met',
+  'switch-without-match',
+  'flattened-to-nothing',
+  'shape-error',
+  'length-error',
+  'colour-not-read',
   'viewbox-empty',
   'style-sheet-not-read',
+  'style-rule-not-read',
   'butt-dots-not-drawn',
+  'nothing-to-draw',
   'use-missing',
   'use-external',
+  'use-loop',
+  'unknown-element',
 ];
 
 /** The same, where there must be something to draw. */
@@ -68,11 +82,10 @@ export function strokedDrawingFrom(
     const why = chosen.findings.slice(drawing.findings.length).map((finding) => `\n  ${sentence(finding)}`);
     throw new Ending(EXIT.notRead, `${shownName(path)}: no pen is left to draw${why.join('')}`);
   }
-  const why = WHY_NOTHING.map((code) => drawing.findings.find((finding) => finding.code === code)).find(
-    Boolean,
-  );
+  const why = WHY_NOTHING.flatMap((code) => drawing.findings.filter((finding) => finding.code === code));
   const nothing = sentence({ code: 'nothing-stroked', severity: 'error', place: null, values: {} });
-  throw new Ending(EXIT.notRead, `${shownName(path)}: ${nothing}${why ? `\n  ${sentence(why)}` : ''}`);
+  const lines = findingLines(why.map((finding) => ({ ...finding, message: sentence(finding) })));
+  throw new Ending(EXIT.notRead, [`${shownName(path)}: ${nothing}`, ...lines].join('\n  '));
 }
 
 function shownName(path: string): string {

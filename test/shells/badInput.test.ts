@@ -4,10 +4,10 @@ import { join } from 'node:path';
 import { describe, expect, test } from 'vitest';
 import { BIN, type CliResult, fewlift, inFolder, svgOf } from '../support/runCli.ts';
 
-/** One or two lines of message, no stack trace, nothing on standard output. */
+/** A line of message and one for each reason, no stack trace, nothing on standard output. */
 function expectRefusal(result: CliResult, code: number, message: RegExp): void {
   expect(result.err).toMatch(message);
-  expect(result.err.trimEnd().split('\n').length).toBeLessThanOrEqual(2);
+  expect(result.err.trimEnd().split('\n').length).toBeLessThanOrEqual(4);
   expect(result.err).not.toMatch(/^\s+at /m);
   expect(result.out).toBe('');
   expect(result.code).toBe(code);
@@ -34,6 +34,11 @@ const FILES: [string, string | Buffer, RegExp][] = [
     'filled.svg',
     svgOf('<rect width="9" height="9" fill="red" stroke="none"/>'),
     /nothing.*stroke[\s\S]*filled/,
+  ],
+  [
+    'reasons.svg',
+    svgOf('<text>Hi</text>\n<rect width="9" height="9" fill="red" stroke="none"/>\n<path d="M500 0v9"/>'),
+    /nothing.*stroke[\s\S]*filled.*line 2, column 1, <rect>[\s\S]*page.*line 3, column 1, <path>[\s\S]*text.*line 1/,
   ],
   ['nothing.svg', svgOf(''), /nothing.*stroke/],
   ['nan.svg', svgOf('<path d="MNaN 0L10 10"/>'), /nothing.*stroke[\s\S]*path data/],

@@ -30,7 +30,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'entity-limit': (v) => `the entity ${quoted(v.entity)} expands ${pastLimit(v)}: refused`,
   'entity-loop': (v) => `the entity ${quoted(v.entity)} contains itself: refused`,
   'too-large': () => 'the drawing is larger than can be held in memory',
-  'nothing-stroked': () => 'nothing in the drawing has a stroke: there is nothing to draw',
+  'nothing-stroked': () => 'nothing in the drawing has a stroke that can be drawn',
 
   'crossings-paid': (v) =>
     `joining lines at ${some(v.count, 'crossing')} saved ${some(v.runs, 'run')} and ${number(v.travelMm)} mm of travel`,
