@@ -3,10 +3,11 @@ import { bothOf } from '../../geometry/region.js';
 import { clipWithin, pageRegion } from '../clip/clipping.js';
 import type { Bounds } from '../clip/elementBounds.js';
 import { NO_LAYER } from '../drawing.js';
-import type { Context, Session } from '../session.js';
+import { type Context, type Session, shown } from '../session.js';
 import { aspectOf, contextInside, viewBoxOf } from '../structure/viewport.js';
 import type { Specified } from '../style/cascade.js';
 import { INITIAL_STYLE, readOpacity, type Style } from '../style/computedStyle.js';
+import { readLength } from '../style/length.js';
 import { styleOf } from '../style/styleReading.js';
 import { rootTransformOf } from '../transform/transformOf.js';
 import { type PageSize, pageSize } from './pageSize.js';
@@ -30,6 +31,8 @@ export function rootContext(session: Session): Root {
   const [width, height] = [rootSize(session, specified, 'width'), rootSize(session, specified, 'height')];
   const fontSize = rootFontSize(session, specified, units, `${width} ${height}`);
   const page = pageSize(width, height, viewBox, units, fontSize);
+  if (!page.widthGiven) tellWrongSize(session, 'width', width);
+  if (!page.heightGiven) tellWrongSize(session, 'height', height);
   if (page.physical && !viewBox && pxPerInch === null) {
     session.report('user-unit-assumed', root, { pxPerInch: units });
   }
@@ -61,6 +64,14 @@ function rootSize(session: Session, specified: Specified, name: 'width' | 'heigh
   const text = specified.get(name);
   if (text !== undefined && text.trim().toLowerCase() !== 'auto') return text;
   return session.tree.attributeOf(session.tree.root, name);
+}
+
+/** A size that is there and is none, as `100,5mm`: what is taken for it is a guess. */
+function tellWrongSize(session: Session, attribute: string, text: string | null): void {
+  if (text === null || text.trim() === '' || text.trim().toLowerCase() === 'auto') return;
+  const length = readLength(text);
+  if (length && length.value >= 0) return;
+  session.report('length-error', session.tree.root, { attribute, found: shown(text) });
 }
 
 /** Asked only where the size is in units of the font: styles need the page's size, and it theirs. */

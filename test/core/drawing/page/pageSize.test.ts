@@ -100,6 +100,21 @@ describe('a page that is not said is guessed, and that is said', () => {
   });
 });
 
+test.each([
+  ['width="100,5mm" height="50mm" viewBox="0 0 96 48"', { attribute: 'width', found: '100,5mm' }],
+  ['width="50mm" height="-3" viewBox="0 0 96 48"', { attribute: 'height', found: '-3' }],
+  ['width="4 furlongs" viewBox="0 0 96 48"', { attribute: 'width', found: '4 furlongs' }],
+])('a size that is none is told: %s', (attributes, values) => {
+  expect(findingOf(page(attributes), 'length-error').values).toEqual({ ...values, count: 1 });
+});
+
+test.each(['width="auto" height="100%"', 'width="0" height="5mm"', 'width="" height="2em"'])(
+  'a size that says nothing is no error: %s',
+  (attributes) => {
+    expect(codesOf(page(`${attributes} viewBox="0 0 96 48"`))).not.toContain('length-error');
+  },
+);
+
 describe('pixels per inch', () => {
   test('an older editor’s 90 changes px, not the page in mm', () => {
     expect(sizeOf('width="90" height="45"', 90)).toEqual([25.4, 12.7]);
