@@ -1,5 +1,6 @@
 import { evaluate } from './calc.js';
 import { readColour } from './colour.js';
+import { dashWords } from './cssText.js';
 import { type LengthContext, readLength, toUserUnits } from './length.js';
 import { BLACK, NONE, type Paint, readPaint } from './paint.js';
 
@@ -273,7 +274,7 @@ function readDashes(value: string, context: LengthContext, fontSize: number): nu
   if (value.toLowerCase() === 'none') return null;
   const lengths: number[] = [];
   let sum = 0;
-  for (const word of value.split(/\s*,\s*|\s+/)) {
+  for (const word of dashWords(value)) {
     const length = readLength(word);
     if (!length || length.value < 0) return undefined;
     sum += lengths[lengths.push(Math.max(0, toUserUnits(length, 'other', context, fontSize))) - 1];

@@ -106,3 +106,9 @@ export function unescaped(text: string): string {
     return isCharacter ? String.fromCodePoint(code) : '\ufffd';
   });
 }
+
+/** The lengths of a list parted by commas or spaces, sums in brackets whole; '' where one is missing. */
+export function dashWords(value: string): string[] {
+  if (!value.includes('(')) return value.split(/\s*,\s*|\s+/);
+  return splitOutside(value, ',').flatMap((part) => (part.trim() === '' ? [''] : wordsOf(part)));
+}

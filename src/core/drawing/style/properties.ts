@@ -2,7 +2,7 @@ import { PathReader } from '../path/pathReader.js';
 import { isTransform } from '../transform/cssTransform.js';
 import { readTransformOrigin } from '../transform/transformOrigin.js';
 import { readColour } from './colour.js';
-import { unescaped, wordsOf } from './cssText.js';
+import { dashWords, unescaped, wordsOf } from './cssText.js';
 import { readLength } from './length.js';
 import { readPaint } from './paint.js';
 
@@ -42,7 +42,7 @@ const isPaint: Check = (value) => readPaint(value, () => true) !== null;
 const isColour: Check = (value) => value.toLowerCase() === 'currentcolor' || readColour(value) !== null;
 const dash = lengths({ numbers: true });
 const isDashes: Check = (value) =>
-  value.toLowerCase() === 'none' || value.split(/\s*,\s*|\s+/).every((word) => dash(word, false));
+  value.toLowerCase() === 'none' || dashWords(value).every((word) => dash(word, false));
 const isReference: Check = (value) => /^(?:none|url\(.*\))$/is.test(value);
 const anything: Check = (value) => value !== '';
 const FONT_SIZES = keywords(

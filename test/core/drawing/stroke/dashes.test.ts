@@ -33,6 +33,26 @@ describe('dashed lines', () => {
     expect(lengths(read('<path d="M0 5H20" stroke-dasharray="4 1 2"/>'))).toEqual([4, 2, 1, 4, 1]);
   });
 
+  // CSS Values and Units Module Level 4, §10: calc() stands wherever a length may.
+  test.each([
+    ['3px calc(1px + 1px)', [3, 3]],
+    ['calc( 1px*3 ), calc(4px / 2)', [3, 3]],
+    ['max(3px, 1px),2', [3, 3]],
+  ])('may be sums: %s', (array, expected) => {
+    const drawing = read(`<path d="M0 5H10" style="stroke-dasharray:${array}"/>`);
+    expect(lengths(drawing)).toEqual(expected);
+    expect(drawing.findings).toEqual([]);
+  });
+
+  test.each(['3px,,2px', 'calc(3px),', ', calc(3px)', 'calc(3px) calc(2)px'])(
+    'are drawn solid where the list is wrong, and that is said: %s',
+    (array) => {
+      const drawing = read(`<path d="M0 5H10" style="stroke-dasharray:${array}"/>`);
+      expect(lengths(drawing)).toEqual([10]);
+      expect(drawing.findings.map(({ code }) => code)).toEqual(['style-value-not-read']);
+    },
+  );
+
   test('follow percentages, em and the offset', () => {
     // A percentage is of the viewport's diagonal over √2: sqrt((100² + 50²) / 2) = 79.0569 (SVG 2, "Units").
     expect(lengths(read('<path d="M0 5H10" stroke-dasharray="10%"/>'))).toEqual([7.905694]);
