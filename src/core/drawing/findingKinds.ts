@@ -35,7 +35,7 @@ export const READING_FINDINGS = {
   'style-rule-not-read': 'warning', // rule
   'style-sheet-not-read': 'warning', // type
   'style-value-not-read': 'warning', // property, found
-  'style-limit': 'warning', // limit: its name; value; no rule was applied after it
+  'style-limit': 'warning', // limit: its name; value; no rule was applied, or sheet read, after it
   'path-error': 'warning', // offset: characters from the start of the data; found
   'points-error': 'warning', // offset, found
   'points-odd': 'warning',

@@ -29,6 +29,8 @@ export interface ReadingLimits {
   readonly copiedCharacters: number;
   /** Comparisons of style rules with elements, beside fifty for each element. */
   readonly styleComparisons: number;
+  /** Characters of style sheets; those that go past it are left aside whole. */
+  readonly styleCharacters: number;
 }
 
 /** Far above what drawings have, and within two gigabytes of memory. */
@@ -47,6 +49,7 @@ export const DEFAULT_LIMITS: ReadingLimits = {
   copiedSegments: 5_000_000,
   copiedCharacters: 100_000_000,
   styleComparisons: 20_000_000,
+  styleCharacters: 8_000_000,
 };
 
 /** The name of a limit, as findings and `--limit` have it. */

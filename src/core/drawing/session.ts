@@ -67,7 +67,7 @@ export class Session {
     readonly limits: ReadingLimits = DEFAULT_LIMITS,
   ) {
     this.sink = new StrokeSink(limits);
-    this.cascade = new Cascade(tree, log, limits.styleComparisons);
+    this.cascade = new Cascade(tree, log, limits);
     this.placeNumbers = new Uint32Array(tree.elementCount);
   }
 

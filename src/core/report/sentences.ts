@@ -33,7 +33,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'nothing-stroked': () => 'nothing in the drawing has a stroke that can be drawn',
 
   'crossings-paid': (v) =>
-    `joining lines at ${some(v.count, 'crossing')} saved ${some(v.runs, 'run')} and ${number(v.travelMm)} mm of travel`,
+    `joining lines at ${some(v.count, 'crossing')}: ${fewer(Number(v.runs), 'run')}, travel ${fewer(Number(v.travelMm), 'mm')}`,
   'crossings-not-worth': (v) =>
     Number(v.count) > 0
       ? `joining lines at ${some(v.count, 'crossing')} saved nothing: the order without is kept`
@@ -85,7 +85,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'style-value-not-read': (v) =>
     `style not understood, and left aside: ${v.property}: ${quoted(v.found)}${times(v)}`,
   'motion-path-not-applied': (v) => `a path of motion is not applied: ${quoted(v.motion)}${times(v)}`,
-  'style-limit': (v) => `the matching of style rules went ${pastLimit(v)}: the rest was left aside`,
+  'style-limit': (v) => `style sheets went ${pastLimit(v)}: the rest of their rules was left aside`,
   'language-assumed': (v) =>
     `a <switch> chooses by language (${quoted(v.asked)} first): English was taken${times(v)}`,
   'switch-without-match': (v) => `a <switch> has no child that can be drawn${times(v)}`,
@@ -230,4 +230,11 @@ function place(v: Values): string {
 
 function penOf(v: Values): string {
   return v.penName === undefined ? `${Number(v.pen ?? 0) + 1}` : String(v.penName);
+}
+
+/** How much less of something there is, or more. */
+function fewer(amount: number, unit: 'run' | 'mm'): string {
+  const size = Math.abs(amount);
+  const what = unit === 'mm' ? `${number(size)} mm` : some(size, 'run');
+  return `${what} ${amount < 0 ? 'more' : unit === 'mm' ? 'less' : 'fewer'}`;
 }

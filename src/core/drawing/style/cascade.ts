@@ -1,6 +1,6 @@
 import type { FindingLog } from '../findingLog.js';
 import type { SvgElement, SvgTree } from '../markup/svgTree.js';
-import { DEFAULT_LIMITS } from '../readingLimits.js';
+import { DEFAULT_LIMITS, type ReadingLimits } from '../readingLimits.js';
 import { type CustomValues, customValues, substituted } from './customProperties.js';
 import { checkedValue, type Declaration, type Misread, readDeclarations, WIDE } from './declarations.js';
 import { PROPERTIES } from './properties.js';
@@ -10,6 +10,8 @@ import { type Specified, SpecifiedValues } from './specifiedValues.js';
 import type { StyleSheet } from './styleSheet.js';
 
 export type { Specified } from './specifiedValues.js';
+
+type StyleLimits = Pick<ReadingLimits, 'styleComparisons' | 'styleCharacters'>;
 
 /** Distinct style attributes remembered; drawings repeat a few of them thousands of times. */
 const REMEMBERED = 4096;
@@ -45,10 +47,10 @@ export class Cascade {
   constructor(
     private readonly tree: SvgTree,
     private readonly log: FindingLog,
-    private readonly styleComparisons: number = DEFAULT_LIMITS.styleComparisons,
+    private readonly limits: StyleLimits = DEFAULT_LIMITS,
   ) {
-    this.sheet = sheetsOf(tree, log);
-    this.matcher = this.sheet ? new SelectorMatcher(tree, styleComparisons) : null;
+    this.sheet = sheetsOf(tree, log, limits.styleCharacters);
+    this.matcher = this.sheet ? new SelectorMatcher(tree, limits.styleComparisons) : null;
   }
 
   /**
@@ -123,7 +125,7 @@ export class Cascade {
       this.saidGivenUp = true;
       this.log.add('style-limit', () => this.tree.placeOf(element), {
         limit: 'styleComparisons',
-        value: this.styleComparisons,
+        value: this.limits.styleComparisons,
       });
     }
     return inOrder(ruled, inline);
