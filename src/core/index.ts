@@ -21,9 +21,19 @@ export { parseLengthMm } from './geometry/unit.js';
 export { PEN_ON_Z } from './machine/penOnZ.js';
 export type { MachineProfile } from './machine/profile.js';
 export { checkCertificate } from './matching/certificate.js';
-export { type PerfectMatching, type Points, perfectMatching } from './matching/perfectMatching.js';
-export type { Certificate, MatchingProblem } from './matching/problem.js';
+export { improveByExchange } from './matching/exchange.js';
+export { greedyMatching } from './matching/greedy.js';
+export {
+  type MatchingOptions,
+  type PerfectMatching,
+  type Points,
+  perfectMatching,
+  planeProblem,
+} from './matching/perfectMatching.js';
+export type { Certificate, Matching, MatchingProblem } from './matching/problem.js';
 export { type Measure, measureProgram } from './measure/measure.js';
+export { type DrawnGraph, type Retraced, retracedWays } from './metric/retrace.js';
+export { type LiftedMotion, liftedSeconds } from './metric/seconds.js';
 export { type Ordered, orderDrawing as tour, type Written, writeAudited } from './pipeline.js';
 export type { Program } from './program/program.js';
 export { type GcodeReading, type GcodeReadOptions, readGcode } from './program/readGcode.js';
