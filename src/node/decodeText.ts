@@ -2,6 +2,7 @@ import { constants, isUtf8 } from 'node:buffer';
 import { DEFAULT_LIMITS } from '../core/index.js';
 import { firstBadByte } from './firstBadByte.js';
 import { NotText } from './notText.js';
+import { otherKind } from './otherKind.js';
 import { isCompressed, unpack } from './unpack.js';
 
 export { NotText } from './notText.js';
@@ -17,6 +18,8 @@ export { NotText } from './notText.js';
 export function decodeText(file: Uint8Array, unpackedBytes: number = DEFAULT_LIMITS.unpackedBytes): string {
   const bytes = isCompressed(file) ? unpack(file, unpackedBytes) : file;
   if (isCompressed(bytes)) throw new NotText('is compressed twice: unpack it once (gunzip)');
+  const kind = otherKind(bytes);
+  if (kind !== null) throw new NotText(`is not text but ${kind}: export or trace it as SVG first`);
   return decode(bytes, encodingOf(bytes));
 }
 

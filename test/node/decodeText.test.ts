@@ -61,7 +61,7 @@ describe('encodings that are read', () => {
   });
 });
 
-describe('bytes that are no text are refused, with the place', () => {
+describe('bytes that are no text are refused, with their kind or the place', () => {
   test.each([
     [
       'Latin-1 that does not say so',
@@ -78,7 +78,13 @@ describe('bytes that are no text are refused, with the place', () => {
       Buffer.concat([Buffer.from('<?xml version="1.0" encoding="shift_jis"?>\n'), mark(0x82, 0x20)]),
       /SHIFT_JIS: byte 44, in line 2, is 0x20; save it/,
     ],
-    ['a picture', mark(0x89, 0x50, 0x4e, 0x47), /byte 0, in line 1, is 0x89/],
+    ['a PNG', mark(0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a), /^is not text but a PNG picture: .*SVG/],
+    ['a JPEG', mark(0xff, 0xd8, 0xff, 0xe0), /a JPEG picture/],
+    ['a GIF', Buffer.from('GIF89a'), /a GIF picture/],
+    ['a PDF', Buffer.from('%PDF-1.4\n'), /a PDF document/],
+    ['a ZIP', Buffer.from('PK\x03\x04'), /a ZIP archive/],
+    ['a PNG, packed', gzipSync(mark(0x89, 0x50, 0x4e, 0x47, 0x0d)), /a PNG picture/],
+    ['bytes of no known kind', mark(0x89, 0x51, 0x4e, 0x47), /byte 0, in line 1, is 0x89/],
     ['UTF-32 with a mark', mark(0xff, 0xfe, 0, 0, 0x3c, 0, 0, 0), /UTF-32/],
     ['UTF-32 without', mark(0, 0, 0, 0x3c), /UTF-32/],
     ['UTF-32, the other end first', mark(0x3c, 0, 0, 0), /UTF-32/],
