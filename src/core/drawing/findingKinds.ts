@@ -71,6 +71,7 @@ export const READING_FINDINGS = {
   'cut-limit': 'warning', // count: strokes left whole
   'mask-not-applied': 'warning', // mask
   'filter-not-applied': 'note', // filter
+  'blend-mode-not-applied': 'note', // mode
   'dashes-drawn-solid': 'note',
   'too-many-dashes': 'warning', // count: lines drawn solid for it; limit: its name; value
   'fill-drawn-as-outline': 'note',

@@ -108,6 +108,7 @@ const WORDING: Readonly<Record<string, Wording>> = {
   'cut-limit': (v) => `${some(v.count, 'stroke')} not cut at an edge, since it would take too long`,
   'mask-not-applied': (v) => `${some(v.count, 'mask')} not applied: what it hides is drawn whole`,
   'filter-not-applied': (v) => `${some(v.count, 'filter')} not applied`,
+  'blend-mode-not-applied': (v) => `blending (${v.mode}) not applied: lines are drawn as they are${times(v)}`,
   'dashes-drawn-solid': (v) => `${some(v.count, 'dashed line')} drawn solid`,
   'too-many-dashes': (v) => `the dashes of ${some(v.count, 'line')} go ${pastLimit(v)}: drawn solid`,
   'fill-drawn-as-outline': (v) => `${some(v.count, 'filled shape')} drawn as their outline`,

@@ -57,5 +57,6 @@ export const UNREADABLE: readonly (readonly [code: string, id: string | null, li
   ],
   ['motion-path-not-applied', 'e41', `<path id="e41" style="offset-path:path('M0 0h9')" d="M1 1h9"/>`],
   ['style-value-not-read', 'e42', '<path id="e42" style="stroke-width:thick" d="M1 1h9"/>'],
+  ['blend-mode-not-applied', 'e44', '<path id="e44" style="mix-blend-mode:multiply" d="M1 1h9"/>'],
   ['clip-not-applied', 'e43', '<path id="e43" style="clip-path:circle(9px at nonsense)" d="M1 1h9"/>'],
 ];

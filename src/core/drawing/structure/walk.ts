@@ -16,6 +16,8 @@ import { NOT_RENDERED } from './notRendered.js';
 import { hrefOf, isLoop, labelOf } from './references.js';
 import { enterViewport, type UseSize } from './viewport.js';
 
+const NO_BLENDING: ReadonlySet<string> = new Set(['', 'normal', 'inherit', 'initial', 'unset', 'revert']);
+
 /** Elements whose children are being drawn. */
 interface Frame {
   readonly children: readonly (SvgElement | string)[];
@@ -199,6 +201,8 @@ class Walk {
   }
 
   private reportEffects(element: SvgElement, specified: Specified): void {
+    const mode = specified.get('mix-blend-mode')?.trim().toLowerCase() ?? '';
+    if (!NO_BLENDING.has(mode)) this.session.report('blend-mode-not-applied', element, { mode: shown(mode) });
     for (const property of ['mask', 'filter'] as const) {
       const value = specified.get(property)?.trim();
       if (value === undefined || value === '' || ['none', 'inherit', 'initial', 'unset'].includes(value))

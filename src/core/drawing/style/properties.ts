@@ -88,6 +88,7 @@ export const PROPERTIES: ReadonlyMap<string, Property> = new Map([
   ['clip-path', own(anything)],
   ['mask', own(anything)],
   ['filter', own(anything)],
+  ['mix-blend-mode', own(anything)],
   ['transform', own((value) => isTransform('list', value))],
   ['translate', own((value) => isTransform('translate', value))],
   ['rotate', own((value) => isTransform('rotate', value))],
