@@ -121,7 +121,8 @@ const WORDING: Readonly<Record<string, Wording>> = {
     `${some(v.count, 'line')} of no length and without round or square caps: nothing to draw`,
   hidden: (v) => `${some(v.count, 'element')} hidden by display:none, not drawn`,
   'condition-not-met': (v) => `${some(v.count, 'element')} left out because a condition is not met`,
-  invisible: (v) => `${some(v.count, 'element')} invisible (no width, no opacity, or hidden), not drawn`,
+  invisible: (v) =>
+    `${some(v.count, 'element')} invisible (no paint, no width, no opacity, or hidden), not drawn`,
   'flattened-to-nothing': (v) => `${some(v.count, 'element')} scaled to nothing, not drawn`,
   'nothing-to-draw': (v) => `${some(v.count, 'element')} without anything to draw`,
   'unknown-element': (v) => `<${v.name}> is not known and was left out${times(v)}`,

@@ -3,6 +3,7 @@ import { readColour } from './colour.js';
 import { dashWords } from './cssText.js';
 import { type LengthContext, readLength, toUserUnits } from './length.js';
 import { BLACK, NONE, type Paint, readPaint } from './paint.js';
+import { isSeen } from './seen.js';
 
 /** The inherited properties that reading needs, computed for one element. */
 export interface Style {
@@ -172,7 +173,7 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
         return;
       }
       style.colour = colour.hex;
-      style.colourVisible = colour.alpha > 0;
+      style.colourVisible = isSeen(colour.alpha);
     },
   ],
   ['stroke', paintSetter('stroke')],
@@ -231,13 +232,13 @@ const SETTERS: readonly (readonly [string, Setter])[] = [
   ['marker-end', markerSetter(4)],
 ];
 
-/** An opacity as a number or percentage, clamped to 0 to 1; null where it is neither. */
+/** An opacity as a number or percentage, clamped to 0 to 1, 0 where nothing is seen; null where it is neither. */
 export function readOpacity(value: string): number | null {
   const opacity = evaluate(value.trim(), (number, unit) => {
     if (unit !== '' && unit !== '%') return null;
     return { kind: 'number', value: unit === '%' ? number / 100 : number };
   });
-  return opacity && Math.min(1, Math.max(0, opacity.value));
+  return opacity && (isSeen(opacity.value) ? Math.min(1, opacity.value) : 0);
 }
 
 /** px, as browsers take the keywords where nobody has chosen otherwise (CSS Fonts Module Level 4, §2.5). */

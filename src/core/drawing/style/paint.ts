@@ -1,5 +1,6 @@
 import { readColour } from './colour.js';
 import { withBracketsClosed } from './cssText.js';
+import { isSeen } from './seen.js';
 
 /** What a line is drawn or an area filled with, before `currentColor` is looked up. */
 export type Paint =
@@ -47,7 +48,7 @@ export function readPaint(
   }
   const colour = readColour(t.replace(/\s+(?:icc-color|device-\w+)\([^)]*\)\s*$/i, ''));
   if (colour) {
-    return { paint: { kind: 'colour', hex: colour.hex, visible: colour.alpha > 0 }, exact: true };
+    return { paint: { kind: 'colour', hex: colour.hex, visible: isSeen(colour.alpha) }, exact: true };
   }
   return UNEVALUATED.test(t) ? { paint: BLACK, exact: false } : null;
 }
