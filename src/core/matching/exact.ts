@@ -11,6 +11,7 @@ import { Pricer } from './pricing.js';
 import type { CertifiedMatching, MatchingProblem } from './problem.js';
 import { makeRoom } from './repair.js';
 import { contractPlaces, firstDuals, raiseExposed } from './start.js';
+import { augmentTight } from './tight.js';
 
 /** Bits of the largest cost; the rest of 53 is room for duals to grow beyond it. Fewer where that is too little. */
 const COST_BITS = [43, 33, 23, 13];
@@ -56,6 +57,7 @@ function solve(
   firstDuals(f, placed);
   contractPlaces(f, layout, costs);
   raiseExposed(f);
+  augmentTight(f);
   let exposed = exposedSets(f);
   const watch = watchOf(options, exposed.length);
   const nests = roomForNests(f);
