@@ -57,14 +57,15 @@ function solve(
   firstDuals(f, placed);
   contractPlaces(f, layout, costs);
   raiseExposed(f);
-  augmentTight(f);
+  let ties = augmentTight(f);
   let exposed = exposedSets(f);
   const watch = watchOf(options, exposed.length);
   const nests = roomForNests(f);
   const missed = new EdgeList();
   const pricer = new Pricer(f, layout, costs, nests, missed);
   for (;;) {
-    if (!matchExposed(f, exposed, watch)) return 'stopped';
+    if (!matchExposed(f, exposed, watch, ties)) return 'stopped';
+    ties = false;
     readNests(f, nests);
     missed.count = 0;
     pricer.priceAllPairs();

@@ -5,11 +5,12 @@ import { shrink } from './shrink.js';
 
 /**
  * Grows one alternating tree from an exposed set until it reaches another exposed set and the matching is
- * augmented (true), or until more than `limit` sets are in it (false). Changes of duals and new blossoms are
- * kept either way. One tree at a time: every event then falls on a whole number, since costs are even and
- * all vertices of the tree have duals of one parity.
+ * augmented, or until more than `limit` sets are in it; with `handOver` also until it closes an odd cycle, which
+ * becomes the exposed set in place of the root. Changes of duals and new blossoms are kept either way. Returns a
+ * vertex of the set that is left exposed, −1 where the matching was augmented. One tree at a time: every event
+ * then falls on a whole number, since costs are even and all vertices of the tree have duals of one parity.
  */
-export function search(f: Forest, root: number, limit: number): boolean {
+export function search(f: Forest, root: number, limit: number, handOver: boolean): number {
   const { clock, events } = f;
   f.round++;
   f.labelled = 1;
@@ -18,8 +19,9 @@ export function search(f: Forest, root: number, limit: number): boolean {
   events.clear();
   clock[TIME] = 0;
   clock[BEST] = Number.POSITIVE_INFINITY;
+  const start = f.firstVertex[f.node[root]];
   join(f, root, 1);
-  scanGrown(f, f.firstVertex[f.node[root]], f.lastVertex[f.node[root]], root);
+  scanGrown(f, start, f.lastVertex[f.node[root]], root);
   for (;;) {
     const now = events.minKey();
     if (now >= clock[BEST]) {
@@ -28,38 +30,50 @@ export function search(f: Forest, root: number, limit: number): boolean {
       clock[TIME] = clock[BEST];
       augment(f);
       leave(f);
-      return true;
+      return -1;
     }
     clock[TIME] = now;
     if (f.labelled > limit) {
       leave(f);
-      return false;
+      return start;
     }
     events.pop();
-    happen(f, events.b);
+    const formed = happen(f, events.b);
+    if (handOver && formed >= 0) {
+      exposeInstead(f, f.set[formed]);
+      leave(f);
+      return formed;
+    }
   }
 }
 
-/** An event is due; one that later changes have overtaken shows by the slack that is left, and is dropped. */
-function happen(f: Forest, what: number): void {
+/**
+ * An event is due; one that later changes have overtaken shows by the slack that is left, and is dropped. Returns
+ * a vertex of the blossom formed, −1 where none was.
+ */
+function happen(f: Forest, what: number): number {
   const { set, sign, node, pi, off, clock } = f;
   const time = clock[TIME];
   if (what < 0) {
     const s = set[~what];
     if (sign[s] < 0 && node[s] >= f.n && f.z[node[s]] === 2 * time) expand(f, s);
-    return;
+    return -1;
   }
   const { tail, head, cost } = f.graph;
   const v = tail[what];
   const w = head[what];
   const s = set[v];
   const r = set[w];
-  if (s === r || sign[s] + sign[r] <= 0) return;
+  if (s === r || sign[s] + sign[r] <= 0) return -1;
   const slack = cost[what] - pi[v] - off[s] - pi[w] - off[r] - (sign[s] + sign[r]) * time;
-  if (slack !== 0) return;
-  if (sign[s] === sign[r]) shrink(f, v, w);
-  else if (sign[s] > 0) grow(f, v, w);
+  if (slack !== 0) return -1;
+  if (sign[s] === sign[r]) {
+    shrink(f, v, w);
+    return v;
+  }
+  if (sign[s] > 0) grow(f, v, w);
   else grow(f, w, v);
+  return -1;
 }
 
 /** The tree takes in the set of w along the tight edge u–w, and that set's mate. */
@@ -103,5 +117,23 @@ function augment(f: Forest): void {
     u = parentEnd[m];
     mateIn[m] = w;
     mateOut[m] = u;
+  }
+}
+
+/** Swaps matched and unmatched edges on the way from a grown set back to the root: it is exposed instead. */
+function exposeInstead(f: Forest, s: number): void {
+  const { set, mateIn, mateOut, parentEnd, childEnd } = f;
+  let before = mateOut[s];
+  mateIn[s] = -1;
+  mateOut[s] = -1;
+  while (before >= 0) {
+    const m = set[before];
+    const u = parentEnd[m];
+    const r = set[u];
+    before = mateOut[r];
+    mateIn[m] = childEnd[m];
+    mateOut[m] = u;
+    mateIn[r] = u;
+    mateOut[r] = childEnd[m];
   }
 }

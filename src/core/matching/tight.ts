@@ -11,8 +11,9 @@ const WORTH = 1 / 5;
  * shortest alternating way to another, breadth first, odd cycles and blossoms passed over. Where there are none
  * this is all that tight edges give (Kuhn 1955), and a tree that found no way out need not be entered again; it
  * is not anywhere, for the search proper takes up what is left. Pays on lattices, where nearly all edges are tight.
+ * False where it was given up, for few are.
  */
-export function augmentTight(f: Forest): void {
+export function augmentTight(f: Forest): boolean {
   const { n, node, set, mateOut } = f;
   const seen = new Uint8Array(n);
   const from = new Int32Array(n);
@@ -23,8 +24,9 @@ export function augmentTight(f: Forest): void {
     if (mateOut[set[v]] >= 0 || node[set[v]] >= n || seen[v] !== 0) continue;
     trees++;
     if (reach(f, v, seen, from, queue)) found++;
-    if (trees >= TRIAL && found < WORTH * trees) return;
+    if (trees >= TRIAL && found < WORTH * trees) return false;
   }
+  return found > 0 && found >= WORTH * trees;
 }
 
 /** Grows a tree from an exposed vertex; true where it found another one and both are matched now. */
