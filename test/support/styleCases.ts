@@ -255,7 +255,7 @@ export const STYLE_CASES: Readonly<Record<string, string>> = {
       'opacity:nope',
       'stroke-opacity:0%',
     ],
-    ...['stroke-opacity:1e-3', 'opacity:0;opacity:1', 'stroke-opacity:calc(0*1)'],
+    ...['stroke-opacity:1e-2', 'opacity:0;opacity:1', 'stroke-opacity:calc(0*1)'],
   ),
   'stroke-width in all its forms': styles(
     ...[
