@@ -110,27 +110,39 @@ function one(kind, n) {
   const random = createRandom(1);
   for (let i = 0; i < doubles.length; i++) doubles[i] = random();
   const [, sort] = cpu(() => doubles.sort());
-  const peakMb = process.resourceUsage().maxRSS / 1024;
-  return { segments: drawing.strokes.segments.count, edges: network.edgeCount, seconds, sort, peakMb };
+  return { segments: drawing.strokes.segments.count, edges: network.edgeCount, seconds, sort };
 }
 
-const [first, second] = process.argv.slice(2);
-if (first in KINDS) console.log(JSON.stringify(one(first, Number(second))));
-else {
+/** The peak of a process that builds the network once and does nothing else, MB. */
+function peakOfWhole(kind, n) {
+  const drawing = drawingOf(kind, n);
+  const all = Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i);
+  const network = buildNetwork(drawing, all, OPTIONS);
+  return { edges: network.edgeCount, peakMb: process.resourceUsage().maxRSS / 1024 };
+}
+
+const [first, second, third] = process.argv.slice(2);
+if (first in KINDS) {
+  console.log(JSON.stringify(third ? peakOfWhole(first, Number(second)) : one(first, Number(second))));
+} else {
   const sizes = process.argv.slice(2).map(Number);
   for (const kind of Object.keys(KINDS)) {
     let before = null;
     for (const n of sizes.length > 0 ? sizes : [10_000, 100_000, 1_000_000]) {
-      const out = execFileSync(process.execPath, [fileURLToPath(import.meta.url), kind, `${n}`], {
-        encoding: 'utf8',
-      });
-      const now = JSON.parse(out);
+      const run = (...more) =>
+        JSON.parse(
+          execFileSync(process.execPath, [fileURLToPath(import.meta.url), kind, `${n}`, ...more], {
+            encoding: 'utf8',
+          }),
+        );
+      const now = run();
+      const { peakMb } = run('whole');
       const stages = Object.entries(now.seconds).map(([name, s]) => `${name} ${s.toFixed(2)}`);
       const grows = before
         ? `, ${(now.seconds.whole / before.seconds.whole).toFixed(1)} times the size before`
         : '';
       console.log(
-        `${kind} ${now.segments} segments, ${now.edges} edges: ${stages.join(', ')} s; sort ${now.sort.toFixed(2)} s; peak ${now.peakMb.toFixed(0)} MB${grows}`,
+        `${kind} ${now.segments} segments, ${now.edges} edges: ${stages.join(', ')} s; sort ${now.sort.toFixed(2)} s; peak ${peakMb.toFixed(0)} MB${grows}`,
       );
       before = now;
     }

@@ -9,13 +9,22 @@ import { flattenSegment } from '../geometry/flatten.js';
  */
 export interface Pieces {
   readonly count: number;
+  readonly stroke: Uint32Array;
+  readonly segment: Uint32Array;
+  readonly t0: Float64Array;
+  readonly t1: Float64Array;
+  readonly index: Flatbush | null;
+  /** How far a curve may lie from its chord, mm: boxes must be searched that much wider. */
+  readonly chordErrorMm: number;
+}
+
+/** Chords as they come, and how far each reaches in x and y together. */
+interface RawPieces {
   readonly stroke: number[];
   readonly segment: number[];
   readonly t0: number[];
   readonly t1: number[];
-  readonly index: Flatbush | null;
-  /** How far a curve may lie from its chord, mm: boxes must be searched that much wider. */
-  readonly chordErrorMm: number;
+  readonly spread: number[];
 }
 
 /**
@@ -23,11 +32,14 @@ export interface Pieces {
  * again, because a long diagonal box answers every search; this adds at most a quarter more pieces.
  */
 export function cutIntoPieces(drawing: Drawing, strokes: Uint32Array, chordErrorMm: number): Pieces {
+  const columns = evenedOut(chordsOf(drawing, strokes, chordErrorMm));
+  return { ...columns, index: indexOf(columns, drawing), chordErrorMm };
+}
+
+function chordsOf(drawing: Drawing, strokes: Uint32Array, chordErrorMm: number): RawPieces {
   const { first, dot, segments } = drawing.strokes;
+  const raw: RawPieces = { stroke: [], segment: [], t0: [], t1: [], spread: [] };
   const at = new Float64Array(2);
-  const raw = { stroke: [] as number[], segment: [] as number[], t0: [] as number[], t1: [] as number[] };
-  const spread: number[] = [];
-  let total = 0;
   for (const s of strokes) {
     if (dot[s]) continue;
     for (let i = first[s]; i < first[s + 1]; i++) {
@@ -40,41 +52,54 @@ export function cutIntoPieces(drawing: Drawing, strokes: Uint32Array, chordError
         raw.segment.push(i);
         raw.t0.push(t0);
         raw.t1.push(t);
-        const size = Math.abs(x - x0) + Math.abs(y - y0);
-        spread.push(size);
-        total += size;
+        raw.spread.push(Math.abs(x - x0) + Math.abs(y - y0));
         x0 = x;
         y0 = y;
         t0 = t;
       });
     }
   }
+  return raw;
+}
+
+type Columns = Omit<Pieces, 'index' | 'chordErrorMm'>;
+
+function evenedOut(raw: RawPieces): Columns {
+  const { spread } = raw;
+  let total = 0;
+  for (const size of spread) total += size;
   const longest = (4 * total) / Math.max(1, spread.length);
-  const stroke: number[] = [];
-  const segment: number[] = [];
-  const t0: number[] = [];
-  const t1: number[] = [];
+  const partsOf = (p: number): number => (longest > 0 ? Math.max(1, Math.ceil(spread[p] / longest)) : 1);
+  let count = 0;
+  for (let p = 0; p < spread.length; p++) count += partsOf(p);
+  const stroke = new Uint32Array(count);
+  const segment = new Uint32Array(count);
+  const t0 = new Float64Array(count);
+  const t1 = new Float64Array(count);
+  let at = 0;
   for (let p = 0; p < spread.length; p++) {
-    const parts = longest > 0 ? Math.max(1, Math.ceil(spread[p] / longest)) : 1;
+    const parts = partsOf(p);
     const step = (raw.t1[p] - raw.t0[p]) / parts;
-    for (let k = 0; k < parts; k++) {
-      stroke.push(raw.stroke[p]);
-      segment.push(raw.segment[p]);
-      t0.push(raw.t0[p] + k * step);
-      t1.push(k === parts - 1 ? raw.t1[p] : raw.t0[p] + (k + 1) * step);
+    for (let k = 0; k < parts; k++, at++) {
+      stroke[at] = raw.stroke[p];
+      segment[at] = raw.segment[p];
+      t0[at] = raw.t0[p] + k * step;
+      t1[at] = k === parts - 1 ? raw.t1[p] : raw.t0[p] + (k + 1) * step;
     }
   }
-  const count = stroke.length;
-  let index: Flatbush | null = null;
-  if (count > 0) {
-    index = new Flatbush(count);
-    const ends = new Float64Array(4);
-    for (let p = 0; p < count; p++) {
-      chordEnds(segments, segment[p], t0[p], t1[p], ends);
-      const [x0, y0, x1, y1] = ends;
-      index.add(Math.min(x0, x1), Math.min(y0, y1), Math.max(x0, x1), Math.max(y0, y1));
-    }
-    index.finish();
+  return { count, stroke, segment, t0, t1 };
+}
+
+function indexOf({ count, segment, t0, t1 }: Columns, drawing: Drawing): Flatbush | null {
+  if (count === 0) return null;
+  const { segments } = drawing.strokes;
+  const ends = new Float64Array(4);
+  const index = new Flatbush(count);
+  for (let p = 0; p < count; p++) {
+    chordEnds(segments, segment[p], t0[p], t1[p], ends);
+    const [x0, y0, x1, y1] = ends;
+    index.add(Math.min(x0, x1), Math.min(y0, y1), Math.max(x0, x1), Math.max(y0, y1));
   }
-  return { count, stroke, segment, t0, t1, index, chordErrorMm };
+  index.finish();
+  return index;
 }
