@@ -62,7 +62,7 @@ export function orderDrawing(
   const without = orderOnce(drawing, { ...settings, junctions: 'touching' }, profile, hooks);
   const crossed = orderOnce(drawing, settings, profile, hooks);
   const count = crossed.networks.reduce((sum, network) => sum + network.crossings, 0);
-  const kept = pays(crossed.after.measure, without.after.measure, settings);
+  const kept = count > 0 && pays(crossed.after.measure, without.after.measure, settings);
   const crossings = { count, without: without.after.measure, with: crossed.after.measure, kept };
   return { ...(kept ? crossed : without), settings, crossings };
 }
