@@ -1,11 +1,11 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { buildNetwork } from '../../../src/core/network/buildNetwork.ts';
 import { ClosedWalk } from '../../../src/core/tour/closedWalk.ts';
 import { improveWalk } from '../../../src/core/tour/improve.ts';
 import { delaunayPairs, nearVertices } from '../../../src/core/tour/nearPairs.ts';
-import { type TourGraph, withHome } from '../../../src/core/tour/problem.ts';
-import { drawingOf, type StrokeSpec } from '../../support/drawings.ts';
+import type { TourGraph } from '../../../src/core/tour/problem.ts';
+import type { StrokeSpec } from '../../support/drawings.ts';
+import { graphOf } from '../../support/tourGraphs.ts';
 
 const strokes: fc.Arbitrary<StrokeSpec[]> = fc.array(
   fc.oneof(
@@ -19,18 +19,7 @@ const strokes: fc.Arbitrary<StrokeSpec[]> = fc.array(
   { minLength: 2, maxLength: 14 },
 );
 
-function graphOf(specs: readonly StrokeSpec[], end: 'home' | 'anywhere'): TourGraph {
-  const drawing = drawingOf(specs);
-  const all = Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i);
-  const network = buildNetwork(drawing, all, {
-    snapMm: 0.05,
-    accuracyMm: 0.02,
-    junctions: 'touching',
-    repeats: 'keep',
-    repeatToleranceMm: 0.01,
-  });
-  return withHome(network, { homeX: -3, homeY: 7, end, weigh: (d) => d });
-}
+const HOME = { homeX: -3, homeY: 7 };
 
 /** The walk in document order, home first. */
 function inOrder(graph: TourGraph): Int32Array {
@@ -47,7 +36,7 @@ describe('a closed walk', () => {
   test('an exchange changes the cost by what it says, keeps every edge, and can be taken back', () => {
     fc.assert(
       fc.property(strokes, fc.infiniteStream(fc.nat()), (specs, stream) => {
-        const graph = graphOf(specs, 'home');
+        const graph = graphOf(specs, { ...HOME, end: 'home' });
         const walk = new ClosedWalk(graph, inOrder(graph));
         const start = walk.totalCost();
         const before = Array.from(walk.order);
@@ -73,7 +62,7 @@ describe('a closed walk', () => {
   test('improving keeps every edge, never makes the walk longer, and the seed decides the bytes', () => {
     fc.assert(
       fc.property(strokes, fc.constantFrom('home' as const, 'anywhere' as const), (specs, end) => {
-        const graph = graphOf(specs, end);
+        const graph = graphOf(specs, { ...HOME, end });
         const near = nearVertices(graph, delaunayPairs(graph), 8);
         const order = inOrder(graph);
         const effort = { kicksPerEnd: 5, seed: 7, shouldStop: () => false, onProgress: () => {} };
@@ -89,7 +78,7 @@ describe('a closed walk', () => {
 
   test('told to stop, it stops and still returns a whole walk', () => {
     const specs = Array.from({ length: 60 }, (_, i): StrokeSpec => ({ dot: [(i * 37) % 41, (i * 17) % 43] }));
-    const graph = graphOf(specs, 'home');
+    const graph = graphOf(specs, { ...HOME, end: 'home' });
     const near = nearVertices(graph, delaunayPairs(graph), 8);
     const order = inOrder(graph);
     const effort = { kicksPerEnd: 1e6, seed: 1, shouldStop: () => true, onProgress: () => {} };

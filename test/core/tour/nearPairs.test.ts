@@ -1,24 +1,13 @@
 import { describe, expect, test } from 'vitest';
-import { buildNetwork } from '../../../src/core/network/buildNetwork.ts';
 import { delaunayPairs } from '../../../src/core/tour/nearPairs.ts';
-import { type TourGraph, withHome } from '../../../src/core/tour/problem.ts';
+import type { TourGraph } from '../../../src/core/tour/problem.ts';
 import { componentTree, connectorsCost } from '../../../src/core/tour/spanningTree.ts';
-import { drawingOf, type StrokeSpec } from '../../support/drawings.ts';
+import type { StrokeSpec } from '../../support/drawings.ts';
+import { graphOf } from '../../support/tourGraphs.ts';
 
 type Point = readonly [number, number];
 
-function graphOf(specs: readonly StrokeSpec[]): TourGraph {
-  const drawing = drawingOf(specs);
-  const all = Uint32Array.from({ length: drawing.strokes.count }, (_, i) => i);
-  const network = buildNetwork(drawing, all, {
-    snapMm: 0.05,
-    accuracyMm: 0.02,
-    junctions: 'touching',
-    repeats: 'keep',
-    repeatToleranceMm: 0.01,
-  });
-  return withHome(network, { homeX: 0, homeY: 100, end: 'home', weigh: (d) => d });
-}
+const HOME = { homeX: 0, homeY: 100, end: 'home' } as const;
 
 /** Pieces of a line with gaps of their length between them, as a pattern of dashes cuts it. */
 function dashed([x0, y0]: Point, [x1, y1]: Point, pieces: number): StrokeSpec[] {
@@ -64,7 +53,7 @@ describe('neighbours in a drawing', () => {
     ['on a slope', [1, 2], [90.3, 33.7]],
   ])('hold a least tree of the dashes of a line %s', (_, from, to) => {
     for (let pieces = 2; pieces < 80; pieces += 7) {
-      const graph = graphOf(dashed(from, to, pieces));
+      const graph = graphOf(dashed(from, to, pieces), HOME);
       const tree = componentTree(graph, delaunayPairs(graph));
       expect(tree.length / 2).toBe(pieces - 1);
       expect(connectorsCost(graph, tree)).toBeCloseTo(leastTree(graph), 9);
@@ -77,7 +66,7 @@ describe('neighbours in a drawing', () => {
       ...dashed([5, 1], [5, 30], 9),
       { dot: [70, 71] as const },
     ];
-    const graph = graphOf(specs);
+    const graph = graphOf(specs, HOME);
     const tree = componentTree(graph, delaunayPairs(graph));
     expect(tree.length / 2).toBe(graph.componentCount - 2);
     expect(connectorsCost(graph, tree)).toBeCloseTo(leastTree(graph), 9);

@@ -1,12 +1,13 @@
 import type { Column } from '../column.js';
-import { Unreadable } from '../findingLog.js';
+import type { Unreadable } from '../findingLog.js';
 import type { ReadingLimits } from '../readingLimits.js';
 import { AttributeDefaults } from './attributeDefaults.js';
 import type { AttributeTable } from './attributeTable.js';
 import { readDoctype } from './doctype.js';
 import { readBeginning } from './documentBeginning.js';
-import { type Decoded, Entities, referenceAt, shownReference } from './entities.js';
+import { Entities, referenceAt, shownReference } from './entities.js';
 import type { MarkupLexer } from './markupLexer.js';
+import { reportReferences, withPlace } from './referencePlaces.js';
 import type { SkeletonWriter } from './skeleton.js';
 import { isBlank } from './xmlCharacters.js';
 
@@ -90,16 +91,20 @@ class MarkupScan {
     let from = 0;
     for (let at = raw.indexOf('&'); at >= 0; at = raw.indexOf('&', at)) {
       const reference = referenceAt(raw, at);
-      const value = this.guarded(offset + at, () => reference && this.entities.resolve(reference.name));
+      const value = withPlace(
+        this.lexer,
+        offset + at,
+        () => reference && this.entities.resolve(reference.name),
+      );
       if (!reference || !value) {
-        this.report({ unknown: shownReference(raw, at), external: null }, offset + at);
+        reportReferences(this.lexer, { unknown: shownReference(raw, at), external: null }, offset + at);
         at++;
         continue;
       }
       this.pendingText += raw.slice(from, at);
       if (value.markup === null) this.pendingText += value.text;
       else this.expand(reference.name, offset + at);
-      this.report(value, offset + at);
+      reportReferences(this.lexer, value, offset + at);
       at = from = reference.end;
     }
     this.pendingText += raw.slice(from);
@@ -109,7 +114,7 @@ class MarkupScan {
   private expand(name: string, offset: number): void {
     const { lexer, entities, floor } = this;
     const text = entities.replacementOf(name) ?? '';
-    this.guarded(offset, () => {
+    withPlace(this.lexer, offset, () => {
       entities.enter(name);
       entities.spend(name, text.length);
     });
@@ -263,10 +268,10 @@ class MarkupScan {
   }
 
   private decodeValue(raw: string, start: number, bad: (why: string) => Unreadable): string {
-    const value = this.guarded(start, () => this.entities.decode(raw));
+    const value = withPlace(this.lexer, start, () => this.entities.decode(raw));
     // XML 1.0 §3.1, "No < in Attribute Values": not through an entity either.
     if (value.markup !== null) throw bad('less-than');
-    this.report(value, start);
+    reportReferences(this.lexer, value, start);
     return value.text;
   }
 
@@ -277,25 +282,8 @@ class MarkupScan {
     const { attributes } = this.out;
     for (const [attribute, value] of values) {
       const number = attributes.numberOf(attribute);
-      this.guarded(start, () => this.entities.spend(attribute, value.length + attribute.length));
+      withPlace(this.lexer, start, () => this.entities.spend(attribute, value.length + attribute.length));
       if (!attributes.isRepeated(number)) attributes.addDecoded(number, value);
-    }
-  }
-
-  private report(value: Pick<Decoded, 'unknown' | 'external'>, offset: number): void {
-    const { log } = this.lexer;
-    const place = () => this.lexer.placeAt(offset);
-    if (value.unknown !== null) log.add('unknown-entity', place, { entity: value.unknown });
-    if (value.external !== null) log.add('external-entity', place, { entity: `&${value.external};` });
-  }
-
-  /** What entities refuse has the place of the reference. */
-  private guarded<T>(offset: number, work: () => T): T {
-    try {
-      return work();
-    } catch (error) {
-      if (!(error instanceof Unreadable)) throw error;
-      throw new Unreadable(error.code, error.place ?? this.lexer.placeAt(offset), error.values);
     }
   }
 }
